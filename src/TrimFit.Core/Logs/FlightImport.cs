@@ -1,0 +1,6 @@
+namespace TrimFit.Core.Logs;
+
+/// <summary>A flight with the account of how it was read.</summary>
+/// <param name="Flight">The columns.</param>
+/// <param name="Diagnostics">What was read, left out and inferred.</param>
+public sealed record FlightImport(FlightLog Flight, ImportDiagnostics Diagnostics);

@@ -1,0 +1,67 @@
+using System.Collections.Immutable;
+
+namespace TrimFit.Core.Logs;
+
+/// <summary>One flight as columns over one clock: every channel has one value per time stamp, NaN where its logger recorded nothing.</summary>
+/// <remarks>Loggers of different rates share the union of their time stamps, so a slow channel is NaN between its samples; nothing is
+/// resampled. Values are SI (<see cref="ChannelRoles.UnitOf"/>), body axes x forward, y right, z down, positive to the pilot's right.</remarks>
+public sealed class FlightLog
+{
+    private readonly double[] _timeSec;
+    private readonly Dictionary<ChannelRole, double[]> _channels;
+
+    private FlightLog(double[] timeSec, Dictionary<ChannelRole, double[]> channels, FlightLogOptions options)
+    {
+        _timeSec = timeSec;
+        _channels = channels;
+        StartUtc = options.StartUtc;
+        BrakeUnit = options.BrakeUnit;
+        TrimmerUnit = options.TrimmerUnit;
+        GyroDelaySec = options.GyroDelaySec;
+    }
+
+    /// <summary>Seconds since <see cref="StartUtc"/> or since the first sample; finite and strictly increasing.</summary>
+    public ReadOnlySpan<double> TimeSec => _timeSec;
+
+    /// <summary>Number of time stamps.</summary>
+    public int Count => _timeSec.Length;
+
+    /// <summary>Absolute time of <c>TimeSec = 0</c>; null when no logger knew the date.</summary>
+    public DateTimeOffset? StartUtc { get; }
+
+    /// <summary>Unit of the brake channels.</summary>
+    public ControlUnit BrakeUnit { get; }
+
+    /// <summary>Unit of the trimmer channels.</summary>
+    public ControlUnit TrimmerUnit { get; }
+
+    /// <summary>Known delay of the gyro behind the GPS, s; 0 when none was found.</summary>
+    public double GyroDelaySec { get; }
+
+    /// <summary>Roles that have a column with at least one value, in the order of <see cref="ChannelRole"/>.</summary>
+    public ImmutableArray<ChannelRole> Roles => [.. _channels.Keys.Order()];
+
+    /// <summary>Whether the role has a column.</summary>
+    public bool Has(ChannelRole role) => _channels.ContainsKey(role);
+
+    /// <summary>The column of a role, in its SI unit, NaN where nothing was recorded; empty when the log has no such column.</summary>
+    public ReadOnlySpan<double> this[ChannelRole role] => _channels.TryGetValue(role, out double[]? column) ? column : [];
+
+    /// <summary>Copies columns into a log. Columns without a single finite value are left away.</summary>
+    /// <exception cref="ArgumentException">Times are not finite and increasing, or a column has another length or an infinite value.</exception>
+    public static FlightLog Create(ReadOnlySpan<double> timeSec, IEnumerable<KeyValuePair<ChannelRole, double[]>> channels, FlightLogOptions? options = null)
+    {
+        ArgumentNullException.ThrowIfNull(channels);
+        Guard.StrictlyIncreasing(timeSec);
+        var copied = new Dictionary<ChannelRole, double[]>();
+        foreach ((ChannelRole role, double[] column) in channels)
+        {
+            Guard.SameLength(timeSec, column, ChannelRoles.NameOf(role));
+            if (column.AsSpan().ContainsAnyInfinite())
+                throw new ArgumentException("holds an infinite value", ChannelRoles.NameOf(role));
+            if (column.AsSpan().ContainsAnyFinite())
+                copied[role] = [.. column];
+        }
+        return new(timeSec.ToArray(), copied, options ?? new());
+    }
+}

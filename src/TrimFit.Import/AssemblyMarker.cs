@@ -1,0 +1,3 @@
+namespace TrimFit.Import;
+
+internal static class AssemblyMarker;

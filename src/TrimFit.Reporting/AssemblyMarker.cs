@@ -1,0 +1,3 @@
+namespace TrimFit.Reporting;
+
+internal static class AssemblyMarker;

@@ -1,0 +1,3 @@
+namespace TrimFit.Simulation;
+
+internal static class AssemblyMarker;
