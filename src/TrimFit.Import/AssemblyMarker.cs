@@ -1,3 +1,0 @@
-namespace TrimFit.Import;
-
-internal static class AssemblyMarker;
