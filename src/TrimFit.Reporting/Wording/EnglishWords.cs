@@ -82,6 +82,7 @@ internal sealed record EnglishWords : Words
         Format = "format",
         RowsRead = "rows",
         RowsLeftOut = "left out",
+        ClockShift = "clock moved by s",
         Columns = "Columns",
         Column = "column",
         Role = "role",
@@ -123,7 +124,6 @@ internal sealed record EnglishWords : Words
         RearHangPoints = "rear harness hang points",
         Cg = "CG",
         FlightDirection = "flight",
-        Propeller = "propeller",
         Now = "now",
         After = "after",
         TurnPlot = "Turn rate against thrust",
@@ -378,6 +378,13 @@ internal sealed record EnglishWords : Words
         "filter_error" => "filter-error maximum likelihood",
         "steady_windows" => "regression on steady windows",
         _ => method.Replace('_', ' '),
+    };
+
+    public override string Propeller(PropellerRotation rotation) => rotation switch
+    {
+        PropellerRotation.Clockwise => "propeller: clockwise seen from behind",
+        PropellerRotation.CounterClockwise => "propeller: counter-clockwise seen from behind",
+        PropellerRotation.ContraRotating => "propellers: contra-rotating",
     };
 
     public override string Twist(TwistDirection direction) => direction switch

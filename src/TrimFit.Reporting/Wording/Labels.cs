@@ -70,6 +70,7 @@ internal sealed record Labels
     public required string Format { get; init; }
     public required string RowsRead { get; init; }
     public required string RowsLeftOut { get; init; }
+    public required string ClockShift { get; init; }
     public required string Columns { get; init; }
     public required string Column { get; init; }
     public required string Role { get; init; }
@@ -111,7 +112,6 @@ internal sealed record Labels
     public required string RearHangPoints { get; init; }
     public required string Cg { get; init; }
     public required string FlightDirection { get; init; }
-    public required string Propeller { get; init; }
     public required string Now { get; init; }
     public required string After { get; init; }
     public required string TurnPlot { get; init; }

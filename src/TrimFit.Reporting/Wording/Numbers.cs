@@ -47,6 +47,13 @@ internal sealed class Numbers
         return decimals is >= 0 and <= 8 ? Plain(value, decimals) : value.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), _format);
     }
 
+    /// <summary>A number on an axis.</summary>
+    public string Tick(double value)
+    {
+        double rounded = Math.Round(value, 6); // the axis adds steps up, which leaves dust such as 1E-17 where zero is meant
+        return (rounded == 0 ? 0 : rounded).ToString("0.######", _format);
+    }
+
     public string Integer(long value) => value.ToString("D", _format);
 
     public string Rate(double radPerSec) => RateNumber(radPerSec) + " deg/s";
@@ -58,7 +65,8 @@ internal sealed class Numbers
     public string LengthNumber(double m) => Imperial ? Plain(m / PhysicalConstants.MetersPerInch, 2) : Plain(m * 1000, 0);
 
     public string Force(double n) => ForceNumber(n) + " " + ForceUnit;
-    public string ForceNumber(double n) => Plain(Imperial ? n / PhysicalConstants.NewtonsPerPoundForce : n, 0);
+    public string ForceNumber(double n) => Plain(ForceValue(n), 0);
+    public double ForceValue(double n) => Imperial ? n / PhysicalConstants.NewtonsPerPoundForce : n;
     public string Mass(double kg) => MassNumber(kg) + " " + MassUnit;
     public string MassNumber(double kg) => Plain(Imperial ? kg / KilogramsPerPound : kg, 1);
     public string Speed(double mPerSec) => Plain(Imperial ? mPerSec / MetersPerMile * 3600 : mPerSec, 1) + " " + SpeedUnit;

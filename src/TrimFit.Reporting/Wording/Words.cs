@@ -69,6 +69,9 @@ internal abstract record Words
     /// <summary>Name of a method of the turn model.</summary>
     public abstract string Method(string method);
 
+    /// <summary>How the propeller turns.</summary>
+    public abstract string Propeller(PropellerRotation rotation);
+
     /// <summary>Twist direction.</summary>
     public abstract string Twist(TwistDirection direction);
 
