@@ -261,6 +261,16 @@ public enum FindingCode
     FewThrustLevels,
     /// <summary>The wing turns by itself or the brakes rest unevenly: no more can be said from one flight.</summary>
     ConstantPullSource,
+    /// <summary>Speed of rotation at full power is not given; the largest in the log stands in: rev/s.</summary>
+    FullPowerSpeedAssumed,
+    /// <summary>No throttle table: thrust is taken as proportional to throttle.</summary>
+    ThrottleTakenAsThrust,
+    /// <summary>The gyro's unit was wrong by this factor against the GPS turn and was corrected: factor.</summary>
+    GyroUnitCorrected,
+    /// <summary>Gyro scale against the GPS turn is off: slope.</summary>
+    GyroScaleOff,
+    /// <summary>No GPS and no compass: which way the yaw rate turns is taken on trust.</summary>
+    YawSignUnconfirmed,
     /// <summary>A step ending on the wrong side is likelier than 10 %: probability.</summary>
     WrongSideLikely,
 }
