@@ -127,7 +127,7 @@ public sealed record AdjustmentReport
     public required ImmutableArray<PullAtSetting> TurnLeftAt { get; init; }
     /// <summary>Inside the rig's limits; null when the rig gives none.</summary>
     public bool? WithinLimits { get; init; }
-    /// <summary>Probability that the rounded travel ends on the wrong side.</summary>
+    /// <summary>Probability that the first step already ends past the null.</summary>
     public required double ProbabilityWrongSide { get; init; }
     /// <summary>Things to say about this adjustment.</summary>
     public ImmutableArray<Finding> Notes { get; init; } = [];
@@ -271,6 +271,8 @@ public enum FindingCode
     GyroScaleOff,
     /// <summary>No GPS and no compass: which way the yaw rate turns is taken on trust.</summary>
     YawSignUnconfirmed,
+    /// <summary>The first step would be smaller than the step this part moves in: that step, m.</summary>
+    FirstStepTooSmall,
     /// <summary>A step ending on the wrong side is likelier than 10 %: probability.</summary>
     WrongSideLikely,
 }

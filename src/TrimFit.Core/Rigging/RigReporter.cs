@@ -83,6 +83,6 @@ public static class RigReporter
         RiserLoadRightN = state.RiserLoadRightN,
         TwistRad = state.TwistRad,
         TwistRatio = Math.Abs(state.TwistSine),
-        TwistRatioHigh95 = Quantiles.Type7(ratios, 0.975),
+        TwistRatioHigh95 = QuantileType7.Of(ratios, 0.975),
     };
 }

@@ -1,5 +1,4 @@
 using TrimFit.Core.Statistics;
-using TrimFit.Core.Units;
 
 namespace TrimFit.Core.Rigging;
 

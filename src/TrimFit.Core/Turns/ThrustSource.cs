@@ -2,7 +2,6 @@ using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
-using TrimFit.Core.Units;
 
 namespace TrimFit.Core.Turns;
 
@@ -42,7 +41,7 @@ internal sealed class ThrustSource
             double full = propeller.FullPowerRevPerSec ?? 0;
             if (!(full > 0))
             {
-                full = Quantiles.Type7([.. speed.Where(double.IsFinite)], 0.995); // one spike must not set the scale
+                full = QuantileType7.Of([.. speed.Where(double.IsFinite)], 0.995); // one spike must not set the scale
                 findings.Add(Finding.Of(FindingCode.FullPowerSpeedAssumed, full));
             }
             double engage = propeller.Drive == PropellerDrive.Clutch ? propeller.ClutchEngageRevPerSec ?? 0 : 0;

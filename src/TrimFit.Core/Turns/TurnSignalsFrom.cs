@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
@@ -8,6 +7,9 @@ namespace TrimFit.Core.Turns;
 
 public sealed partial class TurnSignals
 {
+    /// <summary>Reason of a span left out for a strong turn.</summary>
+    internal const string StrongTurnReason = "strong turn";
+
     /// <summary>Speed over ground that tells flight from standing, m/s, kept up for <see cref="TakeOffSec"/>.</summary>
     private const double FlyingSpeed = 4, TakeOffSec = 8;
 
@@ -83,9 +85,9 @@ public sealed partial class TurnSignals
         if (rate.Length > 0)
         {
             double[] sizes = [.. rate.Where((r, i) => use[i] && double.IsFinite(r)).Select(Math.Abs)];
-            double strong = Math.Max(_strongTurnRadPerSec, sizes.Length > 0 ? StrongTurnOverMedian * Quantiles.Type7(sizes, 0.5) : 0);
+            double strong = Math.Max(_strongTurnRadPerSec, sizes.Length > 0 ? StrongTurnOverMedian * QuantileType7.Of(sizes, 0.5) : 0);
             bool[] turning = Widen(time, [.. rate.Select(r => Math.Abs(r) > strong)], AroundStrongTurnSec);
-            LeaveOut(i => turning[i], "strong turn");
+            LeaveOut(i => turning[i], StrongTurnReason);
         }
 
         bool declared = log.Has(ChannelRole.HandsOff);
@@ -206,8 +208,8 @@ public sealed partial class TurnSignals
             return off;
         double[] left = ThrustSource.Held(log, ChannelRole.BrakeLeft), right = ThrustSource.Held(log, ChannelRole.BrakeRight);
         double[] all = [.. left.Concat(right).Where(double.IsFinite)];
-        double zeroLeft = Quantiles.Type7([.. left.Where(double.IsFinite)], 0.02), zeroRight = Quantiles.Type7([.. right.Where(double.IsFinite)], 0.02);
-        double range = Quantiles.Type7(all, 0.99) - Math.Min(zeroLeft, zeroRight);
+        double zeroLeft = QuantileType7.Of([.. left.Where(double.IsFinite)], 0.02), zeroRight = QuantileType7.Of([.. right.Where(double.IsFinite)], 0.02);
+        double range = QuantileType7.Of(all, 0.99) - Math.Min(zeroLeft, zeroRight);
         double slack = Math.Max(0.02 * range, log.BrakeUnit == ControlUnit.Meter ? 0.005 : 0.01);
         for (int i = 0; i < off.Length; i++)
             off[i] = left[i] - zeroLeft <= slack && right[i] - zeroRight <= slack; // NaN compares false
@@ -254,7 +256,7 @@ public sealed partial class TurnSignals
         Array.Fill(design, 1, 0, x.Length);
         x.CopyTo(design, x.Length);
         LeastSquaresFit fit = LeastSquares.Fit(design, y, 2);
-        double slope = fit.Coefficients[1], slopeError = fit.StandardErrors[1];
+        double slope = fit.Coefficients[1], slopeError = fit[1].StandardError;
         bool clear = double.IsFinite(slope) && Math.Abs(slope) > 5 * slopeError;
         if (!clear)
             return (new GyroReport(), gyro);
@@ -286,7 +288,7 @@ public sealed partial class TurnSignals
         {
             Scale = scale,
             Sign = sign,
-            BiasRadPerSec = new Estimate(bias, Math.Abs(fit.StandardErrors[0] / slope)),
+            BiasRadPerSec = new Estimate(bias, Math.Abs(fit[0].StandardError / slope)),
         }, mended);
 
         double LastGyroTime(int index)

@@ -47,7 +47,7 @@ public static class WindFit
             if (fitted is not Circle circle || !(circle.Radius > SlowestAirspeed))
                 return null;
             double[] residuals = Residuals(xs, ys, circle);
-            double cut = 3 * RobustScale.NormalConsistentMad(residuals);
+            double cut = 3 * NormalConsistentMad.Of(residuals);
             if (round == TrimRounds || !(cut > 0))
                 break;
             bool[] keep = [.. residuals.Select(r => Math.Abs(r) <= cut)];
@@ -122,6 +122,6 @@ public static class WindFit
         }
         double rho = sum > 0 ? Math.Clamp(lag / sum, 0, 0.95) : 0;
         double widen = Math.Sqrt((1 + rho) / (1 - rho));
-        return (fit.StandardErrors[0] * widen, fit.StandardErrors[1] * widen, fit.StandardErrors[2] * widen);
+        return (fit[0].StandardError * widen, fit[1].StandardError * widen, fit[2].StandardError * widen);
     }
 }
