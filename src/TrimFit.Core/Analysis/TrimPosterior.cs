@@ -97,7 +97,7 @@ internal sealed class TrimPosterior
                 positive++;
         }
         double sameGrowth = Math.Max(right, 1 - right);
-        double[] logs = [.. alone.Where(s => s > 0).Select(Math.Log)];
+        double[] logs = [.. alone.Where(s => s > 0).Select(s => Math.Log(s))];
         double torqueLogSd = logs.Length > 1 ? (QuantileType7.Of(logs, 0.975) - QuantileType7.Of(logs, 0.025)) / (2 * 1.96) : double.PositiveInfinity;
         bool plausible = spread.Propulsion.Plausible && rig.Propeller.RotationSign != 0;
         int gate = !c.SlopeKnown || !plausible ? 0
@@ -156,7 +156,7 @@ internal sealed class TrimPosterior
                 curvatureBelow++;
         }
         double p = Math.Min(1, 2 * Math.Min(TwoSided(predictiveBelow / count), TwoSided(curvatureBelow / count))); // two looks: Bonferroni
-        double effective = Kish(weight);
+        double effective = EffectiveSamples.Kish(weight);
         bool enough = !torque || effective > 50;
         var findings = ImmutableArray.CreateBuilder<Finding>();
         if (c.SlopeKnown && plausible && !torque)
@@ -236,18 +236,6 @@ internal sealed class TrimPosterior
     }
 
     private static double TwoSided(double below) => 2 * Math.Min(below, 1 - below);
-
-    /// <summary>Kish's effective sample size, (Σw)²/Σw² (L. Kish, Survey Sampling, 1965).</summary>
-    private static double Kish(double[] weights)
-    {
-        double sum = 0, squares = 0;
-        foreach (double w in weights)
-        {
-            sum += w;
-            squares += w * w;
-        }
-        return squares > 0 ? sum * sum / squares : 0;
-    }
 
     /// <summary>The fit's coefficients over x = T/T_full, with a covariance widened so that a normal has the t interval's width.</summary>
     private sealed class Coefficients

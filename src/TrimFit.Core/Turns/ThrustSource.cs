@@ -61,9 +61,8 @@ internal sealed class ThrustSource
             }
             else
             {
-                var table = MonotoneCubic.Through([.. propeller.ThrottleThrust.Select(p => p.Throttle)], [.. propeller.ThrottleThrust.Select(p => p.Thrust)]);
                 for (int i = 0; i < count; i++)
-                    fraction[i] = double.IsFinite(throttle[i]) ? table.At(throttle[i]) : double.NaN;
+                    fraction[i] = double.IsFinite(throttle[i]) ? Interpolate(propeller.ThrottleThrust, throttle[i]) : double.NaN;
             }
             for (int i = 0; i < count; i++)
                 ratioSquared[i] = double.IsFinite(fraction[i]) ? fraction[i] : 0;
@@ -84,6 +83,21 @@ internal sealed class ThrustSource
         var source = new ThrustSource { Thrust = fraction, Basis = basis, FullThrust = scale, RotationRatioSquared = ratioSquared, Known = known };
         source.Findings.AddRange(findings);
         return source;
+    }
+
+    private static double Interpolate(System.Collections.Immutable.ImmutableArray<(double Throttle, double Thrust)> table, double throttle)
+    {
+        if (throttle <= table[0].Throttle)
+            return table[0].Thrust;
+        for (int i = 1; i < table.Length; i++)
+        {
+            if (throttle <= table[i].Throttle)
+            {
+                double share = (throttle - table[i - 1].Throttle) / (table[i].Throttle - table[i - 1].Throttle);
+                return table[i - 1].Thrust + (share * (table[i].Thrust - table[i - 1].Thrust));
+            }
+        }
+        return table[^1].Thrust;
     }
 
     /// <summary>A column with each value held until the next one, for at most <see cref="LongestHoldSec"/>; before the first value NaN.</summary>
@@ -115,7 +129,7 @@ internal sealed class ThrustSource
         {
             if (double.IsFinite(altitude[i]) && altitude[i] is > -500 and < 9000)
             {
-                last = StandardAtmosphere.DensityAt(altitude[i]) / density;
+                last = StandardAtmosphere.AtGeometric(altitude[i]).DensityKgPerM3 / density;
                 seen = true;
             }
             ratio[i] = seen ? last : 1;
