@@ -127,7 +127,7 @@ public sealed record AdjustmentReport
     public required ImmutableArray<PullAtSetting> TurnLeftAt { get; init; }
     /// <summary>Inside the rig's limits; null when the rig gives none.</summary>
     public bool? WithinLimits { get; init; }
-    /// <summary>Probability that the rounded travel ends on the wrong side.</summary>
+    /// <summary>Probability that the first step already ends past the null.</summary>
     public required double ProbabilityWrongSide { get; init; }
     /// <summary>Things to say about this adjustment.</summary>
     public ImmutableArray<Finding> Notes { get; init; } = [];
@@ -261,6 +261,18 @@ public enum FindingCode
     FewThrustLevels,
     /// <summary>The wing turns by itself or the brakes rest unevenly: no more can be said from one flight.</summary>
     ConstantPullSource,
+    /// <summary>Speed of rotation at full power is not given; the largest in the log stands in: rev/s.</summary>
+    FullPowerSpeedAssumed,
+    /// <summary>No throttle table: thrust is taken as proportional to throttle.</summary>
+    ThrottleTakenAsThrust,
+    /// <summary>The gyro's unit was wrong by this factor against the GPS turn and was corrected: factor.</summary>
+    GyroUnitCorrected,
+    /// <summary>Gyro scale against the GPS turn is off: slope.</summary>
+    GyroScaleOff,
+    /// <summary>No GPS and no compass: which way the yaw rate turns is taken on trust.</summary>
+    YawSignUnconfirmed,
+    /// <summary>The first step would be smaller than the step this part moves in: that step, m.</summary>
+    FirstStepTooSmall,
     /// <summary>A step ending on the wrong side is likelier than 10 %: probability.</summary>
     WrongSideLikely,
 }

@@ -1,0 +1,70 @@
+using TrimFit.Core.Logs;
+using TrimFit.Core.Units;
+
+namespace TrimFit.Core.Turns;
+
+/// <summary>Ground velocity from whatever the log has: velocities, speed and course, or positions.</summary>
+internal static class GroundVelocity
+{
+    /// <summary>Longest step between fixes over which positions are differenced, s.</summary>
+    private const double LongestStepSec = 3.5;
+
+    /// <summary>North and east velocity at the time of each new fix, NaN elsewhere; empty when the log has none of the sources.</summary>
+    public static (double[] North, double[] East) Of(FlightLog log)
+    {
+        if (log.Has(ChannelRole.VelocityNorth) && log.Has(ChannelRole.VelocityEast))
+            return FromColumns(log[ChannelRole.VelocityNorth], log[ChannelRole.VelocityEast], static (n, e) => (n, e));
+        if (log.Has(ChannelRole.GroundSpeed) && log.Has(ChannelRole.GroundCourse))
+            return FromColumns(log[ChannelRole.GroundSpeed], log[ChannelRole.GroundCourse], static (v, c) => (v * Math.Cos(c), v * Math.Sin(c)));
+        if (log.Has(ChannelRole.Latitude) && log.Has(ChannelRole.Longitude))
+            return FromPositions(log.TimeSec, log[ChannelRole.Latitude], log[ChannelRole.Longitude]);
+        return ([], []);
+    }
+
+    private static (double[] North, double[] East) FromColumns(ReadOnlySpan<double> first, ReadOnlySpan<double> second, Func<double, double, (double, double)> convert)
+    {
+        double[] north = Missing(first.Length), east = Missing(first.Length);
+        double lastFirst = double.NaN, lastSecond = double.NaN;
+        for (int i = 0; i < north.Length; i++)
+        {
+            if (!double.IsFinite(first[i]) || !double.IsFinite(second[i]))
+                continue;
+            if (first[i] == lastFirst && second[i] == lastSecond) // the logger repeats its last fix: no new measurement
+                continue;
+            (lastFirst, lastSecond) = (first[i], second[i]);
+            (north[i], east[i]) = convert(first[i], second[i]);
+        }
+        return (north, east);
+    }
+
+    /// <summary>Central differences over the fixes before and after, so that the velocity belongs to the fix's own time.</summary>
+    private static (double[] North, double[] East) FromPositions(ReadOnlySpan<double> timeSec, ReadOnlySpan<double> latitude, ReadOnlySpan<double> longitude)
+    {
+        double[] north = Missing(timeSec.Length), east = Missing(timeSec.Length);
+        var fixes = new List<int>();
+        for (int i = 0; i < timeSec.Length; i++)
+        {
+            if (double.IsFinite(latitude[i]) && double.IsFinite(longitude[i])
+                && (fixes.Count == 0 || latitude[i] != latitude[fixes[^1]] || longitude[i] != longitude[fixes[^1]]))
+                fixes.Add(i);
+        }
+        for (int k = 1; k + 1 < fixes.Count; k++)
+        {
+            int before = fixes[k - 1], here = fixes[k], after = fixes[k + 1];
+            double span = timeSec[after] - timeSec[before];
+            if (timeSec[here] - timeSec[before] > LongestStepSec || timeSec[after] - timeSec[here] > LongestStepSec)
+                continue;
+            double cos = Math.Cos(latitude[here]);
+            north[here] = (latitude[after] - latitude[before]) * PhysicalConstants.MeanEarthRadius / span;
+            east[here] = Angles.Wrap(longitude[after] - longitude[before]) * cos * PhysicalConstants.MeanEarthRadius / span;
+        }
+        return (north, east);
+    }
+
+    private static double[] Missing(int count)
+    {
+        var column = new double[count];
+        Array.Fill(column, double.NaN);
+        return column;
+    }
+}
