@@ -62,7 +62,7 @@ public static class ReportJson
             },
             Assumptions = Assumptions(a.Assumptions),
             SpansLeftOut = [.. a.Fit.SpansLeftOut.Select(x => new SpanJson(Number(x.StartSec), Number(x.EndSec), x.Reason))],
-            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Notices(a.Fit.Notices), .. Findings(a.Warnings)],
+            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
         };
         return JsonSerializer.Serialize(json, _context.FitJson) + "\n";

@@ -1,4 +1,3 @@
-using MathNet.Numerics.Distributions;
 using TrimFit.Core.Statistics;
 
 namespace TrimFit.Core.Turns;
@@ -11,12 +10,9 @@ public static class TurnFitIntervals
     public static ConfidenceInterval? Interval95(this TurnFit fit, Estimate estimate)
     {
         ArgumentNullException.ThrowIfNull(fit);
-        const double Upper = 0.975;
-        double freedom = fit.DegreesOfFreedom;
-        if (!(freedom > 0))
+        if (!(fit.DegreesOfFreedom > 0))
             return null;
-        double t = double.IsPositiveInfinity(freedom) ? Normal.InvCDF(0, 1, Upper) : StudentT.InvCDF(0, 1, freedom, Upper);
-        double half = t * estimate.StandardError;
+        double half = StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom) * estimate.StandardError;
         return double.IsFinite(half) && double.IsFinite(estimate.Value) ? new(estimate.Value - half, estimate.Value + half, 0.95) : null;
     }
 

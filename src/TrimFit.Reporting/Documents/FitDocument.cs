@@ -48,8 +48,7 @@ internal static class FitDocument
         document.Heading(labels.Warnings);
         document.List([
             .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
-            .. a.Fit.Notices.Select(n => n.Message),
-            .. a.Warnings.Select(f => words.Finding(f, numbers))]);
+            .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
         document.Cautions(Cautions.Of(a), numbers);
         return document.Build($"{labels.ReportTitle}: {a.Rig.Name}", string.Join(", ", report.Import.Diagnostics.Files.Select(f => f.Name)));
     }
@@ -61,7 +60,7 @@ internal static class FitDocument
         if (a.Shift is ShiftReport shift && answer.Kind == AnswerKind.Travel)
             document.Paragraph(document.Words.Shift(shift, numbers));
         document.Heading(document.Words.Labels.WhatIsMissing);
-        document.List(a.Verdict.Reasons.Select(f => document.Words.Finding(f, numbers)));
+        document.List(a.Verdict.Reasons.Where(f => f != answer.Reason).Select(f => document.Words.Finding(f, numbers))); // that one is in the answer
     }
 
     private static void Pull(DocumentBuilder document, TrimAnalysis a, ControlUnit brake, Numbers numbers)

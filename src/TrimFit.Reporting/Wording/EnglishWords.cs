@@ -311,7 +311,13 @@ internal sealed record EnglishWords : Words
             FindingCode.ContraRotating => "The propellers' torques cancel, so the torque cannot explain a pull that grows with power.",
             FindingCode.FewThrustLevels => "The flight has few different powers, so a curve in the pull over power would not show.",
             FindingCode.ConstantPullSource => "A constant pull can come from the wing, the lines, the harness, the way of sitting or a brake that rests pulled; one flight cannot tell which.",
-            FindingCode.WrongSideLikely => $"The step ends on the wrong side with a probability of {Value(0, numbers.Percent)}. Make it smaller.",
+            FindingCode.WrongSideLikely => $"The first step may already go too far, with a probability of {Value(0, numbers.Percent)}. Make it smaller.",
+            FindingCode.FullPowerSpeedAssumed => $"Propeller speed at full power is not in the rig file; the largest in the log stands in: {Value(0, n => numbers.Plain(n * 60, 0))} rpm. Give full_power_rpm.",
+            FindingCode.ThrottleTakenAsThrust => "There is no throttle table in the rig file, so thrust is taken as proportional to throttle. Give throttle_thrust_percent, or log the rpm.",
+            FindingCode.GyroUnitCorrected => $"The gyro's unit did not fit the GPS turns and was corrected by a factor of {Value(0, g => numbers.Significant(g, 3))}. Name the unit: --column yaw_rate=NAME:deg/s.",
+            FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Plain(s, 2))} times the turn of the GPS track. Check how the logger is mounted and the unit of its yaw rate.",
+            FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
+            FindingCode.FirstStepTooSmall => $"The first step would be smaller than the {Value(0, numbers.Length)} in which this part moves.",
         };
     }
 
@@ -350,6 +356,8 @@ internal sealed record EnglishWords : Words
         "rear_offset_mm" => "rear harness hang points from the centre line",
         "wing_mass_kg" => "mass of the wing",
         "line_length_m" => "length of the lines",
+        "cruise_thrust_percent" => "thrust of level flight",
+        "yaw_stiffness_nm_per_rad" => "twist stiffness of the risers",
         _ => name.Replace('_', ' '),
     };
 
