@@ -1,5 +1,6 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Rigging;
 using TrimFit.Core.Turns;
 
 namespace TrimFit.Reporting;
@@ -14,6 +15,9 @@ internal static class FitFacts
         double? thrust = analysis.Fit.ThrustBasis == ThrustBasis.Newton ? at.ThrustN : at.ThrustFraction;
         return thrust is double t && double.IsFinite(t) ? analysis.Fit.AgreesWith(analysis.CrossCheck, t) : null;
     }
+
+    /// <summary>What an adjustment's travel is measured in.</summary>
+    public static TravelUnit UnitOf(AdjustmentKind kind) => Adjustment.All.FirstOrDefault(a => a.Kind == kind)?.Unit ?? TravelUnit.Meter;
 
     /// <summary>Unit of a coefficient as shown.</summary>
     public static string UnitOf(string coefficient, ThrustBasis basis, ControlUnit brake, ControlUnit trimmer) => (coefficient, basis) switch

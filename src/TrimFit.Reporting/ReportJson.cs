@@ -301,13 +301,13 @@ public static class ReportJson
     {
         Kind = Snake.Of(a.Kind.ToString()),
         Part = Words.PartShort(a.Kind),
-        Toward = a.TravelM < 0 ? "left" : "right",
-        Travel = Number(a.TravelM, MmPerM),
-        Unit = "mm",
-        Low95 = Number(a.Interval95.Lower, MmPerM),
-        High95 = Number(a.Interval95.Upper, MmPerM),
-        Rounded = Number(a.RoundedM, MmPerM),
-        FirstStep = Number(a.FirstStepM, MmPerM),
+        Toward = a.Travel < 0 ? "left" : "right",
+        Travel = Number(a.Travel, PerSi(a.Unit)),
+        Unit = UnitName(a.Unit),
+        Low95 = Number(a.Interval95.Lower, PerSi(a.Unit)),
+        High95 = Number(a.Interval95.Upper, PerSi(a.Unit)),
+        Rounded = Number(a.Rounded, PerSi(a.Unit)),
+        FirstStep = Number(a.FirstStep, PerSi(a.Unit)),
         Efficiency = Number(a.Efficiency),
         ThrustLineOffsetMm = Number(a.ThrustLineOffsetM, MmPerM),
         TwistRatio = Number(a.TwistRatio),
@@ -319,7 +319,7 @@ public static class ReportJson
         TurnLeftAt = PullAt(a.TurnLeftAt, brake),
         WithinLimits = a.WithinLimits,
         ProbabilityWrongSide = Number(a.ProbabilityWrongSide),
-        Notes = Findings(a.Notes),
+        Notes = Findings(a.Notes, a.Unit),
     };
 
     private static RigAtJson RigAt(RigAtSetting s) => new()
@@ -337,16 +337,21 @@ public static class ReportJson
         TwistRatioHigh95 = Number(s.TwistRatioHigh95),
     };
 
+    private static double PerSi(TravelUnit unit) => unit switch { TravelUnit.Meter => MmPerM, TravelUnit.Radian => DegPerRad, _ => 1 };
+
+    private static string UnitName(TravelUnit unit) => unit switch { TravelUnit.Meter => "mm", TravelUnit.Radian => "deg", _ => "kg" };
+
     private static RigAdjustmentJson RigAdjustment(RigAdjustment a) => new()
     {
         Kind = Snake.Of(a.Kind.ToString()),
         Part = Words.PartShort(a.Kind),
         Efficiency = Number(a.Efficiency),
-        CgOffsetPerTravel = Number(a.CgOffsetPerTravel),
-        ThrustLineOffsetPerTravel = Number(a.ThrustOffsetPerTravel),
-        MinMm = Number(a.Limit?.Min, MmPerM),
-        MaxMm = Number(a.Limit?.Max, MmPerM),
-        StepMm = Number(a.Limit?.Step, MmPerM),
+        CgMmPerTravel = Number(a.CgOffsetPerTravel, MmPerM / PerSi(FitFacts.UnitOf(a.Kind))),
+        ThrustLineMmPerTravel = Number(a.ThrustOffsetPerTravel, MmPerM / PerSi(FitFacts.UnitOf(a.Kind))),
+        Unit = UnitName(FitFacts.UnitOf(a.Kind)),
+        Min = Number(a.Limit?.Min, PerSi(FitFacts.UnitOf(a.Kind))),
+        Max = Number(a.Limit?.Max, PerSi(FitFacts.UnitOf(a.Kind))),
+        Step = Number(a.Limit?.Step, PerSi(FitFacts.UnitOf(a.Kind))),
     };
 
     private static AssumptionJson[] Assumptions(ImmutableArray<Assumption> assumptions) => [.. assumptions.Select(x => new AssumptionJson
@@ -360,8 +365,8 @@ public static class ReportJson
 
     private static MessageJson[] Notices(ImmutableArray<Notice> notices) => [.. notices.Select(n => new MessageJson(n.Code, n.Message))];
 
-    private static MessageJson[] Findings(ImmutableArray<Finding> findings) =>
-        [.. findings.Select(f => new MessageJson(Snake.Of(f.Code.ToString()), Words.Finding(f, Numbers.Invariant)))];
+    private static MessageJson[] Findings(ImmutableArray<Finding> findings, TravelUnit unit = TravelUnit.Meter) =>
+        [.. findings.Select(f => new MessageJson(Snake.Of(f.Code.ToString()), Words.Finding(f, Numbers.Invariant, unit)))];
 
     private static MessageJson[] CautionList(IEnumerable<CautionCode> codes) =>
         [.. codes.Select(c => new MessageJson(Wording.Cautions.CodeOf(c), Words.Caution(c, Numbers.Invariant)))];

@@ -85,11 +85,17 @@ internal static class FitDocument
             row.Add(p.RateRadPerSec is double r ? numbers.RateNumber(r) : "-");
             row.Add(p.Interval95 is ConfidenceInterval i ? numbers.RateRange(i, l.To) : "-");
             if (held)
-                row.Add(p.HeldBrake is double b ? numbers.Significant(b * ControlUnits.ShownPerSi(brake), 2) : "-");
+                row.Add(p.HeldBrake is double b ? HeldBrake(b * ControlUnits.ShownPerSi(brake), words, numbers) : "-");
             return (IReadOnlyList<string>)row;
         }));
         document.Paragraph(words.CruiseBasis(a.Pull.CruiseBasis)
             + (a.Pull.SmallestDetectableRadPerSec is double s ? " " + words.SmallestDetectable(s, numbers) : ""));
+    }
+
+    private static string HeldBrake(double shown, Words words, Numbers numbers)
+    {
+        string size = numbers.Significant(Math.Abs(shown), Math.Abs(shown) < 10 ? 1 : 2);
+        return shown == 0 ? size : $"{size} {words.Side(shown)}";
     }
 
     private static void Adjustments(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
@@ -101,8 +107,8 @@ internal static class FitDocument
             [new(l.PartToMove, false), new(l.Travel), new(l.Range95), new(l.Settable), new(l.FirstStep),
                 new($"{l.HangCheckLeft} {numbers.MassUnit}"), new($"{l.HangCheckRight} {numbers.MassUnit}")],
             a.Adjustments.Select(x => (IReadOnlyList<string>)[
-                words.PartShort(x.Kind), words.Lateral(x.TravelM, numbers), LateralRange(x.Interval95, words, numbers),
-                words.Lateral(x.RoundedM, numbers), words.Lateral(x.FirstStepM, numbers),
+                words.PartShort(x.Kind), words.Travel(x.Travel, x.Unit, numbers), TravelRange(x, words, numbers),
+                words.Travel(x.Rounded, x.Unit, numbers), words.Travel(x.FirstStep, x.Unit, numbers),
                 numbers.MassNumber(x.HangCheckLeftKg), numbers.MassNumber(x.HangCheckRightKg)]));
         if (a.Adjustments.IsEmpty)
             return;
@@ -124,15 +130,16 @@ internal static class FitDocument
                 x.RiserLoadLeftN is double left ? numbers.ForceNumber(left) : "-", x.RiserLoadRightN is double right ? numbers.ForceNumber(right) : "-",
                 x.WithinLimits switch { true => l.LimitInside, false => l.LimitBeyond, null => l.LimitNotGiven }]));
         document.List(a.Adjustments.SelectMany(x => x.Notes.Where(n => n.Code != FindingCode.LimitNotGiven) // the table says that already
-            .Select(n => $"{words.PartShort(x.Kind)}: {words.Finding(n, numbers)}")));
+            .Select(n => $"{words.PartShort(x.Kind)}: {words.Finding(n, numbers, x.Unit)}")));
     }
 
-    private static string LateralRange(ConfidenceInterval interval, Words words, Numbers numbers)
+    private static string TravelRange(AdjustmentReport a, Words words, Numbers numbers)
     {
+        ConfidenceInterval interval = a.Interval95;
         if (!interval.ExcludesZero)
-            return words.Lateral(interval.Lower, numbers) + words.Labels.To + words.Lateral(interval.Upper, numbers);
+            return words.Travel(interval.Lower, a.Unit, numbers) + words.Labels.To + words.Travel(interval.Upper, a.Unit, numbers);
         (double near, double far) = interval.Lower > 0 ? (interval.Lower, interval.Upper) : (interval.Upper, interval.Lower);
-        return numbers.LengthNumber(Math.Abs(near)) + words.Labels.To + numbers.LengthNumber(Math.Abs(far));
+        return numbers.TravelNumber(Math.Abs(near), a.Unit) + words.Labels.To + numbers.TravelNumber(Math.Abs(far), a.Unit);
     }
 
     private static void Model(DocumentBuilder document, TrimAnalysis a, ControlUnit brake, ControlUnit trimmer, Numbers numbers)
@@ -160,7 +167,7 @@ internal static class FitDocument
             items.Add($"{l.Lag}: {numbers.Plain(lag, 2)} s");
         if (a.Fit.DisturbanceRmsRadPerSec is double rms)
             items.Add($"{l.SlowDisturbance}: {numbers.Plain(double.RadiansToDegrees(rms), 2)} deg/s" + (a.Fit.DisturbanceTauSec is double tau ? $", {numbers.Plain(tau, 1)} s" : ""));
-        items.Add($"{l.EffectiveSamples}: {Finite(a.Fit.EffectiveSamples, numbers, 3, l)}");
+        items.Add($"{l.EffectiveSamples}: {Finite(a.Fit.EffectiveSamples, numbers, 2, l)}");
         items.Add($"{l.Condition}: {Finite(a.Fit.Condition, numbers, 3, l)}");
         items.Add(words.CrossCheck(FitFacts.CrossCheckAgrees(a)));
         document.List(items);

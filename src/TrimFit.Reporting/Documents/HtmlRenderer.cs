@@ -24,7 +24,10 @@ internal static class HtmlRenderer
         th { text-align: left; vertical-align: bottom; font-weight: 600; border-bottom: 2px solid var(--ink); padding: .2rem .55rem; }
         td { border-bottom: 1px solid var(--rule); padding: .25rem .55rem; vertical-align: top; }
         td:first-child, th:first-child { padding-left: 0; }
-        .n { text-align: right; white-space: nowrap; }
+        .n { text-align: right; }
+        td.n { white-space: nowrap; }
+        th:first-child, td:first-child { min-width: 9rem; }
+        td:last-child { min-width: 5rem; }
         figure { margin: 0 0 1rem; }
         figure svg { display: block; width: 100%; height: auto; max-width: 47rem; margin: 0 auto; }
         figure.rig svg { max-width: 34rem; }

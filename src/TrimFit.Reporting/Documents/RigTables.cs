@@ -1,3 +1,4 @@
+using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
 using TrimFit.Reporting.Wording;
 
@@ -14,10 +15,15 @@ internal static class RigTables
             [new(l.Power, false), new($"{l.Thrust} {numbers.ForceUnit}"), new(l.HangBack), new($"{l.YawMoment} {numbers.MomentUnit}"),
                 new($"{l.RollMoment} {numbers.MomentUnit}"), new(l.Twist), new(l.TwistRatio), new(l.TwistUpTo),
                 new($"{l.RiserLoadLeft} {numbers.ForceUnit}"), new($"{l.RiserLoadRight} {numbers.ForceUnit}")],
-            report.At.Select(s => (IReadOnlyList<string>)[words.Setting(s.Setting), numbers.ForceNumber(s.ThrustN), numbers.AngleNumber(s.HangBackRad),
+            report.At.Select(s => (IReadOnlyList<string>)[Head(s, report, words, numbers), numbers.ForceNumber(s.ThrustN), numbers.AngleNumber(s.HangBackRad),
                 numbers.MomentNumber(s.YawMomentNm), numbers.MomentNumber(s.RollMomentNm), s.TwistRad is double x ? numbers.AngleNumber(x) : "-",
                 numbers.Plain(s.TwistRatio, 2), numbers.Plain(s.TwistRatioHigh95, 2), numbers.ForceNumber(s.RiserLoadLeftN), numbers.ForceNumber(s.RiserLoadRightN)]));
     }
+
+    /// <summary>Without a flight nobody knows the thrust of level flight, so the row says which share it stands for.</summary>
+    private static string Head(RigAtSetting s, RigReport report, Words words, Numbers numbers) => s.Setting == PowerSetting.Cruise && report.FullThrustN is double full && full > 0
+        ? $"{numbers.PercentNumber(s.ThrustN / full)} {words.Labels.ThrustFraction}"
+        : words.Setting(s.Setting);
 
     public static void Masses(DocumentBuilder document, RigReport r, Numbers numbers)
     {
@@ -46,16 +52,27 @@ internal static class RigTables
         Labels l = words.Labels;
         document.Heading(l.Adjustments);
         document.Table([new(l.PartToMove, false), new(l.Efficiency), new(l.ThrustLinePerTravel), new(l.Limit, false)],
-            report.Adjustments.Select(a => (IReadOnlyList<string>)[words.PartShort(a.Kind), Signed(a.CgOffsetPerTravel, numbers), Signed(a.ThrustOffsetPerTravel, numbers),
-                a.Limit is AdjustmentLimit limit ? Range(limit, words, numbers) : l.LimitNotGiven]));
+            report.Adjustments.Select(a => (IReadOnlyList<string>)[words.PartShort(a.Kind), Signed(a, a.CgOffsetPerTravel, numbers), Signed(a, a.ThrustOffsetPerTravel, numbers),
+                a.Limit is AdjustmentLimit limit ? Range(limit, FitFacts.UnitOf(a.Kind), words, numbers) : l.LimitNotGiven]));
     }
 
-    private static string Signed(double value, Numbers numbers) => (value > 0 ? "+" : "") + numbers.Plain(value, 3);
-
-    private static string Range(AdjustmentLimit limit, Words words, Numbers numbers)
+    /// <summary>A ratio of lengths as it is; for a travel in degrees or kilograms the length for one of them.</summary>
+    private static string Signed(RigAdjustment a, double perSi, Numbers numbers)
     {
-        string min = limit.Min is double a ? words.Lateral(a, numbers) : words.Labels.NotKnown;
-        string max = limit.Max is double b ? words.Lateral(b, numbers) : words.Labels.NotKnown;
+        TravelUnit unit = FitFacts.UnitOf(a.Kind);
+        string sign = perSi > 0 ? "+" : "";
+        return unit switch
+        {
+            TravelUnit.Radian => $"{sign}{numbers.Length(perSi * double.DegreesToRadians(1))}/deg",
+            TravelUnit.Kilogram => $"{sign}{numbers.Length(perSi)}/kg",
+            _ => sign + numbers.Plain(perSi, 3),
+        };
+    }
+
+    private static string Range(AdjustmentLimit limit, TravelUnit unit, Words words, Numbers numbers)
+    {
+        string min = limit.Min is double a ? words.Travel(a, unit, numbers) : words.Labels.NotKnown;
+        string max = limit.Max is double b ? words.Travel(b, unit, numbers) : words.Labels.NotKnown;
         return min + words.Labels.To + max;
     }
 }

@@ -6,6 +6,7 @@ namespace TrimFit.Reporting.Documents;
 /// <summary>A report for the terminal: plain text without colour, so that it can be piped and read aloud.</summary>
 internal static class TextRenderer
 {
+    private const int MostHeadLines = 3;
     private const int Width = 100; // fits a terminal beside another window; tables may be wider when their cells are
 
     public static string Render(ReportDocument document)
@@ -81,6 +82,11 @@ internal static class TextRenderer
         string[][] rows = [.. table.Rows.Select(r => r.Select(Safe).ToArray())];
         // A head longer than its cells breaks over two or three lines rather than widen the column.
         int[] widths = [.. Enumerable.Range(0, n).Select(i => Math.Max(rows.Max(r => r[i].Length), heads[i].Split(' ').Max(w => w.Length)))];
+        for (int i = 0; i < n; i++)
+        {
+            while (Break(heads[i], widths[i]).Length > MostHeadLines)
+                widths[i]++;
+        }
         string[][] broken = [.. heads.Select((h, i) => Break(h, widths[i]))];
         int height = broken.Max(b => b.Length);
         for (int line = 0; line < height; line++)

@@ -11,7 +11,7 @@ namespace TrimFit.Reporting.Figures;
 /// <summary>The flight over time in three panels: thrust, brakes, turn rate; spans left out are shaded, windows used are bars.</summary>
 internal static class FlightPlot
 {
-    private const int Width = 760, PanelHeight = 165, LastPanelHeight = 235;
+    private const int Width = 760, PanelHeight = 170, LastPanelHeight = 260;
     private const int Bins = 500; // about two pixels on paper; means, so that the picture stays small
 
     /// <summary>The figure; null without samples.</summary>
@@ -38,7 +38,7 @@ internal static class FlightPlot
             SetY(plot, values);
             panels.Add((plot, PanelHeight));
         }
-        Plot turn = Panel(analysis, l, numbers, l.AxisTurnRate, last: true);
+        Plot turn = Panel(analysis, l, numbers, l.AxisTurnRateShort, last: true);
         List<(double Min, double V)> rates = TurnRates(analysis);
         Lines(turn, rates, Palette.Blue, 1.3f);
         bool first = true;
@@ -79,7 +79,7 @@ internal static class FlightPlot
         plot.YLabel(label);
         TurnPlot.Axes(plot);
         plot.Axes.SetLimitsX(time[0] / 60, time[^1] / 60);
-        plot.Layout.Fixed(new PixelPadding(78, 14, last ? 84 : 30, 8));
+        plot.Layout.Fixed(new PixelPadding(78, 14, last ? 104 : 30, 8));
         return plot;
     }
 

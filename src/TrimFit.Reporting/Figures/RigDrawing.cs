@@ -10,6 +10,8 @@ namespace TrimFit.Reporting.Figures;
 internal static class RigDrawing
 {
     private const int BarFront = -150, CarabinerY = -70, FrontY = -120, CgY = 20, RearY = 95, FrameY = 140, PropellerY = 190, Bottom = 225;
+    // A white rim keeps letters readable where they cross the centre line.
+    private static readonly HtmlText _halo = new(" paint-order=\"stroke\" stroke=\"#fff\" stroke-width=\"6\"");
     private static readonly int[] _scales = [10, 5, 4, 3, 2];
     private const int LegendRow = 27, CloseRow = 46, Text = 17;
 
@@ -18,7 +20,7 @@ internal static class RigDrawing
     {
         Labels l = words.Labels;
         Places now = Places.Now(rig, report);
-        Places? after = adjustment is null ? null : now.After(adjustment.Kind, adjustment.RoundedM, report);
+        Places? after = adjustment is null ? null : now.After(adjustment.Kind, adjustment.Rounded, report);
         double half = Math.Max(Math.Max(Math.Abs(now.Left), Math.Abs(now.Right)) * 1000, 150) + 90;
         var svg = new StringBuilder();
 
@@ -65,7 +67,7 @@ internal static class RigDrawing
         svg.Append(Invariant($"<path d=\"M{left - 30:0.#} {FrameY}Q0 {FrameY + 34} {right + 30:0.#} {FrameY}\" fill=\"none\" stroke=\"{Palette.Shade}\" stroke-width=\"10\" stroke-linecap=\"round\"/>\n"));
         double tip = Math.Min(half - 20, 260);
         svg.Append(Invariant($"<path d=\"M{(now.Thrust * 1000) - tip:0.#} {PropellerY}H{(now.Thrust * 1000) + tip:0.#}\" stroke=\"{Palette.Grey}\" stroke-width=\"5\" stroke-linecap=\"round\"/>\n"));
-        svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{PropellerY + 26}")}\" fill=\"{Palette.Grey}\">{words.Propeller(rig.Propeller.Rotation)}</text>\n"));
+        svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{PropellerY + 26}")}\" fill=\"{Palette.Grey}\"{_halo}>{words.Propeller(rig.Propeller.Rotation)}</text>\n"));
         svg.Append(Line(0, -222, 0, Bottom, Palette.Grey, 1.5, "10 4 2 4"));
         svg.Append(Invariant($"<path d=\"M0 -240l-9 20h18z\" fill=\"{Palette.Grey}\"/>"));
         svg.Append(Html.Of($"<text x=\"16\" y=\"-224\" fill=\"{Palette.Grey}\">{l.FlightDirection}</text>\n"));
@@ -114,7 +116,7 @@ internal static class RigDrawing
             string reading = after is double a && words.Lateral(a, numbers) != words.Lateral(now, numbers)
                 ? $"{words.Lateral(now, numbers)} → {words.Lateral(a, numbers)}"
                 : words.Lateral(now, numbers);
-            svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{y + 8}")}\" font-size=\"15\">{name}: {reading}</text>"));
+            svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{y + 8}")}\" font-size=\"15\"{_halo}>{name}: {reading}</text>"));
             double x = now * 1000 * scale;
             if (after is double moved && Math.Abs(moved - now) * 1000 * scale > 3)
             {
@@ -177,9 +179,6 @@ internal static class RigDrawing
 
         public Places After(AdjustmentKind kind, double d, RigReport report)
         {
-            // Change of e less change of t is what the CG itself moves in the frame: the thrust line stays there.
-            RigAdjustment? row = report.Adjustments.FirstOrDefault(a => a.Kind == kind);
-            double cg = row is null ? 0 : (row.CgOffsetPerTravel - row.ThrustOffsetPerTravel) * d;
             Places moved = kind switch
             {
                 AdjustmentKind.CarabinerPair => this with { Left = Left + d, Right = Right + d },
@@ -187,10 +186,16 @@ internal static class RigDrawing
                 AdjustmentKind.BarSpacer => this with { Left = Left + d, Right = Right + d, Front = Front + d },
                 AdjustmentKind.HarnessFront => this with { Front = Front + d },
                 AdjustmentKind.HarnessFrontRear => this with { Front = Front + d, Rear = Rear + d },
-                AdjustmentKind.PowerUnit => this with { Thrust = Thrust + d },
                 _ => this,
             };
-            return moved with { Cg = Cg + cg };
+            // The table gives places from the middle between the carabiners; the drawing wants them from the centre line.
+            RigAdjustment? row = report.Adjustments.FirstOrDefault(a => a.Kind == kind);
+            double middle = moved.Middle - Middle;
+            return row is null ? moved : moved with
+            {
+                Cg = Cg + middle + (row.CgOffsetPerTravel * d),
+                Thrust = Thrust + middle + (row.ThrustOffsetPerTravel * d),
+            };
         }
     }
 }

@@ -280,11 +280,12 @@ internal sealed record RigAdjustmentJson
     public required string Kind { get; init; }
     public required string Part { get; init; }
     public required double? Efficiency { get; init; }
-    public required double? CgOffsetPerTravel { get; init; }
-    public required double? ThrustLineOffsetPerTravel { get; init; }
-    public required double? MinMm { get; init; }
-    public required double? MaxMm { get; init; }
-    public required double? StepMm { get; init; }
+    public required double? CgMmPerTravel { get; init; }
+    public required double? ThrustLineMmPerTravel { get; init; }
+    public required string Unit { get; init; }
+    public required double? Min { get; init; }
+    public required double? Max { get; init; }
+    public required double? Step { get; init; }
 }
 
 [JsonSourceGenerationOptions(WriteIndented = true, PropertyNamingPolicy = JsonKnownNamingPolicy.SnakeCaseLower, NewLine = "\n")]

@@ -131,8 +131,9 @@ internal sealed record EnglishWords : Words
         AxisThrust = "thrust",
         AxisThrustRelative = "thrust, fraction of full",
         AxisTurnRate = "turn rate [°/s], right +",
+        AxisTurnRateShort = "turn [°/s]",
         AxisTime = "time [min]",
-        AxisBrake = "brake right - left",
+        AxisBrake = "brakes, right +",
         HandsOff = "hands off",
         HandsOn = "hands on, brake part taken out",
         FittedLine = "fitted line",
@@ -149,13 +150,12 @@ internal sealed record EnglishWords : Words
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
-    public override string Place(double m, Numbers numbers) => IsZero(m, numbers)
-        ? "on the frame's centre line"
-        : $"{numbers.Length(Math.Abs(m))} {Side(m)} of the frame's centre line";
-
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)
         ? numbers.Length(0)
         : $"{numbers.Length(Math.Abs(m))} {Side(m)}";
+
+    public override string Travel(double value, TravelUnit unit, Numbers numbers) =>
+        IsZero(value, unit, numbers) ? numbers.Travel(0, unit) : $"{numbers.Travel(value, unit)} {Side(value)}";
 
     public override string Setting(PowerSetting setting) => setting switch
     {
@@ -171,20 +171,6 @@ internal sealed record EnglishWords : Words
         BalanceThrustKind.Full => "at full power",
         BalanceThrustKind.Even => "over the range of power flown",
         BalanceThrustKind.Newtons => $"at {numbers.Force(thrust.Newtons)} of thrust",
-    };
-
-    public override string Part(AdjustmentKind kind, double travelM) => kind switch
-    {
-        AdjustmentKind.CarabinerPair => "both riser carabiners",
-        AdjustmentKind.CarabinerOneSide => $"the {Side(travelM)} riser carabiner alone",
-        AdjustmentKind.BarSpacer => "both suspension bars with their front harness hang points",
-        AdjustmentKind.HarnessFront => "the front harness hang points",
-        AdjustmentKind.HarnessFrontRear => "both harness hang points, front and rear,",
-        AdjustmentKind.PowerUnit => "the power unit",
-        AdjustmentKind.EngineCant => "the engine's thrust axis",
-        AdjustmentKind.Ballast => "ballast",
-        AdjustmentKind.Trimmer => "the trimmers",
-        AdjustmentKind.BrakeLine => "the brake lines",
     };
 
     public override string PartShort(AdjustmentKind kind) => kind switch
@@ -212,7 +198,7 @@ internal sealed record EnglishWords : Words
             AnswerKind.Contradiction => $"{power} {Turns(answer.RateRadPerSec, numbers)}, which contradicts the rig file, so nothing may be moved yet. {reason}",
             AnswerKind.Balanced => $"{power} {Turns(answer.RateRadPerSec, numbers)} ({range}; right is positive): that is balanced within "
                 + $"{numbers.Rate(answer.ToleranceRadPerSec)}. Nothing needs to be moved.",
-            AnswerKind.Travel => $"{power} {Turns(answer.RateRadPerSec, numbers)}; moving {TravelOf(answer.Adjustment!, numbers)} would null it.",
+            AnswerKind.Travel => $"{power} {Turns(answer.RateRadPerSec, numbers)}; {Gerund(answer.Adjustment!.Kind)} {TravelOf(answer.Adjustment, numbers)} would null it.",
             AnswerKind.Direction => $"{power} {Turns(answer.RateRadPerSec, numbers)} ({range}; right is positive), but how far to move a part cannot be said. {reason}",
             AnswerKind.SideUnknown => $"{power} {Turns(answer.RateRadPerSec, numbers)}, but anything from {range} (right is positive) fits this flight, so not even the side is certain. {reason}",
         };
@@ -246,29 +232,34 @@ internal sealed record EnglishWords : Words
 
     public override string FirstStep(AdjustmentReport adjustment, Rig rig, Numbers numbers)
     {
-        double d = adjustment.FirstStepM;
-        if (IsZero(d, numbers))
+        double d = adjustment.FirstStep;
+        if (IsZero(d, adjustment.Unit, numbers))
             return "The first step is smaller than can be set; leave the machine as it is.";
-        string Goes(string what, double fromM) => $"{what} from {Place(fromM, numbers)} to {Place(fromM + d, numbers)}";
+        string Goes(string what, double fromM) => $"{what} from {Lateral(fromM, numbers)} to {Lateral(fromM + d, numbers)}";
         string left = Goes("the left one", rig.Carabiners.LeftM.Value), right = Goes("the right one", rig.Carabiners.RightM.Value);
         string front = Goes("the middle of the front pair", rig.HangPoints.FrontOffsetM.Value);
         string rear = Goes("the middle of the rear pair", rig.HangPoints.RearOffsetM.Value);
         string readings = adjustment.Kind switch
         {
-            AdjustmentKind.CarabinerPair => $": {left}, {right}",
-            AdjustmentKind.CarabinerOneSide => d < 0 ? $": {left}" : $": {right}",
-            AdjustmentKind.BarSpacer => $". Riser carabiners: {left}, {right}. Front harness hang points: {front}",
-            AdjustmentKind.HarnessFront => $": {front}",
-            AdjustmentKind.HarnessFrontRear => $": {front}, {rear}",
-            AdjustmentKind.PowerUnit => $": its middle from {Place(rig.Mass.PowerUnitLateralM.Value, numbers)} to {Place(rig.Mass.PowerUnitLateralM.Value + d, numbers)}",
-            AdjustmentKind.EngineCant or AdjustmentKind.Ballast or AdjustmentKind.Trimmer or AdjustmentKind.BrakeLine => "",
+            AdjustmentKind.CarabinerPair => $"{left}, {right}",
+            AdjustmentKind.CarabinerOneSide => d < 0 ? left : right,
+            AdjustmentKind.BarSpacer => $"of the riser carabiners {left}, {right}; {front} of harness hang points",
+            AdjustmentKind.HarnessFront => front,
+            AdjustmentKind.HarnessFrontRear => $"{front}, {rear}",
+            AdjustmentKind.PowerUnit => Goes("its middle", rig.Mass.PowerUnitLateralM.Value),
+            AdjustmentKind.EngineCant => $"from {Travel(rig.Propeller.CantRad.Value, TravelUnit.Radian, numbers)} to {Travel(rig.Propeller.CantRad.Value + d, TravelUnit.Radian, numbers)}",
+            AdjustmentKind.Ballast or AdjustmentKind.Trimmer or AdjustmentKind.BrakeLine => "",
         };
-        return $"First step: move {Part(adjustment.Kind, d)} {numbers.Length(Math.Abs(d))} to your {Side(d)}, as the seated pilot sees it{readings}. "
-            + $"The hang check must then show {numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one. "
+        string seen = readings.Length == 0 ? "" : $". Measured from the frame's centre line, as the seated pilot sees it: {readings}";
+        string check = adjustment.Kind is AdjustmentKind.Trimmer or AdjustmentKind.BrakeLine
+            ? "The hang check must then show the same as before: "
+            : "The hang check must then show ";
+        return $"First step: {Verb(adjustment.Kind)} {Phrase(adjustment.Kind, d, numbers.Travel(d, adjustment.Unit), "")}{seen}. "
+            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one. "
             + "Then fly again and fit again.";
     }
 
-    public override string Finding(Finding finding, Numbers numbers)
+    public override string Finding(Finding finding, Numbers numbers, TravelUnit unit = TravelUnit.Meter)
     {
         ImmutableArray<double> values = finding.Values.IsDefault ? [] : finding.Values;
         string Value(int i, Func<double, string> show) => i < values.Length && double.IsFinite(values[i]) ? show(values[i]) : "an unknown value";
@@ -302,7 +293,7 @@ internal sealed record EnglishWords : Words
             FindingCode.StrongPull => $"The pull is strong: {Value(0, r => numbers.Rate(Math.Abs(r)))} to the {Side(Sign(0))}. Adjust on the ground before flying another test.",
             FindingCode.ConstantPartFirst => $"The pull without power alone asks for {Value(0, m => numbers.Length(Math.Abs(m)))} of shift. Check trimmers, lines, brake lines and straps before moving harness hang points.",
             FindingCode.LimitNotGiven => "Maker's limit not given.",
-            FindingCode.BeyondLimit => $"The travel goes beyond the limit of {Value(0, m => numbers.Length(Math.Abs(m)))} in the rig file.",
+            FindingCode.BeyondLimit => $"The travel goes beyond the limit of {Value(0, m => Travel(m, unit, numbers))} in the rig file.",
             FindingCode.TwistCaution => $"Riser twist: the twist ratio may reach {Value(0, q => numbers.Plain(q, 2))}. First full power in steps.",
             FindingCode.TwistWarning => $"A sudden throttle change can twist the risers: the twist ratio may reach {Value(0, q => numbers.Plain(q, 2))}.",
             FindingCode.TwistRefused => $"Refused: the twist ratio may reach {Value(0, q => numbers.Plain(q, 2))}; above 1 nothing holds the frame against riser twist.",
@@ -317,7 +308,7 @@ internal sealed record EnglishWords : Words
             FindingCode.GyroUnitCorrected => $"The gyro's unit did not fit the GPS turns and was corrected by a factor of {Value(0, g => numbers.Significant(g, 3))}. Name the unit: --column yaw_rate=NAME:deg/s.",
             FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Plain(s, 2))} times the turn of the GPS track. Check how the logger is mounted and the unit of its yaw rate.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
-            FindingCode.FirstStepTooSmall => $"The first step would be smaller than the {Value(0, numbers.Length)} in which this part moves.",
+            FindingCode.FirstStepTooSmall => $"The first step would be smaller than the {Value(0, m => numbers.Travel(m, unit))} in which this part moves.",
         };
     }
 
@@ -458,7 +449,7 @@ internal sealed record EnglishWords : Words
         if (gyro is null)
             return "";
         string bias = gyro.BiasRadPerSec is Estimate b
-            ? $"zero at {numbers.Plain(double.RadiansToDegrees(b.Value), 2)} deg/s (± {numbers.Plain(double.RadiansToDegrees(1.96 * b.StandardError), 2)})"
+            ? $"zero at {numbers.Plain(double.RadiansToDegrees(b.Value), 2)} deg/s (± {numbers.Significant(double.RadiansToDegrees(1.96 * b.StandardError), 1)})"
             : "zero not known";
         string sign = gyro.Sign switch { null => "sign not verified", < 0 => "sign REVERSED against the GPS", _ => "sign agrees with the GPS" };
         string scale = gyro.Scale is double s ? $", scale {numbers.Plain(s, 2)}" : "";
@@ -485,19 +476,61 @@ internal sealed record EnglishWords : Words
     private string Turns(double radPerSec, Numbers numbers) =>
         numbers.RateNumber(radPerSec) == numbers.RateNumber(0) ? "it flies straight" : $"it turns {Side(radPerSec)} at {numbers.Rate(Math.Abs(radPerSec))}";
 
-    private string TravelOf(AdjustmentReport adjustment, Numbers numbers) =>
-        Part(adjustment.Kind, adjustment.TravelM) + " " + SignedRange(adjustment.TravelM, adjustment.Interval95, numbers);
-
-    /// <summary><c>14 mm to your left (9 to 20)</c>; with both sides named when the range spans zero.</summary>
-    private string SignedRange(double m, ConfidenceInterval interval, Numbers numbers)
+    private static string Verb(AdjustmentKind kind) => kind switch
     {
-        string range = interval.ExcludesZero
-            ? $"{numbers.LengthNumber(Math.Min(Math.Abs(interval.Lower), Math.Abs(interval.Upper)))} to {numbers.LengthNumber(Math.Max(Math.Abs(interval.Lower), Math.Abs(interval.Upper)))}"
-            : $"{numbers.LengthNumber(-interval.Lower)} to your left up to {numbers.LengthNumber(interval.Upper)} to your right";
-        return $"{numbers.Length(Math.Abs(m))} to your {Side(m)} ({range})";
+        AdjustmentKind.EngineCant => "turn",
+        AdjustmentKind.Ballast => "hang",
+        AdjustmentKind.Trimmer => "set",
+        AdjustmentKind.BrakeLine => "make",
+        _ => "move",
+    };
+
+    private static string Gerund(AdjustmentKind kind) => kind switch
+    {
+        AdjustmentKind.EngineCant => "turning",
+        AdjustmentKind.Ballast => "hanging",
+        AdjustmentKind.Trimmer => "setting",
+        AdjustmentKind.BrakeLine => "making",
+        _ => "moving",
+    };
+
+    /// <summary>What moves, how far, which way: never a bar or a hang point alone, always the side by the part.</summary>
+    private string Phrase(AdjustmentKind kind, double travel, string amount, string range)
+    {
+        string side = Side(travel);
+        return kind switch
+        {
+            AdjustmentKind.CarabinerPair => $"both riser carabiners {amount} to your {side}{range}",
+            AdjustmentKind.CarabinerOneSide => $"the {side} riser carabiner alone {amount} to your {side}{range}",
+            AdjustmentKind.BarSpacer => $"both suspension bars with their front harness hang points {amount} to your {side}{range}",
+            AdjustmentKind.HarnessFront => $"the front harness hang points {amount} to your {side}{range}",
+            AdjustmentKind.HarnessFrontRear => $"both harness hang points, front and rear, {amount} to your {side}{range}",
+            AdjustmentKind.PowerUnit => $"the power unit {amount} to your {side}{range}",
+            AdjustmentKind.EngineCant => $"the engine's thrust axis {amount}{range} in plan so that it pushes more to your {side}",
+            AdjustmentKind.Ballast => $"{amount} of ballast{range} at the {side} riser carabiner",
+            AdjustmentKind.Trimmer => $"the {side} trimmer {amount}{range} further than the other, counted as in the log",
+            AdjustmentKind.BrakeLine => $"the {side} brake line {amount}{range} shorter than the other",
+        };
     }
 
-    private static bool IsZero(double m, Numbers numbers) => numbers.LengthNumber(m) == numbers.LengthNumber(0);
+    private string TravelOf(AdjustmentReport a, Numbers numbers) =>
+        Phrase(a.Kind, a.Travel, numbers.Travel(a.Travel, a.Unit), " " + Range(a.Interval95, a.Unit, numbers));
+
+    /// <summary><c>14 mm to your left (9 to 20)</c>.</summary>
+    private string SignedRange(double m, ConfidenceInterval interval, Numbers numbers) =>
+        $"{numbers.Length(Math.Abs(m))} to your {Side(m)} {Range(interval, TravelUnit.Meter, numbers)}";
+
+    /// <summary><c>(9 to 20)</c>; with both sides named when the range spans zero.</summary>
+    private static string Range(ConfidenceInterval interval, TravelUnit unit, Numbers numbers)
+    {
+        string Size(double value) => numbers.TravelNumber(Math.Abs(value), unit);
+        (double near, double far) = Math.Abs(interval.Lower) < Math.Abs(interval.Upper) ? (interval.Lower, interval.Upper) : (interval.Upper, interval.Lower);
+        return interval.ExcludesZero ? $"({Size(near)} to {Size(far)})" : $"({Size(interval.Lower)} to your left up to {Size(interval.Upper)} to your right)";
+    }
+
+    private static bool IsZero(double m, Numbers numbers) => IsZero(m, TravelUnit.Meter, numbers);
+
+    private static bool IsZero(double value, TravelUnit unit, Numbers numbers) => numbers.TravelNumber(value, unit) == numbers.TravelNumber(0, unit);
 
     private static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];
 }

@@ -119,6 +119,7 @@ internal sealed record Labels
     public required string AxisThrust { get; init; }
     public required string AxisThrustRelative { get; init; }
     public required string AxisTurnRate { get; init; }
+    public required string AxisTurnRateShort { get; init; }
     public required string AxisTime { get; init; }
     public required string AxisBrake { get; init; }
     public required string HandsOff { get; init; }

@@ -1,4 +1,5 @@
 using System.Globalization;
+using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Units;
 
@@ -44,7 +45,9 @@ internal sealed class Numbers
         if (value == 0 || !double.IsFinite(value))
             return Plain(double.IsFinite(value) ? 0 : throw new ArgumentOutOfRangeException(nameof(value), value, "must be finite"), 0);
         int decimals = digits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value)));
-        return decimals is >= 0 and <= 8 ? Plain(value, decimals) : value.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), _format);
+        if (decimals < 0 && Math.Abs(value) < 1e7)
+            return Plain(value, 0);
+        return decimals is >= 0 and <= 6 ? Plain(value, decimals) : value.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), _format);
     }
 
     /// <summary>A number on an axis.</summary>
@@ -63,6 +66,18 @@ internal sealed class Numbers
 
     /// <summary>Whole millimetres, or hundredths of an inch: about what a workshop can set.</summary>
     public string LengthNumber(double m) => Imperial ? Plain(m / PhysicalConstants.MetersPerInch, 2) : Plain(m * 1000, 0);
+
+    /// <summary>A travel of an adjustment, without its sign: millimetres, degrees or kilograms as its kind is set.</summary>
+    public string Travel(double value, TravelUnit unit) => TravelNumber(Math.Abs(value), unit) + " " + TravelUnitName(unit);
+
+    public string TravelNumber(double value, TravelUnit unit) => unit switch
+    {
+        TravelUnit.Radian => AngleNumber(value),
+        TravelUnit.Kilogram => MassNumber(value),
+        _ => LengthNumber(value),
+    };
+
+    public string TravelUnitName(TravelUnit unit) => unit switch { TravelUnit.Radian => "deg", TravelUnit.Kilogram => MassUnit, _ => LengthUnit };
 
     public string Force(double n) => ForceNumber(n) + " " + ForceUnit;
     public string ForceNumber(double n) => Plain(ForceValue(n), 0);

@@ -18,20 +18,17 @@ internal abstract record Words
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
-    /// <summary>A lateral place with its reference line.</summary>
-    public abstract string Place(double m, Numbers numbers);
-
     /// <summary>A lateral distance with its side: <c>14 mm left</c>.</summary>
     public abstract string Lateral(double m, Numbers numbers);
+
+    /// <summary>A travel with its side: <c>14 mm left</c>.</summary>
+    public abstract string Travel(double value, TravelUnit unit, Numbers numbers);
 
     /// <summary>Power as a row's head.</summary>
     public abstract string Setting(PowerSetting setting);
 
     /// <summary>The balance thrust as an adverbial: in level flight, at full power.</summary>
     public abstract string AtPower(BalanceThrust thrust, Numbers numbers);
-
-    /// <summary>The part an adjustment moves, with its article; never a bar or a hang point alone.</summary>
-    public abstract string Part(AdjustmentKind kind, double travelM);
 
     /// <summary>The adjustment's short name in a table.</summary>
     public abstract string PartShort(AdjustmentKind kind);
@@ -51,8 +48,8 @@ internal abstract record Words
     /// <summary>The first step as an instruction: part, direction, reference line, readings before and after, hang check.</summary>
     public abstract string FirstStep(AdjustmentReport adjustment, Rig rig, Numbers numbers);
 
-    /// <summary>A finding as a whole sentence, with what to do.</summary>
-    public abstract string Finding(Finding finding, Numbers numbers);
+    /// <summary>A finding as a whole sentence, with what to do; the unit is that of travels in it, for the note of an adjustment.</summary>
+    public abstract string Finding(Finding finding, Numbers numbers, TravelUnit unit = TravelUnit.Meter);
 
     /// <summary>A caution.</summary>
     public abstract string Caution(CautionCode code, Numbers numbers);
