@@ -26,6 +26,9 @@ internal static class ShiftSolver
     /// <summary>Turns left that differ by less than this rank alike; then the riser twist decides, rad/s.</summary>
     private static readonly double RankingStepRadPerSec = double.DegreesToRadians(0.1);
 
+    /// <summary>Twist ratios that differ by less than this rank alike; then the order of <see cref="AdjustmentKind"/> decides.</summary>
+    private const double RankingTwistStep = 0.1;
+
     private static readonly PowerSetting[] _settings = [PowerSetting.Off, PowerSetting.Idle, PowerSetting.Cruise, PowerSetting.Full];
 
     public static ShiftReport Shift(TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit)
@@ -72,7 +75,7 @@ internal static class ShiftSolver
                 .ThenBy(r => r.TwistRatioHigh95 >= TwistRefused)
                 .ThenBy(r => r.TwistRatioHigh95 >= TwistWarning)
                 .ThenBy(r => Math.Round(Math.Abs(r.TurnLeftAt[2].RateRadPerSec ?? 0) / RankingStepRadPerSec)) // what rounding to real steps leaves
-                .ThenBy(r => r.TwistRatioHigh95 ?? 0)
+                .ThenBy(r => Math.Round((r.TwistRatioHigh95 ?? 0) / RankingTwistStep))
                 .ThenBy(r => r.Kind),
         ];
     }

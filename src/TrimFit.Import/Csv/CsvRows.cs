@@ -5,7 +5,7 @@ using TrimFit.Core.Logs;
 namespace TrimFit.Import.Csv;
 
 /// <summary>The one pass over a file: cells of the wanted columns to numbers, rows counted, clock put in order.</summary>
-internal sealed class CsvRows
+internal sealed class CsvRows : ICsvRows
 {
     /// <summary>Pause, s, put between the parts of a log whose elapsed clock began again; longer than any step, so the parts are told apart.</summary>
     internal const double RestartPauseSec = 60;
@@ -82,7 +82,7 @@ internal sealed class CsvRows
     public bool Read(LogSource source, bool lineBreaksInQuotes, Action<double>? progress)
     {
         using var text = new TextStream(source, _head.Encoding, _head.MendLineEnds, hash: true, progress);
-        Skip(text, _head.DataOffset);
+        text.Skip(_head.DataOffset);
         bool openQuote = false;
         using (CsvReader reader = CsvReader.Create(text, new CsvReaderOptions
         {
@@ -137,18 +137,6 @@ internal sealed class CsvRows
     {
         Array.Resize(ref values, Count);
         return values;
-    }
-
-    private static void Skip(TextStream text, long bytes)
-    {
-        byte[] buffer = new byte[64 * 1024];
-        while (bytes > 0)
-        {
-            int count = text.Read(buffer.AsSpan(0, (int)Math.Min(bytes, buffer.Length)));
-            if (count == 0)
-                return;
-            bytes -= count;
-        }
     }
 
     private void ReadRow(CsvReader reader, int line)

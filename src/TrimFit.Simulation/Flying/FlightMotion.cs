@@ -90,6 +90,9 @@ internal sealed class FlightMotion
     public double ThrottleSet { get; private set; }
     public double RotationRatio { get; private set; }
     public double ThrustN { get; private set; }
+    public FlightLeg Leg => _leg;
+    public int LegNumber { get; private set; } = -1; // the constructor begins the first leg once more
+    public bool AtLegStart => _step == _legStart;
     public double BrakeLeftM { get; private set; }
     public double BrakeRightM { get; private set; }
     public double BankRad => Math.Atan(SpeedMPerSec * TurnRateRadPerSec / PhysicalConstants.StandardGravity);
@@ -106,6 +109,7 @@ internal sealed class FlightMotion
     public void Begin(FlightLeg leg)
     {
         _leg = leg;
+        LegNumber++;
         _legStart = _step;
         _turnDone = false;
         _headingAtStart = HeadingRad;
@@ -120,7 +124,12 @@ internal sealed class FlightMotion
         _lastControl = leg.Control;
         if (leg.Control is not (LegControl.Ground or LegControl.Land))
             _landed = false;
-        double shift = leg.Control == LegControl.WeightShift ? leg.WeightShiftM : 0;
+        double shift = leg.Control switch
+        {
+            LegControl.WeightShift => leg.WeightShiftM,
+            LegControl.Ballast => leg.BallastKg * leg.BallastArmM / (_s.Mass.PilotKg + _s.Mass.PowerUnitKg),
+            _ => 0,
+        };
         if (!_tables.TryGetValue(shift, out ThrustTable? table))
             _tables[shift] = table = new ThrustTable(_s.WithCgShift(shift));
         _table = table;
@@ -192,6 +201,7 @@ internal sealed class FlightMotion
         double input = (wing.SensitivityRadPerSecPerM * (_roll + (wing.YawRatio * yaw)) / _table.WeightN)
             + wing.ConstantPullRadPerSec
             + (_s.Brakes.TurnPerMeter * (_s.Brakes.Effective(BrakeRightM) - _s.Brakes.Effective(BrakeLeftM)))
+            + (wing.TrimmerTurnPerMeter * (_leg.TrimmerRightM - _leg.TrimmerLeftM))
             + _disturbance.Step() + _second.Step() + thermalTurn;
         double before = TurnRateRadPerSec;
         if (wing.Response == TurnResponse.FirstOrder)

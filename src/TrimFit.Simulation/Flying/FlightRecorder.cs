@@ -107,6 +107,15 @@ internal sealed class FlightRecorder
             PutInertial(m, bank, pitch);
         if (_sensors.MarksHandsOff && Due(_sensors.BrakesHz > 0 ? _sensors.BrakesHz : Math.Max(_sensors.GyroHz, _sensors.GpsHz), m))
             Put(m, ChannelRole.HandsOff, m.HandsOff ? 1 : 0);
+        if (Due(_sensors.TrimmersHz, m))
+        {
+            Put(m, ChannelRole.TrimmerLeft, m.Leg.TrimmerLeftM);
+            Put(m, ChannelRole.TrimmerRight, m.Leg.TrimmerRightM);
+        }
+        if (Due(_sensors.EngineNoiseHz, m))
+            Put(m, ChannelRole.EngineNoise, Math.Clamp(0.04 + (0.75 * m.RotationRatio) + (0.03 * _rpm.Normal()), 0, 0.999));
+        if (_sensors.MarksLegs && m.AtLegStart)
+            Put(m, ChannelRole.Marker, m.LegNumber);
         _bankBefore = bank;
         _pitchBefore = pitch;
     }
@@ -119,6 +128,7 @@ internal sealed class FlightRecorder
         {
             StartUtc = _s.Start.TimeUtc,
             BrakeUnit = _sensors.BrakesAsFraction ? ControlUnit.Fraction : ControlUnit.Meter,
+            TrimmerUnit = ControlUnit.Meter,
         });
     }
 

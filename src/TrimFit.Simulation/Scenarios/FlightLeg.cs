@@ -38,4 +38,16 @@ public sealed record FlightLeg
 
     /// <summary>Shift of the suspended CG on a weight-shift leg, m, right positive.</summary>
     public double WeightShiftM { get; init => field = Guard.Finite(value); }
+
+    /// <summary>Ballast moved on a ballast leg, kg; it counts in the pilot's mass.</summary>
+    public double BallastKg { get; init => field = Guard.NotNegative(value); }
+
+    /// <summary>Lateral arm the ballast is moved out to, m, right positive.</summary>
+    public double BallastArmM { get; init => field = Guard.Finite(value); }
+
+    /// <summary>Left trimmer on this leg, m.</summary>
+    public double TrimmerLeftM { get; init => field = Guard.NotNegative(value); }
+
+    /// <summary>Right trimmer on this leg, m.</summary>
+    public double TrimmerRightM { get; init => field = Guard.NotNegative(value); }
 }

@@ -15,6 +15,8 @@ public enum LegControl
     Circle,
     /// <summary>Hands off, and the pilot leans by the leg's weight shift.</summary>
     WeightShift,
+    /// <summary>Hands off, with a ballast carried amidships so far moved out to the leg's arm.</summary>
+    Ballast,
     /// <summary>Standing on the ground.</summary>
     Ground,
     /// <summary>Running up: the airspeed grows to trim speed over the leg.</summary>

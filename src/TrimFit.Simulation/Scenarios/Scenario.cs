@@ -45,6 +45,9 @@ public sealed record Scenario
     /// <summary>What the pilot knows of the machine: decides the rig file, not the flight.</summary>
     public RigKnowledge Knowledge { get; init; } = new();
 
+    /// <summary>How the flight is written to files.</summary>
+    public OutputSetup Output { get; init; } = new();
+
     /// <summary>Legs in the order flown.</summary>
     public ImmutableArray<FlightLeg> Legs { get; init; } = [];
 
@@ -141,6 +144,9 @@ public sealed record Scenario
             TurnRad = -leg.TurnRad,
             TurnRateRadPerSec = -leg.TurnRateRadPerSec,
             WeightShiftM = -leg.WeightShiftM,
+            BallastArmM = -leg.BallastArmM,
+            TrimmerLeftM = leg.TrimmerRightM,
+            TrimmerRightM = leg.TrimmerLeftM,
         })],
     };
 }

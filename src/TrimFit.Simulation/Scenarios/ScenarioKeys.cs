@@ -16,6 +16,16 @@ internal static class ScenarioKeys
         ["second_order"] = TurnResponse.SecondOrder,
     };
 
+    private static readonly Dictionary<string, LogSet> LogSets = new()
+    {
+        ["csv"] = LogSet.Csv,
+        ["engine_csv_and_igc"] = LogSet.EngineCsvAndIgc,
+        ["engine_csv_and_gpx"] = LogSet.EngineCsvAndGpx,
+        ["engine_csv_and_nmea"] = LogSet.EngineCsvAndNmea,
+        ["phone_and_gpx"] = LogSet.PhoneAndGpx,
+        ["igc"] = LogSet.Igc,
+    };
+
     private static readonly Dictionary<string, LegPower> Powers = new()
     {
         ["off"] = LegPower.Off,
@@ -32,6 +42,7 @@ internal static class ScenarioKeys
         ["turn"] = LegControl.Turn,
         ["circle"] = LegControl.Circle,
         ["weight_shift"] = LegControl.WeightShift,
+        ["ballast"] = LegControl.Ballast,
         ["ground"] = LegControl.Ground,
         ["take_off"] = LegControl.TakeOff,
         ["land"] = LegControl.Land,
@@ -96,6 +107,7 @@ internal static class ScenarioKeys
             ["sensitivity_deg_s_per_mm"] = ScenarioKey<Scenario>.Number(Deg / Mm, static (s, v) => s with { Wing = s.Wing with { SensitivityRadPerSecPerM = v } }),
             ["yaw_ratio"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Wing = s.Wing with { YawRatio = v } }),
             ["constant_pull_deg_s"] = ScenarioKey<Scenario>.Number(Deg, static (s, v) => s with { Wing = s.Wing with { ConstantPullRadPerSec = v } }),
+            ["trimmer_turn_deg_s_per_mm"] = ScenarioKey<Scenario>.Number(Deg / Mm, static (s, v) => s with { Wing = s.Wing with { TrimmerTurnPerMeter = v } }),
             ["line_length_m"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Wing = s.Wing with { LineLengthM = v } }),
             ["line_spread_m"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Wing = s.Wing with { LineSpreadM = v } }),
             ["trim_speed_m_s"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Wing = s.Wing with { TrimSpeedMPerSec = v } }),
@@ -186,6 +198,9 @@ internal static class ScenarioKeys
             ["airspeed_noise_m_s"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Sensors = s.Sensors with { AirspeedNoiseMPerSec = v } }),
             ["electric_hz"] = ScenarioKey<Scenario>.Whole(static (s, v) => s with { Sensors = s.Sensors with { ElectricHz = v } }),
             ["marks_hands_off"] = ScenarioKey<Scenario>.Flag(static (s, v) => s with { Sensors = s.Sensors with { MarksHandsOff = v } }),
+            ["engine_noise_hz"] = ScenarioKey<Scenario>.Whole(static (s, v) => s with { Sensors = s.Sensors with { EngineNoiseHz = v } }),
+            ["trimmers_hz"] = ScenarioKey<Scenario>.Whole(static (s, v) => s with { Sensors = s.Sensors with { TrimmersHz = v } }),
+            ["marks_legs"] = ScenarioKey<Scenario>.Flag(static (s, v) => s with { Sensors = s.Sensors with { MarksLegs = v } }),
             ["inertial_hz"] = ScenarioKey<Scenario>.Whole(static (s, v) => s with { Sensors = s.Sensors with { InertialHz = v } }),
             ["mounting_roll_deg"] = ScenarioKey<Scenario>.Number(Deg, static (s, v) => s with { Sensors = s.Sensors with { Mounting = s.Sensors.Mounting with { RollRad = v } } }),
             ["mounting_pitch_deg"] = ScenarioKey<Scenario>.Number(Deg, static (s, v) => s with { Sensors = s.Sensors with { Mounting = s.Sensors.Mounting with { PitchRad = v } } }),
@@ -196,6 +211,13 @@ internal static class ScenarioKeys
             ["slipped_yaw_deg"] = ScenarioKey<Scenario>.Number(Deg, static (s, v) => s with { Sensors = s.Sensors with { MountingAfterSlip = s.Sensors.MountingAfterSlip with { YawRad = v } } }),
             ["acceleration_noise_m_s2"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Sensors = s.Sensors with { AccelerationNoiseMPerSec2 = v } }),
             ["acceleration_vibration_m_s2"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Sensors = s.Sensors with { AccelerationVibrationMPerSec2 = v } }),
+        },
+        ["output"] = new()
+        {
+            ["logs"] = ScenarioKey<Scenario>.Word(LogSets, static (s, v) => s with { Output = s.Output with { Logs = v } }),
+            ["dialect"] = ScenarioKey<Scenario>.Word(CsvDialects.ByName, static (s, v) => s with { Output = s.Output with { Dialect = v } }),
+            ["engine_clock_offset_s"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Output = s.Output with { EngineClockOffsetSec = v } }),
+            ["sheet_sloppiness_s"] = ScenarioKey<Scenario>.Number(1, static (s, v) => s with { Output = s.Output with { SheetSloppinessSec = v } }),
         },
         ["rig"] = new()
         {
@@ -227,6 +249,10 @@ internal static class ScenarioKeys
         ["heading_deg"] = ScenarioKey<FlightLeg>.Number(Deg, static (l, v) => l with { HeadingRad = v }),
         ["turn_deg"] = ScenarioKey<FlightLeg>.Number(Deg, static (l, v) => l with { TurnRad = v }),
         ["turn_rate_deg_s"] = ScenarioKey<FlightLeg>.Number(Deg, static (l, v) => l with { TurnRateRadPerSec = v }),
+        ["ballast_kg"] = ScenarioKey<FlightLeg>.Number(1, static (l, v) => l with { BallastKg = v }),
+        ["ballast_arm_mm"] = ScenarioKey<FlightLeg>.Number(Mm, static (l, v) => l with { BallastArmM = v }),
+        ["trimmer_left_mm"] = ScenarioKey<FlightLeg>.Number(Mm, static (l, v) => l with { TrimmerLeftM = v }),
+        ["trimmer_right_mm"] = ScenarioKey<FlightLeg>.Number(Mm, static (l, v) => l with { TrimmerRightM = v }),
         ["weight_shift_mm"] = ScenarioKey<FlightLeg>.Number(Mm, static (l, v) => l with { WeightShiftM = v }),
     };
 }

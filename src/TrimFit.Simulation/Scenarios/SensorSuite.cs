@@ -107,6 +107,15 @@ public sealed record SensorSuite
     /// <summary>Rate of the electrical channels (voltage, current, power), Hz; for an electric machine.</summary>
     public int ElectricHz { get; init => field = Rate(value); }
 
+    /// <summary>Rate of an engine noise level, Hz.</summary>
+    public int EngineNoiseHz { get; init => field = Rate(value); }
+
+    /// <summary>Rate of the trimmers, Hz.</summary>
+    public int TrimmersHz { get; init => field = Rate(value); }
+
+    /// <summary>Whether the pilot sets a mark at the start of each leg, numbered from 1.</summary>
+    public bool MarksLegs { get; init; }
+
     /// <summary>Whether hands-off legs are marked in a channel, at the rate of the brakes or else of the fastest sensor.</summary>
     public bool MarksHandsOff { get; init; }
 

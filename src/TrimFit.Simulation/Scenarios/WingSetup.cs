@@ -14,6 +14,10 @@ public sealed record WingSetup
     /// <summary>Constant pull of wing and lines, rad/s.</summary>
     public double ConstantPullRadPerSec { get; init => field = Guard.Finite(value); }
 
+    /// <summary>Turn rate per metre of right-minus-left trimmer, rad/s per m; a trimmer let out flies that side faster, away from it.
+    /// Default −0.05 deg/s per mm.</summary>
+    public double TrimmerTurnPerMeter { get; init => field = Guard.Finite(value); } = double.DegreesToRadians(-50);
+
     /// <summary>Length of the lines with their risers, m.</summary>
     public double LineLengthM { get; init => field = Guard.Positive(value); } = 7;
 

@@ -8,11 +8,10 @@ public static class SheetText
 {
     /// <summary>Writes the sheet (TOML, schema <c>trimfit-flight/1</c>).</summary>
     /// <param name="flight">The flight.</param>
-    /// <param name="sloppinessSec">Standard deviation of the times noted, s: pilots are not clocks. Errors stay below twice it.</param>
-    public static string Write(SimulatedFlight flight, double sloppinessSec = 0)
+    public static string Write(SimulatedFlight flight)
     {
         ArgumentNullException.ThrowIfNull(flight);
-        Core.Guard.NotNegative(sloppinessSec);
+        double sloppinessSec = flight.Scenario.Output.SheetSloppinessSec;
         var random = new RandomStream(flight.Scenario.Seed, 31);
         var text = new StringBuilder();
         Line($"schema = \"trimfit-flight/1\"");
@@ -32,6 +31,7 @@ public static class SheetText
                 LegControl.HoldHeading => "held",
                 LegControl.Brakes => "brake_step",
                 LegControl.WeightShift => "weight_shift",
+                LegControl.Ballast => "ballast",
                 _ => "other",
             };
             Line($"kind = \"{kind}\"");
@@ -39,6 +39,11 @@ public static class SheetText
                 Line($"throttle_percent = {throttle * 100:0.#}");
             else
                 Line($"power = \"{ScenarioKeys.WordFor(asked.Power)}\"");
+            if (asked.Control == LegControl.Ballast)
+            {
+                Line($"ballast_kg = {asked.BallastKg:0.##}");
+                Line($"ballast_arm_mm = {asked.BallastArmM * 1000:0.#}");
+            }
             if (asked.Control == LegControl.Brakes)
             {
                 Line($"brake_left = {asked.BrakeLeftM * 1000:0.#}");
