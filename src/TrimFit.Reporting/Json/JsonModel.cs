@@ -130,6 +130,7 @@ internal record TurnModelJson
 internal sealed record CrossCheckJson : TurnModelJson
 {
     /// <summary><c>agrees</c>, <c>differs</c>, or null when one of the two cannot say.</summary>
+    [JsonPropertyOrder(1)] // after the keys it shares with the turn model
     public required string? Agreement { get; init; }
 }
 

@@ -133,7 +133,7 @@ internal sealed record EnglishWords : Words
         AxisTurnRate = "turn rate [°/s], right +",
         AxisTurnRateShort = "turn [°/s]",
         AxisTime = "time [min]",
-        AxisBrake = "brakes, right +",
+        AxisBrake = "brakes",
         HandsOff = "hands off",
         HandsOn = "hands on, brake part taken out",
         FittedLine = "fitted line",
@@ -471,7 +471,7 @@ internal sealed record EnglishWords : Words
         FormattableString.Invariant($"Turn rate against thrust: {points} windows of the flight with the brakes' part taken out, the fitted line and its 95 % band.");
 
     public override string FlightPlotDescription(double durationSec, Numbers numbers) =>
-        $"Thrust, brakes and turn rate over {numbers.Duration(durationSec)}; spans left out are shaded.";
+        $"Thrust, brakes and turn rate over {numbers.Duration(durationSec)}; right is positive, spans left out are shaded, bars are the windows used.";
 
     private string Turns(double radPerSec, Numbers numbers) =>
         numbers.RateNumber(radPerSec) == numbers.RateNumber(0) ? "it flies straight" : $"it turns {Side(radPerSec)} at {numbers.Rate(Math.Abs(radPerSec))}";
