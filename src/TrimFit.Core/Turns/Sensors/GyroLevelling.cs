@@ -1,5 +1,6 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Statistics;
+using TrimFit.Core.Units;
 
 namespace TrimFit.Core.Turns;
 
@@ -8,9 +9,11 @@ namespace TrimFit.Core.Turns;
 /// <para>The heading rate is the part of the rotation along gravity, and gravity is the mean of the accelerometer over ten seconds to either
 /// side, never across a sudden change of attitude (the frame pitching with the power, or the sensor slipping). Bias of the three axes comes from
 /// standing still, or from the heading in flight; only its change with attitude is taken out here, its mean stays in the result and is reported.</para>
-/// <para>Error: in a coordinated turn the accelerometer feels the frame's own down, not the Earth's, so the result is the heading rate times
-/// cos(bank): tan(bank) = V r/g makes that 0.2 % at 3 deg/s and 0.8 % at 6 deg/s at 11 m/s, less than the scale of the gyro itself. A mean
-/// over ten seconds of vibration (3 m/s² at 10 Hz) leaves the axis within 2 deg, which is 0.06 % of the rate.</para>
+/// <para>Error: in a coordinated turn the accelerometer feels the frame's own down, not the Earth's, so the rate along it is the heading rate
+/// times cos(bank), 0.2 % less at 3 deg/s and 0.8 % at 6 deg/s at 11 m/s; <see cref="TakeBankOut"/> puts that right when the airspeed is known.
+/// A mean over ten seconds of vibration (3 m/s² at 10 Hz) leaves the axis within 2 deg, which is 0.06 % of the rate. While the bank changes, a
+/// frame pitched by p adds sin(p) times the bank rate, that is sin(p) V/g times the change of turn rate: at 10 deg and 11 m/s this looks
+/// like a delay of 0.2 s, and it is moved like one.</para>
 /// </remarks>
 internal static class GyroLevelling
 {
@@ -140,6 +143,22 @@ internal static class GyroLevelling
         if (still is not null)
             findings.Add(Finding.Of(FindingCode.GyroBiasFromStandstill, kept, Math.Sqrt(variance), still.Seconds));
         return new(rate, biasKnown ? new Estimate(kept, Math.Sqrt(variance)) : null, sign);
+    }
+
+    /// <summary>Makes the rate about the banked frame's own axis that of the heading: r = p/cos(bank), and tan(bank) = V r/g makes sin(bank) = V p/g.</summary>
+    /// <param name="rate">Rate p with its bias, rad/s; changed in place.</param>
+    /// <param name="smoothed">The same, smoothed, for the bank.</param>
+    /// <param name="bias">Bias within, rad/s.</param>
+    /// <param name="airspeed">Airspeed V, m/s.</param>
+    public static void TakeBankOut(double[] rate, double[] smoothed, double bias, double airspeed)
+    {
+        const double SteepestSine = 0.8; // beyond, the turn is no longer the coordinated one of the formula
+        for (int i = 0; i < rate.Length; i++)
+        {
+            double sine = Math.Min(SteepestSine, Math.Abs(airspeed * (smoothed[i] - bias) / PhysicalConstants.StandardGravity));
+            if (double.IsFinite(sine))
+                rate[i] = bias + ((rate[i] - bias) / Math.Sqrt(1 - (sine * sine)));
+        }
     }
 
     /// <summary>Finds the axis along which the rotation is the heading's, by regression on the heading; null when it is not clear.</summary>

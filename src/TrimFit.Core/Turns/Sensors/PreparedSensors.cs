@@ -62,7 +62,9 @@ internal sealed record PreparedSensors
         bool throughAir = hasVelocity ? wind is not null : compass.Length > 0;
         double[] unwrapped = heading.Length > 0 ? Angles.Unwrap(heading) : [];
 
-        (double[] gyro, Estimate? bias) = YawRate(log, time, power, orientation, north, east, flight, unwrapped, inFlight, findings);
+        (double[] gyro, Estimate? bias, bool alongGravity) = YawRate(log, time, power, orientation, north, east, flight, unwrapped, inFlight, findings);
+        if (alongGravity && wind is not null)
+            GyroLevelling.TakeBankOut(gyro, SmoothedRate(time, gyro), bias?.Value ?? 0, wind.AirspeedMPerSec);
         bool logged = gyro.Length > 0 || log.Has(ChannelRole.YawRate) || log.Has(ChannelRole.GyroZ);
         GyroReport? report = logged ? new GyroReport { BiasRadPerSec = bias } : null;
         if (gyro.Length > 0)
@@ -71,6 +73,11 @@ internal sealed record PreparedSensors
                 gyro = GyroCheck.Earlier(time, gyro, log.GyroDelaySec);
             GyroCheck.Result check = GyroCheck.Of(time, gyro, unwrapped, inFlight, throughAir, bias, findings);
             gyro = check.Gyro;
+            for (int i = 0; i < findings.Count; i++) // the bias was read before the unit was known
+            {
+                if (findings[i] is { Code: FindingCode.GyroBiasFromStandstill } f)
+                    findings[i] = Finding.Of(f.Code, f.Values[0] * check.Factor, f.Values[1] * Math.Abs(check.Factor), f.Values[2]);
+            }
             report = check.Report with { DelaySec = check.Report.DelaySec + log.GyroDelaySec ?? (log.GyroDelaySec != 0 ? log.GyroDelaySec : null) };
             if (check.HeadingAheadSec > 0 && hasVelocity)
             {
@@ -116,7 +123,7 @@ internal sealed record PreparedSensors
     }
 
     /// <summary>One yaw rate from whatever gyro the log has, and its bias when standing still or levelling showed it.</summary>
-    private static (double[] Rate, Estimate? Bias) YawRate(
+    private static (double[] Rate, Estimate? Bias, bool AlongGravity) YawRate(
         FlightLog log, double[] time, double[] power, string? orientation, double[] north, double[] east, FlightSpan? flight,
         double[] heading, bool[] inFlight, List<Finding> findings)
     {
@@ -128,7 +135,7 @@ internal sealed record PreparedSensors
         if (log.Has(ChannelRole.YawRate) || !threeAxes)
         {
             double[] single = log.Has(ChannelRole.YawRate) ? log[ChannelRole.YawRate].ToArray() : log[ChannelRole.GyroZ].ToArray();
-            return single.Length == 0 ? ([], null) : Single(single, Still([single]));
+            return single.Length == 0 ? ([], null, false) : Single(single, Still([single]));
         }
         double[][] gyro = [log[ChannelRole.GyroX].ToArray(), log[ChannelRole.GyroY].ToArray(), log[ChannelRole.GyroZ].ToArray()];
         if (log.Has(ChannelRole.AccelerationX) && log.Has(ChannelRole.AccelerationY) && log.Has(ChannelRole.AccelerationZ))
@@ -136,21 +143,21 @@ internal sealed record PreparedSensors
             double[][] acceleration =
                 [log[ChannelRole.AccelerationX].ToArray(), log[ChannelRole.AccelerationY].ToArray(), log[ChannelRole.AccelerationZ].ToArray()];
             if (GyroLevelling.ByGravity(time, gyro, acceleration, power, heading, inFlight, Still(gyro), findings) is GyroLevelling.Result levelled)
-                return (levelled.YawRate, levelled.Bias);
+                return (levelled.YawRate, levelled.Bias, true);
         }
         if (GyroLevelling.ByHeading(time, gyro, heading, inFlight, findings) is GyroLevelling.Result found)
-            return (found.YawRate, found.Bias);
+            return (found.YawRate, found.Bias, false);
         (int axis, int sign) = GyroLevelling.VerticalAxis(orientation);
         findings.Add(Finding.Of(FindingCode.GyroAxisAssumed, axis, sign));
         double[] taken = [.. gyro[axis].Select(g => sign * g)];
         return Single(taken, Still([taken]));
 
-        (double[], Estimate?) Single(double[] rate, Standstill? still)
+        (double[], Estimate?, bool) Single(double[] rate, Standstill? still)
         {
             if (still is null)
-                return (rate, null);
+                return (rate, null, false);
             findings.Add(Finding.Of(FindingCode.GyroBiasFromStandstill, still.Bias[0].Value, still.Bias[0].StandardError, still.Seconds));
-            return (rate, still.Bias[0]);
+            return (rate, still.Bias[0], false);
         }
     }
 
