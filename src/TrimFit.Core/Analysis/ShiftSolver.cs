@@ -20,8 +20,14 @@ internal static class ShiftSolver
     /// <summary>Share of draws in which a millimetre may work the other way before the adjustment is not offered (model page section 1).</summary>
     private const double LargestSignShare = 0.025;
 
-    /// <summary>Secant steps of a travel: the statics are almost linear in it, three leave less than a micrometre.</summary>
-    private const int TravelSteps = 5;
+    /// <summary>Share of draws in which the frame must twist one way before the direction is named (model page section 1).</summary>
+    private const double DirectionShare = 0.975;
+
+    /// <summary>Turns left that differ by less than this rank alike; then the riser twist decides, rad/s.</summary>
+    private static readonly double RankingStepRadPerSec = double.DegreesToRadians(0.1);
+
+    /// <summary>Twist ratios that differ by less than this rank alike; then the order of <see cref="AdjustmentKind"/> decides.</summary>
+    private const double RankingTwistStep = 0.1;
 
     private static readonly PowerSetting[] _settings = [PowerSetting.Off, PowerSetting.Idle, PowerSetting.Cruise, PowerSetting.Full];
 
@@ -51,7 +57,7 @@ internal static class ShiftSolver
     }
 
     public static ImmutableArray<AdjustmentReport> Adjustments(
-        Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, bool constantFirst)
+        Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit, bool constantFirst)
     {
         var reports = new List<AdjustmentReport>();
         foreach (Adjustment adjustment in Adjustment.All.Where(a => a.AppliesTo(rig)))
@@ -59,7 +65,8 @@ internal static class ShiftSolver
             // No harness hang-point travel for a large constant pull before trimmers, lines and brakes are checked (model page section 2).
             if (constantFirst && adjustment.Kind is (AdjustmentKind.HarnessFront or AdjustmentKind.HarnessFrontRear))
                 continue;
-            if (Solve(adjustment, rig, spread, posterior, levels, signals) is AdjustmentReport report)
+            if (TravelEffect.Of(adjustment, rig, posterior, signals, fit) is TravelEffect effect
+                && Solve(adjustment, effect, rig, spread, posterior, levels, signals) is AdjustmentReport report)
                 reports.Add(report);
         }
         return
@@ -67,124 +74,94 @@ internal static class ShiftSolver
             .. reports.OrderBy(r => r.WithinLimits == false)
                 .ThenBy(r => r.TwistRatioHigh95 >= TwistRefused)
                 .ThenBy(r => r.TwistRatioHigh95 >= TwistWarning)
-                .ThenBy(r => Math.Round(Math.Abs(r.TurnLeftAt[2].RateRadPerSec ?? 0), 4))
-                .ThenBy(r => r.TwistRatioHigh95 ?? 0)
-                .ThenBy(r => Math.Abs(r.TravelM)),
+                .ThenBy(r => Math.Round(Math.Abs(r.TurnLeftAt[2].RateRadPerSec ?? 0) / RankingStepRadPerSec)) // what rounding to real steps leaves
+                .ThenBy(r => Math.Round((r.TwistRatioHigh95 ?? 0) / RankingTwistStep))
+                .ThenBy(r => r.Kind),
         ];
     }
 
     private static AdjustmentReport? Solve(
-        Adjustment adjustment, Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals)
+        Adjustment adjustment, TravelEffect effect, Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals)
     {
-        const double Millimeter = 0.001;
         int count = posterior.Count;
         var travel = new double[count];
-        double nominalSign = Math.Sign(adjustment.CgOffsetPerTravel(spread.Nominal));
-        double wrongSign = 0, total = 0;
+        double positive = 0, total = 0;
         for (int k = 0; k < count; k++)
         {
             if (!(posterior.Weight[k] > 0))
                 continue;
-            RigValues values = posterior.Rigs[k];
-            double thrust = levels.Balance * values.FullThrustN, yaw = posterior.YawRatio[k];
-            double before = RigStatics.TurningOffset(values, thrust, yaw);
-            double wanted = -posterior.RateAt(k, levels.Balance) / posterior.Sensitivity[k]; // change of the turning offset, m
-            double step = Millimeter;
-            double gain = (RigStatics.TurningOffset(adjustment.Move(values, step), thrust, yaw) - before) / step;
+            (travel[k], double gain) = effect.Null(k, levels.Balance, posterior.RateAt(k, levels.Balance));
             total += posterior.Weight[k];
-            if (Math.Sign(gain) != nominalSign)
-                wrongSign += posterior.Weight[k];
-            double d = gain == 0 ? 0 : wanted / gain;
-            double previous = 0, previousMiss = -wanted;
-            for (int i = 0; i < TravelSteps && d != previous; i++)
-            {
-                double miss = RigStatics.TurningOffset(adjustment.Move(values, d), thrust, yaw) - before - wanted;
-                double slope = (miss - previousMiss) / (d - previous);
-                (previous, previousMiss) = (d, miss);
-                if (!double.IsFinite(slope) || Math.Abs(slope) < 0.1 * Math.Abs(gain) || Math.Abs(miss) < 1e-7)
-                    break;
-                d -= miss / slope;
-            }
-            travel[k] = Math.Clamp(d, -0.5, 0.5);
+            positive += gain > 0 ? posterior.Weight[k] : 0;
         }
-        if (wrongSign > LargestSignShare * total)
-            return null;
+        if (Math.Min(positive, total - positive) > LargestSignShare * total)
+            return null; // which way a travel works is not known well enough
 
         double median = WeightedQuantile.Of(travel, posterior.Weight, 0.5);
         AdjustmentLimit? limit = rig.Limits.GetValueOrDefault(adjustment.Kind);
-        double stepM = limit?.Step ?? adjustment.DefaultStepM;
-        double rounded = Math.Round(median / stepM) * stepM;
+        double step = limit?.Step ?? adjustment.DefaultStep;
+        double rounded = Math.Round(median / step) * step;
         double sign = Math.Sign(median);
         // The step after which the chance of having gone past the null is 10 %.
-        double safe = sign * WeightedQuantile.Of([.. travel.Select(d => d * sign)], posterior.Weight, LargestWrongSide);
-        double first = Math.Min(Math.Min(Math.Abs(median) / 2, LargestFirstStepM), Math.Max(0, safe * sign));
-        first = sign * Math.Floor((first / stepM) + 1e-9) * stepM;
+        double safe = WeightedQuantile.Of([.. travel.Select(d => d * sign)], posterior.Weight, LargestWrongSide);
+        double first = Math.Min(Math.Abs(median) / 2, Math.Max(0, safe));
+        if (adjustment.Unit == TravelUnit.Meter)
+            first = Math.Min(first, LargestFirstStepM);
+        first = sign * Math.Floor((first / step) + 1e-9) * step;
 
-        RigValues nominal = spread.Nominal, moved = adjustment.Move(nominal, rounded), firstMoved = adjustment.Move(nominal, first);
+        RigValues nominal = spread.Nominal, moved = effect.Moved(nominal, rounded), firstMoved = effect.Moved(nominal, first);
         var ratio = new double[count];
-        double left = 0, right = 0;
+        double left = 0, right = 0, wrongSide = 0;
         for (int k = 0; k < count; k++)
         {
             if (!(posterior.Weight[k] > 0))
                 continue;
-            double sine = RigStatics.Solve(adjustment.Move(posterior.Rigs[k], rounded), posterior.Rigs[k].FullThrustN).TwistSine;
+            double sine = RigStatics.Solve(effect.Moved(posterior.Rigs[k], rounded), posterior.Rigs[k].FullThrustN).TwistSine;
             ratio[k] = Math.Abs(sine);
             if (sine < 0)
                 left += posterior.Weight[k];
             else
                 right += posterior.Weight[k];
+            if (travel[k] * sign < first * sign)
+                wrongSide += posterior.Weight[k];
         }
         double high = WeightedQuantile.Of(ratio, posterior.Weight, 0.975);
         StaticState full = RigStatics.Solve(moved, nominal.FullThrustN);
-        var notes = ImmutableArray.CreateBuilder<Finding>();
-        if (high >= TwistRefused)
-            notes.Add(Finding.Of(FindingCode.TwistRefused, high));
-        else if (high >= TwistWarning)
-            notes.Add(Finding.Of(FindingCode.TwistWarning, high));
-        else if (high >= TwistCaution)
-            notes.Add(Finding.Of(FindingCode.TwistCaution, high));
         bool? within = limit is null || (limit.Min is null && limit.Max is null) ? null
             : !(rounded < limit.Min - 1e-9) && !(rounded > limit.Max + 1e-9);
+        var notes = ImmutableArray.CreateBuilder<Finding>();
+        if (high >= TwistCaution)
+            notes.Add(Finding.Of(high >= TwistRefused ? FindingCode.TwistRefused : high >= TwistWarning ? FindingCode.TwistWarning : FindingCode.TwistCaution, high));
+        if (first == 0)
+            notes.Add(Finding.Of(FindingCode.FirstStepTooSmall, step));
         if (within is null)
             notes.Add(Finding.Of(FindingCode.LimitNotGiven));
         else if (within == false)
             notes.Add(Finding.Of(FindingCode.BeyondLimit, rounded < 0 ? limit!.Min ?? 0 : limit!.Max ?? 0));
         if (Math.Abs(moved.CarabinerSpacingM - nominal.CarabinerSpacingM) > 1e-9)
             notes.Add(Finding.Of(FindingCode.SpacingChanges, moved.CarabinerSpacingM));
-        if (first == 0)
-            notes.Add(Finding.Of(FindingCode.FirstStepTooSmall, stepM));
-        double wrongSide = 0;
-        for (int k = 0; k < count; k++)
-        {
-            if (travel[k] * sign < first * sign)
-                wrongSide += posterior.Weight[k];
-        }
         bool newtons = signals.ThrustBasis == ThrustBasis.Newton;
         return new AdjustmentReport
         {
             Kind = adjustment.Kind,
-            TravelM = median,
+            Unit = adjustment.Unit,
+            Travel = median,
             Interval95 = TrimPosterior.Interval95(travel, posterior.Weight),
-            RoundedM = rounded,
-            FirstStepM = first,
+            Rounded = rounded,
+            FirstStep = first,
             Efficiency = adjustment.CgOffsetPerTravel(nominal),
             ThrustLineOffsetM = moved.ThrustLineOffsetM,
             TwistRatio = newtons ? WeightedQuantile.Of(ratio, posterior.Weight, 0.5) : null,
             TwistRatioHigh95 = newtons ? high : null,
-            TwistDirection = left > 0.975 * (left + right) ? TwistDirection.Left : right > 0.975 * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
+            TwistDirection = left > DirectionShare * (left + right) ? TwistDirection.Left
+                : right > DirectionShare * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
             RiserLoadLeftN = newtons ? full.RiserLoadLeftN : null,
             RiserLoadRightN = newtons ? full.RiserLoadRightN : null,
             HangCheckLeftKg = firstMoved.SuspendedKg * (0.5 - (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
             HangCheckRightKg = firstMoved.SuspendedKg * (0.5 + (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
-            TurnLeftAt = TurnLeft(posterior, levels, signals, (k, fraction) =>
-            {
-                RigValues values = posterior.Rigs[k];
-                double thrust = fraction * values.FullThrustN, yaw = posterior.YawRatio[k];
-                return posterior.Sensitivity[k]
-                    * (RigStatics.TurningOffset(adjustment.Move(values, rounded), thrust, yaw) - RigStatics.TurningOffset(values, thrust, yaw));
-            }),
+            TurnLeftAt = TurnLeft(posterior, levels, signals, (k, fraction) => effect.TurnChange(k, fraction, rounded)),
             WithinLimits = within,
-            ProbabilityWrongSide = wrongSide / total,
+            ProbabilityWrongSide = total > 0 ? wrongSide / total : 1,
             Notes = notes.ToImmutable(),
         };
     }

@@ -52,7 +52,7 @@ public sealed partial record TrimAnalysis
                 bool constantFirst = Math.Abs(shift.ConstantPartM) > VerdictRules.LargestConstantPartM;
                 if (constantFirst)
                     warnings.Add(Finding.Of(FindingCode.ConstantPartFirst, shift.ConstantPartM));
-                adjustments = ShiftSolver.Adjustments(rig, spread, posterior, levels, signals, constantFirst);
+                adjustments = ShiftSolver.Adjustments(rig, spread, posterior, levels, signals, fit, constantFirst);
             }
         }
         if (pull.AtBalance.RateRadPerSec is double rate && Math.Abs(rate) > VerdictRules.StrongPullRadPerSec)

@@ -97,14 +97,16 @@ public sealed record AdjustmentReport
 {
     /// <summary>Which part.</summary>
     public required AdjustmentKind Kind { get; init; }
-    /// <summary>Mechanical travel, m, right positive: median.</summary>
-    public required double TravelM { get; init; }
+    /// <summary>What the travel is measured in.</summary>
+    public TravelUnit Unit { get; init; }
+    /// <summary>Mechanical travel in <see cref="Unit"/>, right positive: median.</summary>
+    public required double Travel { get; init; }
     /// <summary>95 % interval of the travel.</summary>
     public required ConfidenceInterval Interval95 { get; init; }
-    /// <summary>Travel rounded to the part's step, or to 1 mm, m.</summary>
-    public required double RoundedM { get; init; }
-    /// <summary>First step, m: at most half the median travel and 15 mm until sign and size are confirmed.</summary>
-    public required double FirstStepM { get; init; }
+    /// <summary>Travel rounded to the part's step, or to 1 mm, 0.1 deg or 0.1 kg.</summary>
+    public required double Rounded { get; init; }
+    /// <summary>First step: at most half the median travel and 15 mm until sign and size are confirmed.</summary>
+    public required double FirstStep { get; init; }
     /// <summary>Change of CG offset per travel at rest (the table of the model).</summary>
     public required double Efficiency { get; init; }
     /// <summary>Thrust-line offset t after the whole travel, m.</summary>

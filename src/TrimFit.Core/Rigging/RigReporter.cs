@@ -57,7 +57,7 @@ public static class RigReporter
             At = [.. settings.Select((s, i) => Describe(s.Setting, RigStatics.Solve(values, s.Fraction * full), ratios[i]))],
             Adjustments =
             [
-                .. Adjustment.All.Where(a => a.AppliesTo(rig)).Select(a => new RigAdjustment(
+                .. Adjustment.All.Where(a => a.AppliesTo(rig) && a.Move is not null && a.Unit == TravelUnit.Meter).Select(a => new RigAdjustment(
                     a.Kind, Math.Abs(a.CgOffsetPerTravel(values)), a.CgOffsetPerTravel(values), a.ThrustOffsetPerTravel(values),
                     rig.Limits.GetValueOrDefault(a.Kind)))
             ],

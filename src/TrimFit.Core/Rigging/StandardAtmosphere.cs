@@ -2,7 +2,7 @@ using TrimFit.Core.Units;
 
 namespace TrimFit.Core.Rigging;
 
-/// <summary>The ICAO standard atmosphere from −5 to 80 km geopotential height.</summary>
+/// <summary>The ICAO standard atmosphere from −5.1 to 80 km geopotential height.</summary>
 /// <remarks>ICAO Doc 7488, "Manual of the ICAO Standard Atmosphere"; ISO 2533:1975. A real day's density differs by several percent: give measured
 /// pressure and temperature to <see cref="Density"/> where they are known.</remarks>
 public static class StandardAtmosphere
@@ -12,7 +12,7 @@ public static class StandardAtmosphere
     private const double EarthRadius = 6356766; // m, exact by definition: nominal radius of the geopotential transformation
     private const double SeaLevelTemperature = 288.15; // K, exact by definition
     private const double SeaLevelPressure = 101325; // Pa, exact by definition
-    private const double Lowest = -5000; // m
+    private const double Lowest = -5100; // m: both printed tables begin at −5000 m, one of them geometric
     private const double Highest = 80000; // m
 
     // Base height (m) and temperature gradient (K/m) of each layer, exact by definition.
@@ -20,12 +20,12 @@ public static class StandardAtmosphere
     private static readonly double[] _gradients = [-0.0065, 0, 0.001, 0.0028, 0, -0.0028, -0.002];
 
     /// <summary>Air at a geopotential height.</summary>
-    /// <param name="geopotentialM">Geopotential height, m, from −5000 to 80000.</param>
+    /// <param name="geopotentialM">Geopotential height, m, from −5100 to 80000.</param>
     /// <exception cref="ArgumentOutOfRangeException">The height is outside the table.</exception>
     public static AirState AtGeopotential(double geopotentialM)
     {
         if (!(geopotentialM is >= Lowest and <= Highest))
-            throw new ArgumentOutOfRangeException(nameof(geopotentialM), geopotentialM, "must be from -5000 to 80000 m");
+            throw new ArgumentOutOfRangeException(nameof(geopotentialM), geopotentialM, "must be from -5100 to 80000 m");
         double temperature = SeaLevelTemperature, pressure = SeaLevelPressure;
         for (int layer = 0; ; layer++)
         {
@@ -43,7 +43,7 @@ public static class StandardAtmosphere
     }
 
     /// <summary>Air at a geometric height above mean sea level.</summary>
-    /// <param name="geometricM">Geometric height, m; its geopotential height from −5000 to 80000.</param>
+    /// <param name="geometricM">Geometric height, m; its geopotential height from −5100 to 80000.</param>
     /// <exception cref="ArgumentOutOfRangeException">The height is outside the table.</exception>
     public static AirState AtGeometric(double geometricM) => AtGeopotential(Geopotential(geometricM));
 

@@ -15,6 +15,12 @@ public static class CircleFit
     // A Newton step on the characteristic polynomial below this share is rounding.
     private const double RootTolerance = 1e-15;
 
+    // A geometric step below this share of the radius is rounding.
+    private const double SettledStep = 1e-14;
+
+    // Below this the sum of squares, good to some 1e-16 of itself, no longer tells better from worse: then steps go on while they shrink.
+    private const double SmallStep = 1e-7;
+
     private const int MaximumSteps = 200;
 
     /// <summary>Kåsa's fit: least squares of (x−a)²+(y−b)²−R². I. Kåsa, IEEE Trans. Instrum. Meas. 25 (1976) 8.</summary>
@@ -68,20 +74,22 @@ public static class CircleFit
     /// <inheritdoc cref="Kasa"/>
     public static GeometricCircleFit? GeometricFit(ReadOnlySpan<double> x, ReadOnlySpan<double> y, ReadOnlySpan<double> weights = default)
     {
-        if (Taubin(x, y, weights) is not Circle circle)
+        if (Taubin(x, y, weights) is not Circle start)
             return null;
+        // Coordinates from Taubin's centre, so that rounding of a far origin does not keep the steps from settling.
+        (double originX, double originY) = (start.CenterX, start.CenterY);
+        Circle circle = new(0, 0, start.Radius);
         Span<double> normal = stackalloc double[9];
+        Span<double> gradient = stackalloc double[3];
+        Span<double> damped = stackalloc double[9];
         Span<double> step = stackalloc double[3];
-        double sum = Linearize(circle, x, y, weights, normal, step);
+        Span<double> trialNormal = stackalloc double[9];
+        Span<double> trialGradient = stackalloc double[3];
+        double sum = Linearize(circle, originX, originY, x, y, weights, normal, gradient);
         double damping = 1e-3; // Levenberg's start: small against a scaled diagonal of order one
         double lastStep = double.PositiveInfinity;
         int iterations = 0;
         bool converged = false;
-        Span<double> damped = stackalloc double[9];
-        Span<double> trialNormal = stackalloc double[9];
-        Span<double> trialGradient = stackalloc double[3];
-        Span<double> gradient = stackalloc double[3];
-        step.CopyTo(gradient);
         while (!converged && iterations < MaximumSteps)
         {
             iterations++;
@@ -93,21 +101,19 @@ public static class CircleFit
                 return null;
             Circle trial = new(circle.CenterX + step[0], circle.CenterY + step[1], circle.Radius + step[2]);
             double size = Math.Sqrt((step[0] * step[0]) + (step[1] * step[1]) + (step[2] * step[2])) / circle.Radius;
-            double trialSum = trial.Radius > 0 ? Linearize(trial, x, y, weights, trialNormal, trialGradient) : double.PositiveInfinity;
-            if (trialSum <= sum)
+            double trialSum = trial.Radius > 0 ? Linearize(trial, originX, originY, x, y, weights, trialNormal, trialGradient) : double.PositiveInfinity;
+            if (trialSum <= sum || (size < SmallStep && size < lastStep))
             {
+                converged = size < SettledStep;
                 (circle, sum, lastStep) = (trial, trialSum, size);
                 trialNormal.CopyTo(normal);
                 trialGradient.CopyTo(gradient);
                 damping /= 10;
-                converged = size < 1e-13;
             }
             else
             {
+                converged = size < SmallStep;
                 damping *= 10;
-                converged = size < 1e-13; // no smaller sum within rounding
-                if (converged)
-                    lastStep = size;
             }
         }
         if (!double.IsFinite(circle.Radius))
@@ -124,7 +130,7 @@ public static class CircleFit
             covariance[i] *= variance;
         return new GeometricCircleFit
         {
-            Circle = circle,
+            Circle = new Circle(originX + circle.CenterX, originY + circle.CenterY, circle.Radius),
             SumOfSquares = sum,
             DegreesOfFreedom = degrees,
             ResidualScale = Math.Sqrt(variance),
@@ -135,13 +141,20 @@ public static class CircleFit
 
     // Sum of squared distances, normal matrix JᵀWJ and right side −JᵀW d of the Gauss-Newton step.
     private static double Linearize(
-        Circle c, ReadOnlySpan<double> x, ReadOnlySpan<double> y, ReadOnlySpan<double> weights, Span<double> normal, Span<double> right)
+        Circle c,
+        double originX,
+        double originY,
+        ReadOnlySpan<double> x,
+        ReadOnlySpan<double> y,
+        ReadOnlySpan<double> weights,
+        Span<double> normal,
+        Span<double> right)
     {
         double sum = 0, uu = 0, uv = 0, vv = 0, u1 = 0, v1 = 0, w1 = 0, ud = 0, vd = 0, d1 = 0;
         for (int i = 0; i < x.Length; i++)
         {
             double w = weights.IsEmpty ? 1 : weights[i];
-            double dx = x[i] - c.CenterX, dy = y[i] - c.CenterY;
+            double dx = x[i] - originX - c.CenterX, dy = y[i] - originY - c.CenterY;
             double r = Math.Sqrt((dx * dx) + (dy * dy));
             double u = r > 0 ? dx / r : 0, v = r > 0 ? dy / r : 0; // a point in the centre pulls no way
             double d = r - c.Radius;

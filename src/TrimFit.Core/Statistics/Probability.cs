@@ -8,6 +8,13 @@ internal static class Probability
     public static double Inside(double value, [CallerArgumentExpression(nameof(value))] string? name = null) =>
         value > 0 && value < 1 ? value : throw new ArgumentOutOfRangeException(name, value, "must be above 0 and below 1");
 
+    /// <summary>ln(1 + x) with its digits kept near 0, where the runtime's <c>double.LogP1</c> rounds 1 + x first. W. Kahan's form.</summary>
+    public static double Log1P(double x)
+    {
+        double u = 1 + x;
+        return u == 1 ? x : double.IsPositiveInfinity(u) ? u : Math.Log(u) * (x / (u - 1));
+    }
+
     /// <summary>Root of cdf(x) = p in a bracket, by Newton steps that fall back to halving.</summary>
     /// <param name="cdf">Rising function.</param>
     /// <param name="density">Its slope.</param>

@@ -14,7 +14,7 @@ public static class StudentT
         double v = Checked(degreesOfFreedom);
         if (double.IsPositiveInfinity(v))
             return StandardNormal.Density(t);
-        double log = SpecialFunctions.GammaLn((v + 1) / 2) - SpecialFunctions.GammaLn(v / 2) - (0.5 * Math.Log(v * Math.PI)) - ((v + 1) / 2 * double.LogP1(t * t / v));
+        double log = SpecialFunctions.GammaLn((v + 1) / 2) - SpecialFunctions.GammaLn(v / 2) - (0.5 * Math.Log(v * Math.PI)) - ((v + 1) / 2 * Probability.Log1P(t * t / v));
         return Math.Exp(log);
     }
 

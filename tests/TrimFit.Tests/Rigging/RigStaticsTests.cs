@@ -84,7 +84,7 @@ public class RigStaticsTests
     [InlineData(0.0, AdjustmentKind.HarnessFrontRear, -0.010, -29.25043895485969)]
     public void Moment_about_the_riser_axis_of_a_travel_is_that_of_the_hand_calculation(double thrustDepth, AdjustmentKind kind, double travel, double moment)
     {
-        RigValues moved = Of(kind).Move(HandRig(thrustDepth), travel);
+        RigValues moved = Of(kind).Move!(HandRig(thrustDepth), travel);
         Assert.Equal(moment, RigStatics.Solve(moved, 600).YawMomentNm, 8);
     }
 

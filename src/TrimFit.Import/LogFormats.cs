@@ -1,0 +1,12 @@
+using TrimFit.Import.Csv;
+
+namespace TrimFit.Import;
+
+public static partial class LogFormats
+{
+    /// <summary>Every kind of log file, in the order in which they are asked; a new kind is one line here.</summary>
+    public static IReadOnlyList<ILogFormat> All { get; } =
+    [
+        new CsvLogFormat(),
+    ];
+}
