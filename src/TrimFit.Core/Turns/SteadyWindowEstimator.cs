@@ -27,7 +27,7 @@ public sealed class SteadyWindowEstimator : ITurnEstimator
         double[] heading = signals.HasVelocity ? TurnSignals.AirHeading(signals.VelocityNorth, signals.VelocityEast, signals.Wind) : signals.HeadingRad;
         if (signals.HasGyro)
         {
-            bias = GyroBias(signals, heading);
+            bias = GyroBias(signals, heading) ?? (heading.Length == 0 ? signals.Gyro?.BiasRadPerSec : null); // else from standing still
             if (bias is null)
                 notices.Add(Finding.Of(FindingCode.GyroBiasUnknown));
             double offset = bias?.Value ?? 0;

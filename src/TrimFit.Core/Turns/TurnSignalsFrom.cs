@@ -10,18 +10,9 @@ public sealed partial class TurnSignals
     /// <summary>Reason of a span left out for a strong turn.</summary>
     internal const string StrongTurnReason = "strong turn";
 
-    /// <summary>Speed over ground that tells flight from standing, m/s, kept up for <see cref="TakeOffSec"/>.</summary>
-    private const double FlyingSpeed = 4, TakeOffSec = 8;
-
-    /// <summary>Left out after take-off and before landing: the wing is still being flown by hand there, s.</summary>
-    private const double AfterTakeOffSec = 15, BeforeLandingSec = 10;
-
     /// <summary>A turn is strong and intended beyond this rate, unless three times the flight's own median is more (a kite turns all the time).</summary>
     private static readonly double _strongTurnRadPerSec = double.DegreesToRadians(15);
-    private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3, TurnRateSpanSec = 2;
-
-    /// <summary>Bounds of gyro over GPS turn rate inside which the gyro is believed as it is.</summary>
-    private const double SmallestScale = 0.6, LargestScale = 1.6;
+    private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3;
 
     /// <summary>Makes a flight ready for an estimator.</summary>
     /// <param name="log">The flight.</param>
@@ -35,19 +26,18 @@ public sealed partial class TurnSignals
         var findings = new List<Finding>();
         var thrust = ThrustSource.Of(log, rig, Propulsion.Of(rig));
         findings.AddRange(thrust.Findings);
-        (double[] north, double[] east) = GroundVelocity.Of(log);
-        bool hasVelocity = north.Any(double.IsFinite);
-        if (!hasVelocity)
-            (north, east) = ([], []);
+        double[] power = thrust.Known ? [.. thrust.Thrust.Select(t => t / thrust.FullThrust)] : [];
+        PreparedSensors sensors = PreparedSensors.Of(log, power, rig.Log.GyroOrientation);
+        findings.AddRange(sensors.Report.Findings);
 
         var leftOut = new List<SpanLeftOut>();
         bool[] use = Enumerable.Repeat(true, count).ToArray();
         void LeaveOut(Func<int, bool> left, string reason) => MarkSpans(time, use, left, reason, leftOut);
 
-        if (hasVelocity && FlightSpan(time, north, east) is (double takeOff, double landing))
+        if (sensors.Flight is FlightSpan flight)
         {
-            LeaveOut(i => time[i] < takeOff, "on the ground or launching");
-            LeaveOut(i => time[i] > landing, "landing or on the ground");
+            LeaveOut(i => time[i] < flight.FromSec, "on the ground or launching");
+            LeaveOut(i => time[i] > flight.ToSec, "landing or on the ground");
         }
         if (thrust.Known)
             LeaveOut(i => !double.IsFinite(thrust.Thrust[i]), "no reading of thrust");
@@ -59,29 +49,7 @@ public sealed partial class TurnSignals
         if (hasTrimmers && trimmers.Where(double.IsFinite).Distinct().Take(2).Count() < 2)
             hasTrimmers = false; // never moved: nothing to learn
 
-        double arc = 0;
-        Wind? wind = hasVelocity ? WindFit.Fit(time, north, east, use, out arc) : null;
-        if (hasVelocity && wind is null)
-            findings.Add(Finding.Of(FindingCode.WindUnknown, arc));
-
-        double[] gyro = log.Has(ChannelRole.YawRate) ? log[ChannelRole.YawRate].ToArray()
-            : log.Has(ChannelRole.GyroZ) ? log[ChannelRole.GyroZ].ToArray() : [];
-        double[] compass = log.Has(ChannelRole.Heading) ? log[ChannelRole.Heading].ToArray() : [];
-        double[] heading = hasVelocity ? AirHeading(north, east, wind) : compass;
-        GyroReport? report = null;
-        bool signConfirmed = hasVelocity || compass.Length > 0;
-        if (gyro.Length > 0)
-        {
-            (report, gyro) = CheckGyro(time, gyro, heading, use, findings);
-            if (report.Sign is null && signConfirmed == false)
-                findings.Add(Finding.Of(FindingCode.YawSignUnconfirmed));
-        }
-        else if (heading.Length == 0)
-        {
-            findings.Add(Finding.Of(FindingCode.NoTurnRate));
-        }
-
-        double[] rate = gyro.Length > 0 ? SmoothedRate(time, gyro) : heading.Length > 0 ? HeadingRate(time, heading) : [];
+        double[] rate = sensors.TurnRate;
         if (rate.Length > 0)
         {
             double[] sizes = [.. rate.Where((r, i) => use[i] && double.IsFinite(r)).Select(Math.Abs)];
@@ -114,20 +82,20 @@ public sealed partial class TurnSignals
             BrakeDifference = brakes,
             HasBrakes = hasBrakes,
             TrimmerDifference = hasTrimmers ? trimmers : [],
-            GyroRadPerSec = gyro,
+            GyroRadPerSec = sensors.Gyro,
             RotationRatioSquared = thrust.RotationRatioSquared,
-            HeadingRad = compass,
-            VelocityNorth = north,
-            VelocityEast = east,
-            Wind = wind,
+            HeadingRad = sensors.Compass,
+            VelocityNorth = sensors.North,
+            VelocityEast = sensors.East,
+            Wind = sensors.Report.Wind,
             Use = use,
             SpansLeftOut = [.. leftOut.OrderBy(s => s.StartSec).ThenBy(s => s.EndSec)],
             HandsOff = handsOff,
             HandsOffDeclared = declared,
             AltitudeM = log.Has(ChannelRole.Altitude) ? log[ChannelRole.Altitude].ToArray() : [],
             BrakeUnit = log.BrakeUnit,
-            Gyro = report,
-            YawSignConfirmed = signConfirmed,
+            Gyro = sensors.Report.Gyro,
+            YawSignConfirmed = sensors.Report.YawSignConfirmed,
             Findings = [.. findings],
         };
     }
@@ -159,36 +127,7 @@ public sealed partial class TurnSignals
         }
     }
 
-    /// <summary>From a while after the machine first keeps flying speed to a while before it last does; null when it never does.</summary>
-    private static (double TakeOff, double Landing)? FlightSpan(double[] time, double[] north, double[] east)
-    {
-        double first = double.NaN, last = double.NaN, since = double.NaN;
-        for (int i = 0; i < time.Length; i++)
-        {
-            if (!double.IsFinite(north[i]) || !double.IsFinite(east[i]))
-                continue;
-            if (Math.Sqrt((north[i] * north[i]) + (east[i] * east[i])) < FlyingSpeed)
-            {
-                since = double.NaN;
-                continue;
-            }
-            if (double.IsNaN(since))
-                since = time[i];
-            if (time[i] - since >= TakeOffSec)
-            {
-                if (double.IsNaN(first))
-                    first = since;
-                last = time[i];
-            }
-        }
-        if (double.IsNaN(first))
-            return null;
-        // A record that begins or ends in flight has no launch or landing to leave out.
-        bool beginsFlying = first - time[0] < 1, endsFlying = time[^1] - last < 3;
-        return (beginsFlying ? time[0] : first + AfterTakeOffSec, endsFlying ? time[^1] : last - BeforeLandingSec);
-    }
-
-    private static (double[] Values, bool Has) Difference(FlightLog log, ChannelRole left, ChannelRole right, ChannelRole? signed)
+    internal static (double[] Values, bool Has) Difference(FlightLog log, ChannelRole left, ChannelRole right, ChannelRole? signed)
     {
         if (log.Has(left) && log.Has(right))
         {
@@ -214,142 +153,6 @@ public sealed partial class TurnSignals
         for (int i = 0; i < off.Length; i++)
             off[i] = left[i] - zeroLeft <= slack && right[i] - zeroRight <= slack; // NaN compares false
         return off;
-    }
-
-    /// <summary>Compares the gyro with the turn of the GPS or compass heading over spans of 4 s and mends a reversed sign or a wrong unit.</summary>
-    private static (GyroReport Report, double[] Gyro) CheckGyro(double[] time, double[] gyro, double[] heading, bool[] use, List<Finding> findings)
-    {
-        const double SpanSec = 4;
-        if (heading.Length == 0)
-            return (new GyroReport(), gyro);
-        double[] unwrapped = Angles.Unwrap(heading);
-        var fromGyro = new List<double>();
-        var fromHeading = new List<double>();
-        int start = -1;
-        double integral = 0;
-        for (int i = 0; i < time.Length; i++)
-        {
-            if (!use[i] || (i > 0 && time[i] - time[i - 1] > 1))
-                start = -1;
-            else if (i > 0 && start >= 0 && double.IsFinite(gyro[i]))
-                integral += gyro[i] * (time[i] - LastGyroTime(i));
-            if (!use[i] || !double.IsFinite(unwrapped[i]))
-                continue;
-            if (start >= 0 && time[i] - time[start] >= SpanSec)
-            {
-                double dt = time[i] - time[start];
-                fromGyro.Add(integral / dt);
-                fromHeading.Add((unwrapped[i] - unwrapped[start]) / dt);
-                start = -1;
-            }
-            if (start < 0)
-            {
-                start = i;
-                integral = 0;
-            }
-        }
-        if (fromGyro.Count < 8)
-            return (new GyroReport(), gyro);
-        // The heading is the noisier of the two and the gyro the predictor's error is small against it: regress heading on gyro.
-        double[] x = [.. fromGyro], y = [.. fromHeading];
-        var design = new double[x.Length * 2];
-        Array.Fill(design, 1, 0, x.Length);
-        x.CopyTo(design, x.Length);
-        LeastSquaresFit fit = LeastSquares.Fit(design, y, 2);
-        double slope = fit.Coefficients[1], slopeError = fit[1].StandardError;
-        bool clear = double.IsFinite(slope) && Math.Abs(slope) > 5 * slopeError;
-        if (!clear)
-            return (new GyroReport(), gyro);
-        double scale = 1 / slope;
-        int sign = Math.Sign(scale);
-        double[] mended = gyro;
-        double factor = Math.Abs(scale);
-        const double DegreesInRadian = 180 / Math.PI;
-        if (factor is < SmallestScale or > LargestScale)
-        {
-            double unit = factor > 1 ? DegreesInRadian : 1 / DegreesInRadian;
-            if (factor / unit is > SmallestScale and < LargestScale)
-            {
-                mended = [.. mended.Select(g => g / unit)];
-                findings.Add(Finding.Of(FindingCode.GyroUnitCorrected, factor));
-            }
-            else
-            {
-                findings.Add(Finding.Of(FindingCode.GyroScaleOff, factor));
-            }
-        }
-        if (sign < 0)
-        {
-            mended = [.. mended.Select(g => -g)];
-            findings.Add(Finding.Of(FindingCode.GyroSignReversed, scale));
-        }
-        double bias = -fit.Coefficients[0] / slope * sign;
-        return (new GyroReport
-        {
-            Scale = scale,
-            Sign = sign,
-            BiasRadPerSec = new Estimate(bias, Math.Abs(fit[0].StandardError / slope)),
-        }, mended);
-
-        double LastGyroTime(int index)
-        {
-            for (int k = index - 1; k >= 0; k--)
-            {
-                if (double.IsFinite(gyro[k]))
-                    return time[k];
-            }
-            return time[index];
-        }
-    }
-
-    /// <summary>Mean of the gyro over the last <see cref="TurnRateSpanSec"/> seconds.</summary>
-    private static double[] SmoothedRate(double[] time, double[] gyro)
-    {
-        var smooth = new double[time.Length];
-        double sum = 0;
-        int inside = 0, tail = 0;
-        for (int i = 0; i < smooth.Length; i++)
-        {
-            if (double.IsFinite(gyro[i]))
-            {
-                sum += gyro[i];
-                inside++;
-            }
-            while (time[i] - time[tail] > TurnRateSpanSec)
-            {
-                if (double.IsFinite(gyro[tail]))
-                {
-                    sum -= gyro[tail];
-                    inside--;
-                }
-                tail++;
-            }
-            smooth[i] = inside > 0 ? sum / inside : double.NaN;
-        }
-        return smooth;
-    }
-
-    /// <summary>Change of heading over the last <see cref="TurnRateSpanSec"/> seconds or a little more; held between fixes.</summary>
-    private static double[] HeadingRate(double[] time, double[] heading)
-    {
-        double[] unwrapped = Angles.Unwrap(heading);
-        var rate = new double[time.Length];
-        var fixes = new List<int>();
-        int tail = 0;
-        double last = double.NaN;
-        for (int i = 0; i < rate.Length; i++)
-        {
-            if (double.IsFinite(unwrapped[i]))
-            {
-                fixes.Add(i);
-                while (tail + 1 < fixes.Count && time[i] - time[fixes[tail + 1]] >= TurnRateSpanSec)
-                    tail++;
-                double dt = time[i] - time[fixes[tail]];
-                last = dt is >= TurnRateSpanSec and < 4 * TurnRateSpanSec ? (unwrapped[i] - unwrapped[fixes[tail]]) / dt : double.NaN;
-            }
-            rate[i] = last;
-        }
-        return rate;
     }
 
     private static bool[] Widen(double[] time, bool[] marked, double aroundSec)

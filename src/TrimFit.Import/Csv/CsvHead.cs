@@ -191,13 +191,17 @@ internal sealed class CsvHead
     {
         for (int i = 0; i < records.Count; i++)
         {
-            if (records[i].Cells.Length >= Math.Min(width, 2) && Math.Abs(records[i].Cells.Length - width) <= Math.Max(1, width / 2) && IsData(records[i])
-                && (i + 1 >= records.Count || IsData(records[i + 1]) || IsComment(records[i + 1])))
-            {
+            if (Math.Abs(records[i].Cells.Length - width) <= Math.Max(1, width / 2) && IsData(records[i]) && IsFollowedByData(records, i))
                 return i;
-            }
         }
         return -1;
+    }
+
+    // One of the next few rows must be data too: a preamble may hold a single row of numbers, and a single row of data may be damaged.
+    private static bool IsFollowedByData(List<CsvRecord> records, int at)
+    {
+        List<CsvRecord> next = [.. records.Skip(at + 1).Where(r => !IsComment(r)).Take(3)];
+        return next.Count == 0 || next.Exists(IsData);
     }
 
     private static bool IsData(CsvRecord record)
@@ -375,7 +379,7 @@ internal sealed class CsvHead
                 "Export the log as CSV with the logger's own program.");
         }
         CsvRecord? header = records.FirstOrDefault(r => r.Cells.Length == width);
-        bool headerOnly = header is not null && records.Count(r => r.Cells.Length == width) <= 2;
+        bool headerOnly = header is not null && records.Count(r => r.Cells.Length == width) <= 2 && Texts(header, width).Any(IsKnown);
         return headerOnly
             ? LogFormatException.At(source.Name, header!.Line, null, "a header without rows under it", "rows of numbers", "The logger recorded nothing; copy the log again or take another flight.")
             : LogFormatException.At(source.Name, header?.Line ?? 1, null, "rows without numbers", "a header and rows of numbers", "Export the log as CSV with the logger's own program.");

@@ -224,9 +224,13 @@ internal sealed class CsvPlan
         return Columns.Count > shown ? FormattableString.Invariant($"{names} and {Columns.Count - shown} more") : names;
     }
 
+    /// <summary>The refusal of a file without a header, for whose columns nobody gave names.</summary>
+    public static LogFormatException NoHeader(string file, CsvHead head) => LogFormatException.At(file, 1, null,
+        FormattableString.Invariant($"{head.Width} columns without a header"), "a header, or names for the columns",
+        "Say what they are: --column time=\"column 1\":s --column yaw_rate=\"column 2\":deg/s and so on.");
+
     private LogFormatException NothingKnown() => _head.HeaderLine == 0
-        ? LogFormatException.At(_file, 1, null, FormattableString.Invariant($"{_head.Width} columns without a header"), "a header, or names for the columns",
-            "Say what they are: --column time=\"column 1\":s --column yaw_rate=\"column 2\":deg/s and so on.")
+        ? NoHeader(_file, _head)
         : LogFormatException.At(_file, _head.HeaderLine, null, $"no column that is known beside the time; the header has {Names()}", "columns such as yaw_rate, throttle, rpm, latitude",
             "Name them: --column ROLE=NAME:UNIT.");
 

@@ -354,11 +354,20 @@ internal sealed class CsvRows : ICsvRows
                 $"{_file}({line}): the logger's clock begins again here. The rows from here on are placed {RestartPauseSec} s after the ones before; how long the real pause was is not known.")));
             return true;
         }
-        double from = last, to = t;
-        _leftOut.Add("back", line, null, () => new("time runs back", FormattableString.Invariant($"time runs back from {from:F2} s to {to:F2} s after the first row."),
-            FormattableString.Invariant($"a step back from {from:F2} s to {to:F2} s"), "a time after that of the row before", "Split the log there if this was a restart.",
-            "Split the log there if this was a restart."));
+        string from = Reading(last), to = Reading(t);
+        _leftOut.Add("back", line, null, () => new("time runs back", $"time runs back from {from} to {to}.", $"a step back from {from} to {to}",
+            "a time after that of the row before", "Split the log there if this was a restart.", "Split the log there if this was a restart."));
         return false;
+    }
+
+    // A time as the file shows it.
+    private string Reading(double t)
+    {
+        double clock = _zeroSec + t - _carrySec;
+        if (_time.Kind == CsvTimeKind.Elapsed)
+            return FormattableString.Invariant($"{clock:F2} s");
+        TimeSpan ofDay = TimeSpan.FromSeconds(clock - 86400 * Math.Floor(clock / 86400));
+        return ofDay.ToString(@"hh\:mm\:ss\.ff", System.Globalization.CultureInfo.InvariantCulture);
     }
 
     private void Grow()

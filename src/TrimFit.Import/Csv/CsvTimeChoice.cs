@@ -57,6 +57,8 @@ internal static class CsvTimeChoice
             return BuildWeek(head, columns, week, weekTime);
         if (times.Count == 0)
         {
+            if (head.HeaderLine == 0 && !columns.Any(c => c.Told))
+                throw CsvPlan.NoHeader(file, head);
             throw LogFormatException.At(file, Math.Max(1, head.HeaderLine), null, $"no column for the time; the header has {names()}",
                 "a column with the time of each row", "Name it: --column time=NAME:s.");
         }

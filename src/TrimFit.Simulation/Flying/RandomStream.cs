@@ -16,6 +16,9 @@ internal sealed class RandomStream
         _s3 = SplitMix(ref state);
     }
 
+    /// <summary>A stream from a given state, for checks against published sequences.</summary>
+    public RandomStream(ulong s0, ulong s1, ulong s2, ulong s3) => (_s0, _s1, _s2, _s3) = (s0, s1, s2, s3);
+
     /// <summary>The next 64 bits.</summary>
     public ulong Next()
     {

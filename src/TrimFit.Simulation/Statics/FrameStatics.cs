@@ -4,9 +4,11 @@ namespace TrimFit.Simulation;
 
 /// <summary>A rigid frame on two straight risers of fixed length, in steady flight, solved by vectors.</summary>
 /// <remarks>
-/// Axes of the wing: origin midway between the risers' upper ends, z along the line from there to the carabiners' midpoint, x forward, y right:
-/// a wing in flight banks and leans until it is square to its risers, so the carabiners' midpoint is at x = y = 0 and gravity has the free
-/// direction. Axes of the frame: as it hangs with the engine off, origin between the carabiners on the frame's centre line.
+/// Axes of the wing: origin midway between the risers' upper ends, z along the line from there to the carabiners' midpoint, x forward, y right.
+/// The lines fan out over the span and hold the carabiners' midpoint under the wing's middle, x = y = 0; gravity has the free direction, since a
+/// wing banks and leans in flight until it is square to the pull of its risers: a symmetric wing that does not slip makes no side force, so what
+/// two straight diverging risers pull sideways the fans take up. Axes of the frame: as it hangs with the engine off, origin between the
+/// carabiners on the frame's centre line.
 /// Eight unknowns (depth of the carabiners, roll, pitch and yaw of the frame, two tensions, two components of gravity's direction) from
 /// eight equations (three forces, three moments, two lengths), by Newton's method with a differenced Jacobian.
 /// Left out: stretch of the risers, their own stiffness against twist, the pilot swinging in the harness.
@@ -143,7 +145,7 @@ internal sealed class FrameStatics
             + ((-_rotation * _propeller.TorqueAt(thrustN)) * axis)
             + new Vector(0, 0, yawCouple);
         f[0] = force.X;
-        f[1] = force.Y;
+        f[1] = weight.Y + thrust.Y; // no side force of the wing: the fans of lines cancel the risers' own
         f[2] = force.Z;
         f[3] = moment.X;
         f[4] = moment.Y;
