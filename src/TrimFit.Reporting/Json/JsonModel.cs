@@ -113,6 +113,8 @@ internal sealed record GyroJson
     public required double? Scale { get; init; }
     public required int? Sign { get; init; }
     public required double? DelayS { get; init; }
+    public required double? ScaleStdError { get; init; }
+    public required double? DelayStdErrorS { get; init; }
 }
 
 internal record TurnModelJson

@@ -24,7 +24,7 @@ public class ReportJsonTests
         Assert.Equal(["name", "sha256", "format", "rows_read", "rows_left_out", "columns"], Keys(fit.GetProperty("inputs").GetProperty("files")[0]));
         Assert.Equal(["start", "duration_s", "rate_hz", "gaps", "clocks"], Keys(fit.GetProperty("sampling")));
         Assert.Equal(["north_m_s", "east_m_s", "airspeed_m_s", "arc_deg", "north_std_error_m_s", "east_std_error_m_s", "airspeed_std_error_m_s"], Keys(fit.GetProperty("wind")));
-        Assert.Equal(["bias_deg_s", "bias_std_error_deg_s", "scale", "sign", "delay_s"], Keys(fit.GetProperty("gyro")));
+        Assert.Equal(["bias_deg_s", "bias_std_error_deg_s", "scale", "sign", "delay_s", "scale_std_error", "delay_std_error_s"], Keys(fit.GetProperty("gyro")));
         Assert.Equal(["method", "thrust_basis", "coefficients", "covariance", "lag_s", "disturbance", "n_eff", "condition"], Keys(fit.GetProperty("turn_model")));
         Assert.Equal(["name", "unit", "value", "std_error", "low95", "high95", "reason"], Keys(fit.GetProperty("turn_model").GetProperty("coefficients")[0]));
         Assert.Equal(["rms_deg_s", "tau_s"], Keys(fit.GetProperty("turn_model").GetProperty("disturbance")));
