@@ -250,7 +250,7 @@ internal sealed class CsvPlan
         ChannelRole.Pressure => "hPa, Pa",
         ChannelRole.Power => "W, kW",
         ChannelRole.Voltage => "V, mV",
-        ChannelRole.Current => "A, mA",
+        ChannelRole.Current or ChannelRole.MotorCurrent => "A, mA",
         ChannelRole.Accelerator or ChannelRole.EngineNoise => "%, 0-1",
         ChannelRole.HandsOff or ChannelRole.Marker => "count",
         _ => "m/s, km/h",
