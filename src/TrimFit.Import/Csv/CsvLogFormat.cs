@@ -50,7 +50,7 @@ public sealed class CsvLogFormat : ILogFormat
         ClockKind clock = timing.Kind switch
         {
             CsvTimeKind.Elapsed => ClockKind.Elapsed,
-            CsvTimeKind.TimeOfDay => ClockKind.TimeOfDay,
+            CsvTimeKind.TimeOfDay or CsvTimeKind.ClockOfDateTime => ClockKind.TimeOfDay,
             _ => ClockKind.Absolute,
         };
         double[] time = rows.TimeSec;

@@ -32,6 +32,7 @@ internal sealed class CsvPlan
         var plan = new CsvPlan(file, head);
         plan.ApplyRules(rules);
         plan.FindByName();
+        plan.FindAxesByFileName();
         plan.KeepOnePerRole();
         plan.FindTime();
         plan.CheckSample();
@@ -158,6 +159,30 @@ internal sealed class CsvPlan
             column.RoleBasis = "name";
             column.Unit = unit;
             column.UnitBasis = unitBasis;
+        }
+    }
+
+    // Phones write one file per sensor, with the axes as x, y, z and the sensor in the file's name.
+    private void FindAxesByFileName()
+    {
+        string key = ColumnNames.Key(Path.GetFileNameWithoutExtension(_file));
+        ChannelRole? x = key.Contains("gyro", StringComparison.Ordinal) || key.Contains("rotationrate", StringComparison.Ordinal) ? ChannelRole.GyroX
+            : key.Contains("accel", StringComparison.Ordinal) ? ChannelRole.AccelerationX : null;
+        if (x is null || _head.Names.Length > 12 || Columns.Any(c => c.Role >= ChannelRole.GyroX && c.Role <= ChannelRole.AccelerationZ))
+            return;
+        foreach (CsvColumn column in Columns)
+        {
+            int axis = column.Role is null ? ColumnNames.Key(column.BareName) switch { "x" => 0, "y" => 1, "z" => 2, _ => -1 } : -1;
+            ChannelRole role = x.Value + axis;
+            if (axis < 0 || column.Unit is not null && !LogUnits.Fits(role, column.Unit))
+                continue;
+            column.Role = role;
+            column.RoleBasis = "file name";
+            if (column.Unit is null && x == ChannelRole.GyroX && LogUnits.TryParse("rad/s", out LogUnit radians))
+            {
+                column.Unit = radians;
+                column.UnitBasis = "by convention of phones";
+            }
         }
     }
 
