@@ -17,11 +17,11 @@ public sealed class CsvLogFormat : ILogFormat
         ArgumentNullException.ThrowIfNull(source);
         ArgumentNullException.ThrowIfNull(options);
         CsvHead head = CsvHead.Read(source);
-        CsvPlan plan = CsvPlan.Create(source.Name, head, options.Columns);
+        CsvPlan plan = CsvPlan.Create(source.Name, head, options);
         var rows = new CsvRows(source.Name, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
         {
-            plan = CsvPlan.Create(source.Name, head, options.Columns);
+            plan = CsvPlan.Create(source.Name, head, options);
             rows = new CsvRows(source.Name, head, plan, options.Strict);
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }
@@ -69,6 +69,7 @@ public sealed class CsvLogFormat : ILogFormat
             Clock = clock,
             Origin = origin,
             IsUtc = clock != ClockKind.Elapsed && (plan.Time.IsUtc || rows.SawZone),
+            ElapsedStartSec = clock == ClockKind.Elapsed ? rows.ZeroSec + first : 0,
             TimeSec = time,
             Columns = columns,
             BrakeUnit = units.BrakeUnit,

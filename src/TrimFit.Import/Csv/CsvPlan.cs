@@ -24,10 +24,10 @@ internal sealed class CsvPlan
 
     /// <summary>Makes the plan.</summary>
     /// <exception cref="LogFormatException">A told column is not there, no column gives the time, or none but the time is known.</exception>
-    public static CsvPlan Create(string file, CsvHead head, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan Create(string file, CsvHead head, ImportOptions options)
     {
         var plan = new CsvPlan(file, head);
-        plan.ApplyRules(rules);
+        plan.ApplyRules(options.Columns, options.ColumnsMayBeElsewhere);
         plan.FindByName();
         plan.KeepOnePerRole();
         plan.FindTime();
@@ -47,14 +47,16 @@ internal sealed class CsvPlan
         return new CsvColumn { Index = index, Name = name, BareName = parts.Name, Unit = unit, UnitBasis = basis };
     }
 
-    private void ApplyRules(IReadOnlyList<ColumnRule> rules)
+    private void ApplyRules(IReadOnlyList<ColumnRule> rules, bool mayBeElsewhere)
     {
         var given = new HashSet<ChannelRole>();
         foreach (ColumnRule rule in rules)
         {
+            CsvColumn? column = Find(rule.Name);
+            if (column is null && mayBeElsewhere)
+                continue;
             if (!given.Add(rule.Role)) // the person's word comes before the rig file's
                 continue;
-            CsvColumn? column = Find(rule.Name);
             if (column is null)
             {
                 throw LogFormatException.At(_file, Math.Max(1, _head.HeaderLine), null, $"no column \"{rule.Name}\" for {ChannelRoles.NameOf(rule.Role)}",
