@@ -909,6 +909,15 @@ internal static class ColumnNames
     /// <summary>Added to the rank of a name that was found behind a prefix.</summary>
     public const int BehindPrefix = 100_000;
 
+    // Names of the GPS week and of the time in it; with them the time comes from two columns.
+    private static readonly string[] _weeks = ["gps week", "week", "gwk", "week number", "week no", "gps week number", "wn"];
+    private static readonly string[] _weekTimes = ["tow", "gps tow", "itow", "time of week", "gps time of week", "seconds of week", "sow", "gps seconds", "gps sow", "gms", "gps ms", "tow ms", "gps itow"];
+
+    // Names of the columns of a log that writes one value per row.
+    private static readonly string[] _channels = ["name", "channel", "sensor", "signal", "parameter", "key", "variable", "field", "measurement", "metric", "quantity", "topic", "kanal", "größe", "messgröße", "voie", "canal", "canale"];
+    private static readonly string[] _values = ["value", "val", "reading", "wert", "messwert", "valeur", "valor", "valore", "waarde"];
+    private static readonly string[] _unitColumns = ["unit", "units", "einheit", "unité", "unidad", "unità", "eenheid"];
+
     // Words that make a column something else than its last words say: a target is no measurement, a wind speed no speed of the wing.
     private static readonly HashSet<string> _otherThings = new(StringComparer.Ordinal)
     {
@@ -919,6 +928,27 @@ internal static class ColumnNames
     };
 
     private static readonly Dictionary<string, (ColumnName Name, int Rank)> _byKey = Index();
+
+    /// <summary>Whether a name is that of the GPS week.</summary>
+    public static bool IsWeek(string name) => IsOneOf(_weeks, name);
+
+    /// <summary>Whether a name is that of the time in the GPS week.</summary>
+    public static bool IsWeekTime(string name) => IsOneOf(_weekTimes, name);
+
+    /// <summary>Whether a column holds the names of channels, one value per row.</summary>
+    public static bool IsChannel(string name) => IsOneOf(_channels, name);
+
+    /// <summary>Whether a column holds the values of channels, one value per row.</summary>
+    public static bool IsValue(string name) => IsOneOf(_values, name);
+
+    /// <summary>Whether a column holds the units of channels, one value per row.</summary>
+    public static bool IsUnitColumn(string name) => IsOneOf(_unitColumns, name);
+
+    private static bool IsOneOf(string[] names, string name)
+    {
+        string key = Key(name);
+        return Array.Exists(names, n => Key(n) == key);
+    }
 
     /// <summary>Looks a name up; a lower rank is the preferred name of its role.</summary>
     public static bool TryFind(string name, out ColumnName found, out int rank)

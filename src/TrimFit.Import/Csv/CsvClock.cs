@@ -152,11 +152,14 @@ internal sealed class CsvClock(CsvTime time, byte decimalMark)
             }
         }
         CellKind kind = CsvNumber.Parse(cell, decimalMark, out double value, out ReadOnlySpan<byte> suffix);
-        if (kind == CellKind.Number && !suffix.IsEmpty && (!LogUnits.TryParse(System.Text.Encoding.UTF8.GetString(suffix), out LogUnit unit) || unit.Quantity != Quantity.Time))
-            return CellKind.Text;
         if (kind != CellKind.Number)
             return kind;
-        value *= unitFactor * Math.Pow(10, unitExponent);
+        if (suffix.IsEmpty)
+            value *= unitFactor * Math.Pow(10, unitExponent);
+        else if (LogUnits.TryParse(System.Text.Encoding.UTF8.GetString(suffix), out LogUnit unit) && unit.Quantity == Quantity.Time)
+            value *= unit.Factor;
+        else
+            return CellKind.Text;
         if (!(Math.Abs(value) < 1e15))
             return CellKind.Text;
         seconds = (long)Math.Floor(value);

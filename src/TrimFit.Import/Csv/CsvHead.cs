@@ -99,7 +99,8 @@ internal sealed class CsvHead
         {
             hintLines = 1;
             List<CsvRecord> records = Split(text, text[4], whole);
-            records.RemoveAt(0);
+            if (records[0].Line == 1)
+                records.RemoveAt(0);
             return (text[4], records);
         }
         (byte Separator, List<CsvRecord> Records) best = default;
@@ -190,13 +191,17 @@ internal sealed class CsvHead
     {
         for (int i = 0; i < records.Count; i++)
         {
-            if (records[i].Cells.Length >= Math.Min(width, 2) && Math.Abs(records[i].Cells.Length - width) <= Math.Max(1, width / 2) && IsData(records[i])
-                && (i + 1 >= records.Count || IsData(records[i + 1]) || IsComment(records[i + 1])))
-            {
+            if (Math.Abs(records[i].Cells.Length - width) <= Math.Max(1, width / 2) && IsData(records[i]) && IsFollowedByData(records, i))
                 return i;
-            }
         }
         return -1;
+    }
+
+    // One of the next few rows must be data too: a preamble may hold a single row of numbers, and a single row of data may be damaged.
+    private static bool IsFollowedByData(List<CsvRecord> records, int at)
+    {
+        List<CsvRecord> next = [.. records.Skip(at + 1).Where(r => !IsComment(r)).Take(3)];
+        return next.Count == 0 || next.Exists(IsData);
     }
 
     private static bool IsData(CsvRecord record)
@@ -249,10 +254,9 @@ internal sealed class CsvHead
     private static CsvHead Judge(LogSource source, TextEncoding encoding, bool mend, byte separator, List<CsvRecord> records, int width, int first)
     {
         List<CsvRecord> sample = [.. records.Skip(first).Where(r => !IsComment(r))];
-        int point = 0, comma = 0, shortRows = 0;
+        int point = 0, comma = 0;
         foreach (CsvRecord record in sample)
         {
-            shortRows += record.Cells.Length < width ? 1 : 0;
             foreach (byte[] cell in record.Cells)
             {
                 CellClass kind = Classify(cell);
@@ -276,13 +280,14 @@ internal sealed class CsvHead
             for (int above = at - 1; above >= Math.Max(0, at - 2) && records[above].Cells.Length == records[at].Cells.Length && CouldBeHeader(records[above], width); above--)
             {
                 string[] joined = JoinGroups(Texts(records[above], width), names);
-                if (KnownNames(joined) <= KnownNames(names))
+                if (joined.Count(IsKnown) <= names.Count(IsKnown))
                     break;
                 names = joined;
                 headerLine = records[above].Line;
             }
         }
         int columns = Math.Max(width, names?.Length ?? 0);
+        int shortRows = sample.Count(r => r.Cells.Length < columns);
         string[] all = new string[columns];
         for (int i = 0; i < columns; i++)
         {
@@ -358,12 +363,13 @@ internal sealed class CsvHead
         {
             if (i < groups.Length && groups[i].Length > 0)
                 group = groups[i];
-            joined[i] = $"{group} {names[i]}".Trim();
+            string both = $"{group} {names[i]}".Trim();
+            joined[i] = IsKnown(both) || !IsKnown(names[i]) ? both : names[i];
         }
         return joined;
     }
 
-    private static int KnownNames(string[] names) => names.Count(name => ColumnNames.TryFind(HeaderName.Split(name).Name, out _, out _));
+    private static bool IsKnown(string name) => ColumnNames.TryFind(HeaderName.Split(name).Name, out _, out int rank) && rank < ColumnNames.BehindPrefix;
 
     private static LogFormatException NoRows(LogSource source, List<CsvRecord> records, int width, byte separator, int hintLines)
     {
@@ -373,7 +379,7 @@ internal sealed class CsvHead
                 "Export the log as CSV with the logger's own program.");
         }
         CsvRecord? header = records.FirstOrDefault(r => r.Cells.Length == width);
-        bool headerOnly = header is not null && records.Count(r => r.Cells.Length == width) <= 2;
+        bool headerOnly = header is not null && records.Count(r => r.Cells.Length == width) <= 2 && Texts(header, width).Any(IsKnown);
         return headerOnly
             ? LogFormatException.At(source.Name, header!.Line, null, "a header without rows under it", "rows of numbers", "The logger recorded nothing; copy the log again or take another flight.")
             : LogFormatException.At(source.Name, header?.Line ?? 1, null, "rows without numbers", "a header and rows of numbers", "Export the log as CSV with the logger's own program.");

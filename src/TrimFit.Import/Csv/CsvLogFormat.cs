@@ -17,6 +17,8 @@ public sealed class CsvLogFormat : ILogFormat
         ArgumentNullException.ThrowIfNull(source);
         ArgumentNullException.ThrowIfNull(options);
         CsvHead head = CsvHead.Read(source);
+        if (CsvLongRows.Layout(head) is { } layout)
+            return ReadLong(source, options, head, layout);
         CsvPlan plan = CsvPlan.Create(source.Name, head, options);
         var rows = new CsvRows(source.Name, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
@@ -26,18 +28,26 @@ public sealed class CsvLogFormat : ILogFormat
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }
         rows.Finish();
-        if (rows.Count < 2)
-            throw TooFewRows(source.Name, rows, head);
-        var notices = new List<Notice>(plan.Notices);
-        notices.AddRange(rows.Notices);
-        CsvUnits units = CsvUnits.Resolve(source.Name, rows.TimeSec, plan.Columns, notices, out Dictionary<ChannelRole, double[]> columns);
-        notices.AddRange(rows.LeftOut.Notices);
-        return Table(source.Name, head, plan, rows, units, columns, notices);
+        return Table(source.Name, head, plan.Time, plan.Columns, plan.Columns, [.. plan.Notices, .. rows.Notices], rows);
     }
 
-    private static LogTable Table(string file, CsvHead head, CsvPlan plan, CsvRows rows, CsvUnits units, Dictionary<ChannelRole, double[]> columns, List<Notice> notices)
+    // One value per row: the time comes from the file's columns, the rest from the channels.
+    private static LogTable ReadLong(LogSource source, ImportOptions options, CsvHead head, CsvLongLayout layout)
     {
-        ClockKind clock = plan.Time.Kind switch
+        CsvPlan timePlan = CsvPlan.CreateForTime(source.Name, head, options);
+        var rows = new CsvLongRows(source.Name, head, layout, timePlan.Time, options);
+        rows.Read(source, options.Progress);
+        CsvPlan plan = CsvPlan.CreateForChannels(source.Name, head, rows.Finish(), options);
+        return Table(source.Name, head, timePlan.Time, [.. timePlan.Columns.Where(c => c.Role is not null), .. plan.Columns], plan.Columns, [.. timePlan.Notices, .. plan.Notices], rows);
+    }
+
+    private static LogTable Table(string file, CsvHead head, CsvTime timing, IReadOnlyList<CsvColumn> all, IReadOnlyList<CsvColumn> channels, List<Notice> notices, ICsvRows rows)
+    {
+        if (rows.Count < 2)
+            throw TooFewRows(file, rows, head);
+        CsvUnits units = CsvUnits.Resolve(file, rows.TimeSec, channels, notices, out Dictionary<ChannelRole, double[]> columns);
+        notices.AddRange(rows.LeftOut.Notices);
+        ClockKind clock = timing.Kind switch
         {
             CsvTimeKind.Elapsed => ClockKind.Elapsed,
             CsvTimeKind.TimeOfDay => ClockKind.TimeOfDay,
@@ -64,11 +74,11 @@ public sealed class CsvLogFormat : ILogFormat
                 Format = head.Describe(),
                 RowsRead = rows.RowsRead,
                 LeftOut = [.. rows.LeftOut.Reasons],
-                Columns = [.. plan.Columns.Select(c => c.ToUse())],
+                Columns = [.. all.Select(c => c.ToUse())],
             },
             Clock = clock,
             Origin = origin,
-            IsUtc = clock != ClockKind.Elapsed && (plan.Time.IsUtc || rows.SawZone),
+            IsUtc = clock != ClockKind.Elapsed && (timing.IsUtc || rows.SawZone),
             ElapsedStartSec = clock == ClockKind.Elapsed ? rows.ZeroSec + first : 0,
             TimeSec = time,
             Columns = columns,
@@ -78,7 +88,7 @@ public sealed class CsvLogFormat : ILogFormat
         };
     }
 
-    private static LogFormatException TooFewRows(string file, CsvRows rows, CsvHead head)
+    private static LogFormatException TooFewRows(string file, ICsvRows rows, CsvHead head)
     {
         string why = string.Join("; ", rows.LeftOut.Reasons.Select(r => FormattableString.Invariant($"{r.Rows} × {r.Reason}, first in line {r.FirstLine}")));
         return LogFormatException.At(file, head.DataLine, null, FormattableString.Invariant($"{rows.Count} usable of {rows.RowsRead} rows{(why.Length > 0 ? $" ({why})" : "")}"),

@@ -11,11 +11,14 @@ internal sealed class CsvPlan
     private readonly CsvHead _head;
     private readonly List<Notice> _notices = [];
 
-    private CsvPlan(string file, CsvHead head)
+    private readonly Func<CsvColumn, bool> _isEmpty;
+
+    private CsvPlan(string file, CsvHead head, IReadOnlyList<CsvColumn>? channels = null)
     {
         _file = file;
         _head = head;
-        Columns = [.. head.Names.Select(NewColumn)];
+        Columns = channels ?? [.. head.Names.Select(NewColumn)];
+        _isEmpty = channels is null ? IsEmptyInSample : column => !Array.Exists(column.Values, double.IsFinite);
     }
 
     public IReadOnlyList<CsvColumn> Columns { get; }
@@ -35,6 +38,37 @@ internal sealed class CsvPlan
         if (!plan.Columns.Any(c => c.Role is { } role && role is not (ChannelRole.Time or ChannelRole.Date)))
             throw plan.NothingKnown();
         return plan;
+    }
+
+    /// <summary>Makes the plan of a log with one value per row: here only its time.</summary>
+    public static CsvPlan CreateForTime(string file, CsvHead head, ImportOptions options)
+    {
+        var plan = new CsvPlan(file, head);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is ChannelRole.Time or ChannelRole.Date)], options.ColumnsMayBeElsewhere);
+        plan.FindByName();
+        foreach (CsvColumn column in plan.Columns)
+        {
+            if (column.Role is not (null or ChannelRole.Time or ChannelRole.Date))
+                column.Release();
+        }
+        plan._notices.Clear();
+        plan.FindTime();
+        return plan;
+    }
+
+    /// <summary>Makes the plan of the channels of such a log.</summary>
+    public static CsvPlan CreateForChannels(string file, CsvHead head, IReadOnlyList<CsvColumn> channels, ImportOptions options)
+    {
+        var plan = new CsvPlan(file, head, channels);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is not (ChannelRole.Time or ChannelRole.Date))], options.ColumnsMayBeElsewhere);
+        plan.FindByName();
+        foreach (CsvColumn column in plan.Columns)
+        {
+            if (column.Role is ChannelRole.Time or ChannelRole.Date or ChannelRole.Position)
+                column.Release();
+        }
+        plan.KeepOnePerRole();
+        return plan.Columns.Any(c => c.Role is not null) ? plan : throw plan.NothingKnown();
     }
 
     private CsvColumn NewColumn(string name, int index)
@@ -136,7 +170,7 @@ internal sealed class CsvPlan
         {
             if (group.Key is ChannelRole.Time or ChannelRole.Date)
                 continue; // FindTime chooses
-            List<CsvColumn> ordered = [.. group.OrderByDescending(c => c.Told).ThenBy(c => IsEmptyInSample(c)).ThenBy(c => c.Rank).ThenBy(c => c.Index)];
+            List<CsvColumn> ordered = [.. group.OrderByDescending(c => c.Told).ThenBy(c => _isEmpty(c)).ThenBy(c => c.Rank).ThenBy(c => c.Index)];
             if (ordered.Count > 1 && !ordered[0].Told)
             {
                 _notices.Add(new("several_columns",
@@ -188,13 +222,17 @@ internal sealed class CsvPlan
     private string Names()
     {
         const int shown = 40;
-        string names = string.Join(", ", _head.Names.Take(shown));
-        return _head.Names.Length > shown ? FormattableString.Invariant($"{names} and {_head.Names.Length - shown} more") : names;
+        string names = string.Join(", ", Columns.Take(shown).Select(c => c.Name));
+        return Columns.Count > shown ? FormattableString.Invariant($"{names} and {Columns.Count - shown} more") : names;
     }
 
+    /// <summary>The refusal of a file without a header, for whose columns nobody gave names.</summary>
+    public static LogFormatException NoHeader(string file, CsvHead head) => LogFormatException.At(file, 1, null,
+        FormattableString.Invariant($"{head.Width} columns without a header"), "a header, or names for the columns",
+        "Say what they are: --column time=\"column 1\":s --column yaw_rate=\"column 2\":deg/s and so on.");
+
     private LogFormatException NothingKnown() => _head.HeaderLine == 0
-        ? LogFormatException.At(_file, 1, null, FormattableString.Invariant($"{_head.Width} columns without a header"), "a header, or names for the columns",
-            "Say what they are: --column time=\"column 1\":s --column yaw_rate=\"column 2\":deg/s and so on.")
+        ? NoHeader(_file, _head)
         : LogFormatException.At(_file, _head.HeaderLine, null, $"no column that is known beside the time; the header has {Names()}", "columns such as yaw_rate, throttle, rpm, latitude",
             "Name them: --column ROLE=NAME:UNIT.");
 

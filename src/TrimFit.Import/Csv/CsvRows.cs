@@ -5,7 +5,7 @@ using TrimFit.Core.Logs;
 namespace TrimFit.Import.Csv;
 
 /// <summary>The one pass over a file: cells of the wanted columns to numbers, rows counted, clock put in order.</summary>
-internal sealed class CsvRows
+internal sealed class CsvRows : ICsvRows
 {
     /// <summary>Pause, s, put between the parts of a log whose elapsed clock began again; longer than any step, so the parts are told apart.</summary>
     internal const double RestartPauseSec = 60;
@@ -82,7 +82,7 @@ internal sealed class CsvRows
     public bool Read(LogSource source, bool lineBreaksInQuotes, Action<double>? progress)
     {
         using var text = new TextStream(source, _head.Encoding, _head.MendLineEnds, hash: true, progress);
-        Skip(text, _head.DataOffset);
+        text.Skip(_head.DataOffset);
         bool openQuote = false;
         using (CsvReader reader = CsvReader.Create(text, new CsvReaderOptions
         {
@@ -137,18 +137,6 @@ internal sealed class CsvRows
     {
         Array.Resize(ref values, Count);
         return values;
-    }
-
-    private static void Skip(TextStream text, long bytes)
-    {
-        byte[] buffer = new byte[64 * 1024];
-        while (bytes > 0)
-        {
-            int count = text.Read(buffer.AsSpan(0, (int)Math.Min(bytes, buffer.Length)));
-            if (count == 0)
-                return;
-            bytes -= count;
-        }
     }
 
     private void ReadRow(CsvReader reader, int line)
@@ -366,11 +354,20 @@ internal sealed class CsvRows
                 $"{_file}({line}): the logger's clock begins again here. The rows from here on are placed {RestartPauseSec} s after the ones before; how long the real pause was is not known.")));
             return true;
         }
-        double from = last, to = t;
-        _leftOut.Add("back", line, null, () => new("time runs back", FormattableString.Invariant($"time runs back from {from:F2} s to {to:F2} s after the first row."),
-            FormattableString.Invariant($"a step back from {from:F2} s to {to:F2} s"), "a time after that of the row before", "Split the log there if this was a restart.",
-            "Split the log there if this was a restart."));
+        string from = Reading(last), to = Reading(t);
+        _leftOut.Add("back", line, null, () => new("time runs back", $"time runs back from {from} to {to}.", $"a step back from {from} to {to}",
+            "a time after that of the row before", "Split the log there if this was a restart.", "Split the log there if this was a restart."));
         return false;
+    }
+
+    // A time as the file shows it.
+    private string Reading(double t)
+    {
+        double clock = _zeroSec + t - _carrySec;
+        if (_time.Kind == CsvTimeKind.Elapsed)
+            return FormattableString.Invariant($"{clock:F2} s");
+        TimeSpan ofDay = TimeSpan.FromSeconds(clock - 86400 * Math.Floor(clock / 86400));
+        return ofDay.ToString(@"hh\:mm\:ss\.ff", System.Globalization.CultureInfo.InvariantCulture);
     }
 
     private void Grow()

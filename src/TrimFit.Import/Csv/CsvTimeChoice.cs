@@ -51,8 +51,14 @@ internal static class CsvTimeChoice
             times.Add(stamped);
             looks[stamped] = Look.DateTime;
         }
+        CsvColumn? week = columns.FirstOrDefault(c => c.Role is null && ColumnNames.IsWeek(c.BareName) && Numbers(head, c) is [>= 0 and < 10000, ..]);
+        CsvColumn? weekTime = columns.FirstOrDefault(c => c.Role is null && ColumnNames.IsWeekTime(c.BareName) && Numbers(head, c).Length > 0);
+        if (week is not null && weekTime is not null && !times.Exists(c => c.Told || looks[c] == Look.DateTime || Epoch(head, c) is not null))
+            return BuildWeek(head, columns, week, weekTime);
         if (times.Count == 0)
         {
+            if (head.HeaderLine == 0 && !columns.Any(c => c.Told))
+                throw CsvPlan.NoHeader(file, head);
             throw LogFormatException.At(file, Math.Max(1, head.HeaderLine), null, $"no column for the time; the header has {names()}",
                 "a column with the time of each row", "Name it: --column time=NAME:s.");
         }
@@ -118,9 +124,32 @@ internal static class CsvTimeChoice
         return new(date is not null ? CsvTimeKind.TwoColumns : look == Look.DateTime ? CsvTimeKind.DateTime : CsvTimeKind.TimeOfDay, time, date, order, 0, 1, isUtc);
     }
 
+    private static CsvTime BuildWeek(CsvHead head, IReadOnlyList<CsvColumn> columns, CsvColumn week, CsvColumn time)
+    {
+        foreach (CsvColumn other in columns)
+        {
+            if (other.Role is ChannelRole.Time or ChannelRole.Date)
+                other.Release();
+        }
+        (week.Role, week.RoleBasis, week.Unit, week.UnitBasis) = (ChannelRole.Date, "name, GPS week", null, "");
+        (time.Role, time.RoleBasis) = (ChannelRole.Time, "name, time of the GPS week");
+        const double weekSec = 604800;
+        if (time.Unit?.Quantity != Quantity.Time)
+        {
+            time.Unit = UnitOf(Numbers(head, time).Max() > weekSec ? -3 : 0);
+            time.UnitBasis = "inferred from the data";
+        }
+        return new(CsvTimeKind.GpsWeek, time, week, default, time.Unit.Name switch { "ms" => -3, "us" => -6, "ns" => -9, _ => 0 }, 1, true);
+    }
+
     private static CsvTime BuildNumber(string file, CsvHead head, CsvColumn time, bool isUtc, List<Notice> notices)
     {
         int? epoch = Epoch(head, time);
+        if (time.Unit is null && UnitInCells(head, time) is { } written)
+        {
+            time.Unit = written;
+            time.UnitBasis = "from cells";
+        }
         if (time.Unit is { Quantity: Quantity.Time } unit)
         {
             int exponent = unit.Name switch { "s" => 0, "ms" => -3, "us" => -6, "ns" => -9, _ => 1 };
@@ -177,6 +206,19 @@ internal static class CsvTimeChoice
         return null;
     }
 
+    private static LogUnit? UnitInCells(CsvHead head, CsvColumn column)
+    {
+        foreach (CsvHead.CsvRecord row in head.Sample)
+        {
+            if (column.Index < row.Cells.Length && CsvNumber.Parse(row.Cells[column.Index], head.DecimalMark, out _, out ReadOnlySpan<byte> suffix) == CellKind.Number && !suffix.IsEmpty)
+                return IsTimeUnit(suffix, out LogUnit unit) ? unit : null;
+        }
+        return null;
+    }
+
+    private static bool IsTimeUnit(ReadOnlySpan<byte> text, out LogUnit unit) =>
+        LogUnits.TryParse(System.Text.Encoding.UTF8.GetString(text), out unit) && unit.Quantity == Quantity.Time;
+
     private static double[] Numbers(CsvHead head, CsvColumn column) =>
     [.. head.Sample.Where(r => column.Index < r.Cells.Length)
         .Select(r => CsvNumber.Parse(r.Cells[column.Index], head.DecimalMark, out double value, out _) == CellKind.Number ? value : double.NaN)
@@ -202,7 +244,7 @@ internal static class CsvTimeChoice
                 continue;
             byte[] cell = row.Cells[column.Index];
             all++;
-            bool number = CsvNumber.Parse(cell, head.DecimalMark, out _, out ReadOnlySpan<byte> suffix) == CellKind.Number && suffix.IsEmpty;
+            bool number = CsvNumber.Parse(cell, head.DecimalMark, out _, out ReadOnlySpan<byte> suffix) == CellKind.Number && (suffix.IsEmpty || IsTimeUnit(suffix, out _));
             if (number && !named)
                 numbers++;
             else if (TimeText.TryParse(cell, DateOrder.Unknown, out TimeStamp stamp))

@@ -46,8 +46,9 @@ internal sealed record HeaderName(string Name, LogUnit? Unit, string? UnknownUni
             if (name.EndsWith(" in", StringComparison.OrdinalIgnoreCase))
                 name = name[..^3];
             string unitText = text[start..].TrimStart(' ', '_', '-', ':', ',').Replace(' ', '/').Replace('_', '/');
-            if (LogUnits.TryParse(unitText, out LogUnit unit) && ColumnNames.TryFind(name, out ColumnName found, out _)
-                && (LogUnits.Fits(found.Role, unit) || OtherRole(found.Role, unit) is not null))
+            if (LogUnits.TryParse(unitText, out LogUnit unit) && (ColumnNames.TryFind(name, out ColumnName found, out _)
+                ? LogUnits.Fits(found.Role, unit) || OtherRole(found.Role, unit) is not null
+                : unit.Quantity == Quantity.Time && ColumnNames.IsWeekTime(name)))
             {
                 return new(name, unit, null);
             }

@@ -43,6 +43,19 @@ internal sealed class TextStream : Stream
         _text = new byte[_decoder is null ? BlockBytes + 1 : BlockBytes * 3 + 16];
     }
 
+    /// <summary>Passes over the first bytes of text.</summary>
+    public void Skip(long bytes)
+    {
+        byte[] buffer = new byte[64 * 1024];
+        while (bytes > 0)
+        {
+            int count = Read(buffer.AsSpan(0, (int)Math.Min(bytes, buffer.Length)));
+            if (count == 0)
+                return;
+            bytes -= count;
+        }
+    }
+
     /// <summary>SHA-256 of the stored bytes, lower-case hex; to be asked after the end was read.</summary>
     public string Sha256()
     {
