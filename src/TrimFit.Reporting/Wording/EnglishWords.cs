@@ -320,7 +320,7 @@ internal sealed record EnglishWords : Words
             FindingCode.GyroLoose => $"The logger was loose ({Value(0, n => numbers.Plain(n, 0))} moves, typically {Value(1, numbers.Angle)}), so its gyro was set aside. Fix it to the frame.",
             FindingCode.GyroBiasFromStandstill => $"The gyro's zero, {Value(0, b => numbers.Plain(double.RadiansToDegrees(b), 2))} ± {Value(1, e => numbers.Significant(double.RadiansToDegrees(1.96 * e), 1))} deg/s, is taken from {Value(2, numbers.Duration)} of standing still.",
             FindingCode.BrakesAgainstTurn => $"In {Value(1, numbers.Percent)} of {Value(0, numbers.Duration)} of clear turns the machine turns against the brakes: the brake columns may be swapped, or the wing reverses. Check which column is which.",
-            FindingCode.GpsOutliers => $"{Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))} GPS fixes lie where no flight could have been; they were left out.",
+            FindingCode.GpsOutliers => $"GPS fixes that no flight could have flown were left out: {Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))}.",
             FindingCode.GpsFrozen => $"The GPS repeated its last fix {Value(0, n => numbers.Plain(n, 0))} times, {Value(1, numbers.Duration)} together; the repeats were left out.",
             FindingCode.ThrottleAgainstRpm => $"Throttle and rpm do not rise together (rank correlation {Value(0, c => numbers.Plain(c, 2))}). Check which column is which, and the sense of the throttle.",
             FindingCode.TimeJitter => $"The time stamps are uneven: {Value(1, numbers.Percent)} of the steps are off by more than half of the usual {Value(0, t => numbers.Significant(t, 2))} s.",
