@@ -78,7 +78,7 @@ public static class ReportJson
             Sampling = Sampling(report.Import.Diagnostics),
             Wind = Wind(report.Wind),
             Gyro = Gyro(report.Gyro),
-            Warnings = Notices(report.Import.Diagnostics.Warnings),
+            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Findings(report.Findings)],
             Cautions = CautionList(Wording.Cautions.For(CautionPlaces.Everywhere)),
         };
         return JsonSerializer.Serialize(json, _context.InspectJson) + "\n";

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
@@ -35,6 +36,9 @@ public sealed record InspectReport
 
     /// <summary>The gyro; null without one.</summary>
     public GyroReport? Gyro { get; init; }
+
+    /// <summary>What the sensors say about each other.</summary>
+    public ImmutableArray<Finding> Findings { get; init; } = [];
 
     /// <summary>The program.</summary>
     public required Provenance Provenance { get; init; }

@@ -39,6 +39,8 @@ public sealed partial record TrimAnalysis
         TrimPosterior posterior = TrimPosterior.Draw(rig, spread, fit, signals.FullThrust, options);
         warnings.AddRange(posterior.Findings);
         warnings.AddRange(spread.Propulsion.Findings(rig));
+        if (ClimbThrust.Check(signals, rig, spread.Propulsion) is Finding climb)
+            warnings.Add(climb);
 
         VerdictRules.Outcome outcome = VerdictRules.Judge(signals, fit, rig, spread, options, levels, pull, posterior);
         ShiftReport? shift = outcome.ShiftAllowed ? ShiftSolver.Shift(posterior, levels, signals, fit) : null;
