@@ -10,6 +10,9 @@ internal sealed class CsvUnits
     /// <summary>How far, as a factor, a fitted scale may lie from a unit's. Half-way between m/s·kt and m/s·mph is 1.07.</summary>
     private const double SpeedScaleRoom = 1.06, RateScaleRoom = 3;
 
+    /// <summary>Values below which a range says nothing about a flight.</summary>
+    private const int EnoughValues = 100;
+
     /// <summary>Yaw rates, in the unit as written, that only degrees per second (above) or only radians per second (below) give in a whole flight.</summary>
     private const double OnlyDegrees = 8;
 
@@ -334,7 +337,7 @@ internal sealed class CsvUnits
                 continue;
             if (_headingRate is not null && Scale(column.Values, _headingRate) is { } scale && Nearest(Math.Abs(scale), RateScaleRoom, "rad/s", "deg/s") is { } unit)
                 Infer(column, unit.Name, FormattableString.Invariant($"the turn rate of the ground course is {scale:G3} rad/s for each of its numbers"));
-            else if (Share(column.Values, 0.99) > OnlyDegrees)
+            else if (Order.Finite(column.Values).Length >= EnoughValues && Share(column.Values, 0.99) > OnlyDegrees)
                 Infer(column, "deg/s", "its numbers are too large for radians per second");
         }
         // The three axes of one gyro share a unit.
