@@ -29,6 +29,9 @@ internal sealed class CsvRows : ICsvRows
     private readonly CsvClock _clock;
     private readonly CsvLeftOut _leftOut;
     private readonly double[] _row, _second;
+    private readonly int[] _index;
+    private readonly bool[] _isPosition;
+    private readonly double[][] _values;
     private readonly string?[] _suffix;
     private readonly double[] _suffixFactor;
     private readonly List<Notice> _notices = [];
@@ -53,6 +56,8 @@ internal sealed class CsvRows : ICsvRows
         _leftOut = new CsvLeftOut(file, strict);
         _row = new double[_wanted.Length];
         _second = new double[_wanted.Length];
+        _index = [.. _wanted.Select(c => c.Index)];
+        _isPosition = [.. _wanted.Select(c => c.Role == ChannelRole.Position)];
         _suffix = new string?[_wanted.Length];
         _suffixFactor = [.. Enumerable.Repeat(1.0, _wanted.Length)];
         int capacity = head.EstimatedRows > 0 ? (int)Math.Min(head.EstimatedRows * 1.02 + 16, Array.MaxLength) : FirstRows;
@@ -63,6 +68,7 @@ internal sealed class CsvRows : ICsvRows
             if (column.Role == ChannelRole.Position)
                 column.SecondValues = new double[capacity];
         }
+        _values = [.. _wanted.Select(c => c.Values)];
     }
 
     /// <summary>Rows of data in the file.</summary>
@@ -130,6 +136,7 @@ internal sealed class CsvRows : ICsvRows
         foreach (CsvColumn column in _wanted)
         {
             column.Values = Cut(column.Values);
+            column.Missing = column.Values.Count(double.IsNaN);
             if (column.SecondValues.Length > 0)
                 column.SecondValues = Cut(column.SecondValues);
         }
@@ -161,9 +168,12 @@ internal sealed class CsvRows : ICsvRows
             LeaveOutTime(timeCell, dateCell, kind, line);
             return;
         }
-        for (int i = 0; i < _wanted.Length; i++)
+        for (int i = 0; i < _index.Length; i++)
         {
-            if (!ReadCell(Cell(reader, _wanted[i].Index, fields), i, line))
+            ReadOnlySpan<byte> cell = Cell(reader, _index[i], fields);
+            if (_markSeen && !_isPosition[i] && CsvNumber.TryParseOrdinary(cell, _decimalMark, out _row[i]))
+                continue;
+            if (!ReadCell(cell, i, line))
                 return;
         }
         if (!_hasZero)
@@ -178,14 +188,11 @@ internal sealed class CsvRows : ICsvRows
         if (Count == _timeSec.Length)
             Grow();
         _timeSec[Count] = t;
-        for (int i = 0; i < _wanted.Length; i++)
+        for (int i = 0; i < _values.Length; i++)
         {
-            CsvColumn column = _wanted[i];
-            column.Values[Count] = _row[i];
-            if (column.SecondValues.Length > 0)
-                column.SecondValues[Count] = _second[i];
-            if (double.IsNaN(_row[i]))
-                column.Missing++;
+            _values[i][Count] = _row[i];
+            if (_isPosition[i])
+                _wanted[i].SecondValues[Count] = _second[i];
         }
         Count++;
     }
@@ -395,11 +402,13 @@ internal sealed class CsvRows : ICsvRows
     {
         int size = (int)Math.Min(Math.Max(FirstRows, 2L * _timeSec.Length), Array.MaxLength);
         Array.Resize(ref _timeSec, size);
-        foreach (CsvColumn column in _wanted)
+        for (int i = 0; i < _wanted.Length; i++)
         {
+            CsvColumn column = _wanted[i];
             double[] values = column.Values;
             Array.Resize(ref values, size);
             column.Values = values;
+            _values[i] = values;
             if (column.SecondValues.Length > 0)
             {
                 values = column.SecondValues;
