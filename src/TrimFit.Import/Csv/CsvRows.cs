@@ -16,6 +16,9 @@ internal sealed class CsvRows : ICsvRows
     /// <summary>Step back, s, of an elapsed clock to near its beginning that is taken for a restart.</summary>
     private const double RestartSec = 5;
 
+    /// <summary>Beginning of the log, s, over which the coarser clock is compared; over hours the clocks drift apart.</summary>
+    private const double AnchorRowsSec = 600;
+
     /// <summary>Longest record, bytes; an unclosed quote must not swallow the memory.</summary>
     private const int LongestRecord = 1 << 20;
 
@@ -27,6 +30,8 @@ internal sealed class CsvRows : ICsvRows
     private readonly CsvColumn[] _wanted;
     private readonly CsvTime _time;
     private readonly CsvClock _clock;
+    private readonly CsvClock? _anchorClock;
+    private double _anchorSec = double.NegativeInfinity;
     private readonly CsvLeftOut _leftOut;
     private readonly double[] _row, _second;
     private readonly int[] _index;
@@ -53,6 +58,7 @@ internal sealed class CsvRows : ICsvRows
         _decimalMark = head.DecimalMark;
         _markSeen = head.DecimalMarkSeen;
         _clock = new CsvClock(plan.Time, head.DecimalMark);
+        _anchorClock = plan.Time.Anchor is { } anchor ? new CsvClock(anchor, head.DecimalMark) : null;
         _leftOut = new CsvLeftOut(file, strict);
         _row = new double[_wanted.Length];
         _second = new double[_wanted.Length];
@@ -79,7 +85,8 @@ internal sealed class CsvRows : ICsvRows
     public double[] TimeSec => _timeSec;
     /// <summary>The clock's reading at <c>TimeSec = 0</c>.</summary>
     public long ZeroSec => _zeroSec;
-    public bool SawZone => _clock.SawZone;
+    public double? AnchorSec => double.IsFinite(_anchorSec) ? _anchorSec : null;
+    public bool SawZone => (_anchorClock ?? _clock).SawZone;
     public CsvLeftOut LeftOut => _leftOut;
     public IReadOnlyList<Notice> Notices => _notices;
     /// <summary>SHA-256 of the file.</summary>
@@ -185,6 +192,8 @@ internal sealed class CsvRows : ICsvRows
         if (Count > 0 && !(t > _timeSec[Count - 1]) && !PutInOrder(ref t, line))
             return;
         _restart = false;
+        if (_anchorClock is not null && _carrySec == 0 && t < AnchorRowsSec) // exact: nothing was shifted yet
+            Anchor(reader, fields, t);
         if (Count == _timeSec.Length)
             Grow();
         _timeSec[Count] = t;
@@ -195,6 +204,15 @@ internal sealed class CsvRows : ICsvRows
                 _wanted[i].SecondValues[Count] = _second[i];
         }
         Count++;
+    }
+
+    // Clocks cut their stamps down, so the latest start that any row asks for is nearest to the true one.
+    private void Anchor(CsvReader reader, int fields, double t)
+    {
+        CsvTime anchor = _time.Anchor!;
+        ReadOnlySpan<byte> date = anchor.Date is null ? default : Cell(reader, anchor.Date.Index, fields);
+        if (_anchorClock!.Read(Cell(reader, anchor.Time.Index, fields), date, out long seconds, out double fraction) == CellKind.Number)
+            _anchorSec = Math.Max(_anchorSec, seconds + fraction - t);
     }
 
     private static ReadOnlySpan<byte> Cell(CsvReader reader, int index, int fields) => index < fields ? reader.GetSpan(index) : default;
