@@ -335,32 +335,6 @@ internal sealed record EnglishWords : Words
                 + (Sign(3) != 0 ? ": they agree." : ": they do not agree. Check static_thrust_n, masses and the wing's glide sink."),
             FindingCode.FullThrustByClimb => $"Full thrust is not in the rig file; the climb gives {Value(0, numbers.Force)} ± {Value(1, e => numbers.Force(1.96 * e))} in flight. Give static_thrust_n.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
-            FindingCode.GyroScaleCorrected => $"The gyro shows {Value(0, numbers.Percent)} (± {Value(1, e => numbers.PercentNumber(1.96 * e))}) of the turn of the GPS track"
-                + (Sign(2) > 0 ? $", as one mounted {Value(2, numbers.Angle)} off the vertical would" : "") + "; its readings were divided by that.",
-            FindingCode.GyroDelayed => $"The gyro is {Value(0, d => numbers.Plain(d, 2))} s (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) behind the GPS; it was moved by that.",
-            FindingCode.GpsDelayed => $"The GPS is {Value(0, d => numbers.Plain(d, 2))} s (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) behind the gyro; it was moved by that.",
-            FindingCode.GyroLevelled => $"The gyro's three axes were levelled by gravity; its z axis stands {Value(0, numbers.Angle)} from the vertical on average.",
-            FindingCode.GyroAxisFromGps => $"The log has no gravity to level the gyro's three axes; the axis of the turn was found from the GPS track, to within {Value(0, e => numbers.Angle(1.96 * e))}.",
-            FindingCode.GyroAxisAssumed => $"Neither gravity nor GPS nor compass show how the gyro lies; its {(Sign(0) switch { 0 => "x", 1 => "y", _ => "z" })} axis is taken to point {(Sign(1) < 0 ? "up" : "down")}. Give gyro_orientation in the rig file, or log the accelerometer.",
-            FindingCode.GyroSlipped => $"The logger moved by {Value(1, numbers.Angle)} at {Value(0, t => numbers.Plain(t, 0))} s; "
-                + (Sign(2) > 0 ? "the gyro was levelled anew from there." : "only the longest stretch without a move was used. Log GPS positions, or let it rest for 30 s before the start."),
-            FindingCode.GyroLoose => $"The logger was loose: {(Sign(0) == 1 ? "1 move" : Value(0, n => numbers.Plain(n, 0)) + " moves")} in flight, and its attitude strays by {Value(1, numbers.Angle)}. Its gyro was set aside; strap it to the frame.",
-            FindingCode.GyroBiasFromStandstill => $"The gyro's zero was read while standing still for {Value(2, numbers.Duration)}: {Value(0, b => numbers.Plain(double.RadiansToDegrees(b), 2))} deg/s (± {Value(1, e => numbers.Plain(double.RadiansToDegrees(1.96 * e), 2))}).",
-            FindingCode.BrakesAgainstTurn => $"In {Value(1, numbers.Percent)} of {Value(0, numbers.Duration)} of clear turns the wing turns away from the pulled brake: the brake columns may be swapped, or the wing reverses. Check which column is which.",
-            FindingCode.GpsOutliers => $"{Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))} GPS fixes jump as no wing can fly; they were left out.",
-            FindingCode.GpsFrozen => $"The GPS repeated its last fix {(Sign(0) == 1 ? "once" : Value(0, n => numbers.Plain(n, 0)) + " times")} in flight, for {Value(1, numbers.Duration)} in all; the repeats were left out.",
-            FindingCode.ThrottleAgainstRpm => $"Throttle and rpm do not rise together (rank correlation {Value(0, r => numbers.Plain(r, 2))}); thrust was taken from the rpm. Check the throttle column.",
-            FindingCode.TimeJitter => $"Time stamps are uneven: {Value(1, numbers.Percent)} of the gyro's steps are off by more than half of the usual {Value(0, t => numbers.Plain(1000 * t, 0))} ms. They were used as logged.",
-            FindingCode.ThrustFromPower => $"Thrust was taken from power to the two-thirds, with full power at {Value(0, w => numbers.Plain(w / 1000, 1))} kW, "
-                + (Sign(1) > 0 ? "the largest in the log." : "which follows from the rig file, since the log stays below it."),
-            FindingCode.CurrentTakenAsPower => $"The log has a current without a voltage; it was taken as power at constant voltage, with full power at {Value(0, a => numbers.Plain(a, 0))} A. Log the voltage too.",
-            FindingCode.ThrustFromMotorCurrent => $"Thrust was taken as proportional to motor current, with full power at {Value(0, a => numbers.Plain(a, 0))} A, the largest in the log.",
-            FindingCode.ClutchEngageAssumed => $"The speed at which the clutch engages is not in the rig file; {Value(0, n => numbers.Plain(n * 60, 0))} rpm stands in, a quarter above the idle of the log. Give clutch_engage_rpm.",
-            FindingCode.ThrustFromClimb => $"The log says nothing about the engine, so thrust was taken from climb and glide sink, each reading good to {Value(0, n => numbers.Force(1.96 * n))}. Log rpm or throttle.",
-            FindingCode.ThrustScaleByClimb => $"By its climb the machine has {Value(0, r => numbers.Plain(r, 2))} (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) times the thrust of the rig file"
-                + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is what momentum theory leaves of a static thrust in flight" : "")
-                + (Sign(3) > 0 ? ". The rig file's thrust was used." : ". The rig file's thrust was used, but check it with masses and speeds."),
-            FindingCode.FullThrustByClimb => $"The rig file gives no thrust; by its climb the machine has {Value(0, numbers.Force)} (± {Value(1, e => numbers.Force(1.96 * e))}) in flight at full power. Pull it on a scale and give static_thrust_n.",
             FindingCode.FirstStepTooSmall => $"The first step would be smaller than the {Value(0, m => numbers.Travel(m, unit))} in which this part moves.",
         };
     }
