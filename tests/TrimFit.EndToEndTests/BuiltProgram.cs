@@ -19,7 +19,10 @@ internal static class BuiltProgram
     {
         var start = new ProcessStartInfo(Executable)
         {
-            RedirectStandardOutput = true, RedirectStandardError = true, StandardOutputEncoding = Encoding.UTF8, StandardErrorEncoding = Encoding.UTF8,
+            RedirectStandardOutput = true,
+            RedirectStandardError = true,
+            StandardOutputEncoding = Encoding.UTF8,
+            StandardErrorEncoding = Encoding.UTF8,
         };
         foreach (string arg in args)
             start.ArgumentList.Add(arg);
