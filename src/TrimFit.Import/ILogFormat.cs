@@ -45,6 +45,9 @@ public sealed record ImportOptions
     /// <summary>The person's word on columns (<c>--column</c> first, then the rig file's); overrules every inference.</summary>
     public IReadOnlyList<ColumnRule> Columns { get; init; } = [];
 
+    /// <summary>With several files, a column of <see cref="Columns"/> that this file lacks stands in another.</summary>
+    internal bool ColumnsMayBeElsewhere { get; init; }
+
     /// <summary>Any row left out is an error.</summary>
     public bool Strict { get; init; }
 

@@ -78,7 +78,7 @@ public static class LogUnits
         (new("PS", Quantity.Power, MetricHorsepower), "cv ch"),
         (new("°C", Quantity.Other, 1), "degc celsius c °f f degf fahrenheit k kelvin"),
         (new("dB", Quantity.Other, 1), "dbm dba db(a)"),
-        (new("Ah", Quantity.Other, 1), "mah wh kwh mwh l l/h lph gal gph kg n nm n*m gauss ut µt mt nt lux lx ohm mohm bpm ppm rh kb mb/s kbps byte bytes bits"),
+        (new("Ah", Quantity.Other, 1), "mah wh kwh mwh l l/h lph gal gph kg n nm n*m gauss ut µt mt nt lux lx ohm mohm bpm ppm rh kb mb/s kbps byte bytes bits mhz psi gals fsd nm"),
     ];
 
     private static readonly Dictionary<string, LogUnit> _asWritten = new(StringComparer.Ordinal);
@@ -92,6 +92,10 @@ public static class LogUnits
         string simple = Simplify(text);
         if (_asWritten.TryGetValue(simple, out unit!) || _anyCase.TryGetValue(simple.ToLowerInvariant(), out unit!))
             return true;
+        // "ft msl": the word says from where, not in what.
+        int space = text.LastIndexOf(' ');
+        if (space > 0 && text[(space + 1)..].TrimEnd(')', ']').ToLowerInvariant() is "msl" or "amsl" or "agl" or "baro" or "gps" or "wgs" or "wgs84" or "true" or "mag")
+            return TryParse(text[..space], out unit);
         return TryParseRange(simple, out unit);
     }
 

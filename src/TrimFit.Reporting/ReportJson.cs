@@ -177,6 +177,8 @@ public static class ReportJson
         Scale = Number(gyro.Scale),
         Sign = gyro.Sign,
         DelayS = Number(gyro.DelaySec),
+        ScaleStdError = Number(gyro.ScaleStdError),
+        DelayStdErrorS = Number(gyro.DelayStdErrorSec),
     };
 
     private static TurnModelJson TurnModel(TurnFit fit, ControlUnit brake, ControlUnit trimmer)

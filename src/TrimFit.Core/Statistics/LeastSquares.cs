@@ -9,7 +9,7 @@ namespace TrimFit.Core.Statistics;
 public static class LeastSquares
 {
     // A refinement step below this share of the coefficients is the rounding of the coefficients themselves.
-    private const double SettledStep = 1e-16;
+    private const double SettledStep = 2.3e-16;
 
     /// <summary>Fits y by the columns of a design, all rows alike.</summary>
     /// <inheritdoc cref="Fit(ReadOnlySpan{double}, ReadOnlySpan{double}, int, ReadOnlySpan{double}, LeastSquaresOptions?)"/>
@@ -132,23 +132,10 @@ public static class LeastSquares
         int done = 0;
         for (int iteration = 0; iteration <= refinements; iteration++)
         {
-            for (int i = 0; i < n; i++)
-            {
-                DoubleDouble sum = default;
-                sum.Add(target[i]);
-                sum.Add(-residuals[i]);
-                for (int k = 0; k < p; k++)
-                    sum.AddProduct(-design[(qr.Used[k] * n) + i], coefficients[k]);
-                f[i] = sum.Value;
-            }
-            for (int k = 0; k < p; k++)
-            {
-                ReadOnlySpan<double> column = design.Slice(qr.Used[k] * n, n);
-                DoubleDouble sum = default;
-                for (int i = 0; i < n; i++)
-                    sum.AddProduct(-column[i], residuals[i]);
-                h[k] = sum.Value;
-            }
+            if (iteration == 0)
+                target.CopyTo(f); // from zero the residuals of the system are y and 0
+            else
+                Residuals(qr, design, target, coefficients, residuals, f, h);
             qr.SolveTransposed(h);
             qr.ApplyTransposed(f);
             for (int k = 0; k < p; k++)
@@ -177,5 +164,28 @@ public static class LeastSquares
                 break;
         }
         return new Convergence(last <= 1e-10, done, last); // ten digits: what an interval of a flight can ever use
+    }
+
+    private static void Residuals(
+        HouseholderQr qr, ReadOnlySpan<double> design, ReadOnlySpan<double> target, ReadOnlySpan<double> coefficients, ReadOnlySpan<double> residuals, Span<double> f, Span<double> h)
+    {
+        int n = target.Length, p = qr.Rank;
+        for (int i = 0; i < n; i++)
+        {
+            DoubleDouble sum = default;
+            sum.Add(target[i]);
+            sum.Add(-residuals[i]);
+            for (int k = 0; k < p; k++)
+                sum.AddProduct(-design[(qr.Used[k] * n) + i], coefficients[k]);
+            f[i] = sum.Value;
+        }
+        for (int k = 0; k < p; k++)
+        {
+            ReadOnlySpan<double> column = design.Slice(qr.Used[k] * n, n);
+            DoubleDouble sum = default;
+            for (int i = 0; i < n; i++)
+                sum.AddProduct(-column[i], residuals[i]);
+            h[k] = sum.Value;
+        }
     }
 }

@@ -33,23 +33,26 @@ public static class NeweyWest
                 scores[(i * p) + j] = designColumnMajor[(j * n) + i] * residuals[i];
         }
         double[] meat = new double[p * p];
+        double[] gamma = new double[p * p];
         for (int l = 0; l <= lag && l < n; l++)
         {
-            double weight = 1 - (l / (lag + 1.0));
+            Array.Clear(gamma);
             for (int i = l; i < n; i++)
             {
                 if (l > 0 && !segments.IsEmpty && segments[i] != segments[i - l])
                     continue;
+                ReadOnlySpan<double> now = scores.AsSpan(i * p, p), then = scores.AsSpan((i - l) * p, p);
                 for (int a = 0; a < p; a++)
                 {
-                    double now = weight * scores[(i * p) + a], then = weight * scores[((i - l) * p) + a];
                     for (int b = 0; b < p; b++)
-                    {
-                        meat[(a * p) + b] += now * scores[((i - l) * p) + b];
-                        if (l > 0)
-                            meat[(a * p) + b] += then * scores[(i * p) + b];
-                    }
+                        gamma[(a * p) + b] += now[a] * then[b];
                 }
+            }
+            double weight = (l == 0 ? 0.5 : 1) * (1 - (l / (lag + 1.0)));
+            for (int a = 0; a < p; a++)
+            {
+                for (int b = 0; b < p; b++)
+                    meat[(a * p) + b] += weight * (gamma[(a * p) + b] + gamma[(b * p) + a]);
             }
         }
         HouseholderQr qr = HouseholderQr.Factor(designColumnMajor.ToArray(), n, p, new LeastSquaresOptions().RankTolerance);

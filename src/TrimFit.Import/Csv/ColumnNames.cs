@@ -577,6 +577,7 @@ internal static class ColumnNames
         new("speedbar positie", ChannelRole.Accelerator),
         new("акселератор", ChannelRole.Accelerator),
         new("latitude", ChannelRole.Latitude),
+        new("latitude n/s", ChannelRole.Latitude),
         new("lat", ChannelRole.Latitude),
         new("gps lat", ChannelRole.Latitude),
         new("gps latitude", ChannelRole.Latitude),
@@ -600,6 +601,7 @@ internal static class ColumnNames
         new("breddegrad", ChannelRole.Latitude),
         new("enlem", ChannelRole.Latitude),
         new("longitude", ChannelRole.Longitude),
+        new("longitude e/w", ChannelRole.Longitude),
         new("lon", ChannelRole.Longitude),
         new("lng", ChannelRole.Longitude),
         new("long", ChannelRole.Longitude),
@@ -970,7 +972,7 @@ internal static class ColumnNames
             if (char.IsLetterOrDigit(c))
                 key.Append(Plain(char.ToLowerInvariant(c)));
         }
-        return key.ToString();
+        return key.Replace("ae", "a").Replace("oe", "o").Replace("ue", "u").ToString(); // Laenge is Länge
     }
 
     // "imu_1_yaw_rate", "Engine data: motor speed": the last two or more words say what it is, unless a word before them makes it something else.
@@ -981,7 +983,7 @@ internal static class ColumnNames
         {
             if (_otherThings.Contains(words[from - 1]))
                 break;
-            if (_byKey.TryGetValue(string.Concat(words[from..]), out (ColumnName Name, int Rank) entry) && Words(entry.Name.Name).Length > 1)
+            if (_byKey.TryGetValue(Key(string.Concat(words[from..])), out (ColumnName Name, int Rank) entry) && Words(entry.Name.Name).Length > 1)
             {
                 (found, rank) = (entry.Name, entry.Rank + BehindPrefix);
                 return true;

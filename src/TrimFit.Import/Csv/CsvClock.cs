@@ -3,6 +3,9 @@ namespace TrimFit.Import.Csv;
 /// <summary>Turns the time cells of a row into seconds.</summary>
 internal sealed class CsvClock(CsvTime time, byte decimalMark)
 {
+    /// <summary>The file's decimal mark, which the rows may find out late.</summary>
+    public byte DecimalMark { get; set; } = decimalMark;
+
     private const long SecondsPerDay = 86400;
     private const long SecondsPerWeek = 604800;
 
@@ -31,7 +34,7 @@ internal sealed class CsvClock(CsvTime time, byte decimalMark)
             case CsvTimeKind.Elapsed or CsvTimeKind.Epoch:
                 return ReadNumber(cell, time.UnitExponent, time.UnitFactor, out seconds, out fraction);
             case CsvTimeKind.GpsWeek:
-                if (CsvNumber.Parse(dateCell, decimalMark, out double week, out _) is var kind && kind != CellKind.Number)
+                if (CsvNumber.Parse(dateCell, DecimalMark, out double week, out _) is var kind && kind != CellKind.Number)
                     return kind;
                 if (ReadNumber(cell, time.UnitExponent, time.UnitFactor, out seconds, out fraction) is var read && read != CellKind.Number)
                     return read;
@@ -48,7 +51,8 @@ internal sealed class CsvClock(CsvTime time, byte decimalMark)
     {
         if (time.Kind == CsvTimeKind.DateTime && TryReadIso(cell, out seconds, out fraction))
             return CellKind.Number;
-        if (!TimeText.TryParse(cell, time.Order, out TimeStamp stamp) || !stamp.HasTime)
+        TimeStamp stamp;
+        if (!(time.Packed ? TimeText.TryParsePacked(cell, out stamp) : TimeText.TryParse(cell, time.Order, out stamp)) || !stamp.HasTime)
             return CsvNumber.IsMissing(cell) ? CellKind.Missing : CellKind.Text;
         int day = 0;
         if (time.Kind == CsvTimeKind.DateTime)
@@ -137,7 +141,7 @@ internal sealed class CsvClock(CsvTime time, byte decimalMark)
     {
         seconds = 0;
         fraction = 0;
-        if (unitFactor == 1 && CsvNumber.TryParseParts(cell, decimalMark, out CsvNumber.Parts parts))
+        if (unitFactor == 1 && CsvNumber.TryParseParts(cell, DecimalMark, out CsvNumber.Parts parts))
         {
             int exponent = parts.Exponent + unitExponent;
             if (exponent is <= 0 and >= -18)
@@ -151,7 +155,7 @@ internal sealed class CsvClock(CsvTime time, byte decimalMark)
                 return CellKind.Number;
             }
         }
-        CellKind kind = CsvNumber.Parse(cell, decimalMark, out double value, out ReadOnlySpan<byte> suffix);
+        CellKind kind = CsvNumber.Parse(cell, DecimalMark, out double value, out ReadOnlySpan<byte> suffix);
         if (kind != CellKind.Number)
             return kind;
         if (suffix.IsEmpty)

@@ -249,7 +249,7 @@ internal sealed class CsvHead
 
     private static bool IsNumber(ReadOnlySpan<byte> cell, byte mark) =>
         CsvNumber.Parse(cell, mark, out _, out ReadOnlySpan<byte> suffix) == CellKind.Number
-        && (suffix.IsEmpty || suffix.Length <= 12 && !suffix.ContainsAny((byte)',', (byte)'.') && LogUnits.TryParse(System.Text.Encoding.UTF8.GetString(suffix), out _));
+        && (suffix.IsEmpty || CsvPosition.IsHemisphere(suffix) || suffix.Length <= 12 && !suffix.ContainsAny((byte)',', (byte)'.') && LogUnits.TryParse(System.Text.Encoding.UTF8.GetString(suffix), out _));
 
     private static CsvHead Judge(LogSource source, TextEncoding encoding, bool mend, byte separator, List<CsvRecord> records, int width, int first)
     {
@@ -267,6 +267,8 @@ internal sealed class CsvHead
         int headerLine = 0;
         string[]? names = null, units = null;
         int at = first - 1;
+        while (at > 0 && records[at].Cells.Length == 1) // a line such as $DATA between header and rows
+            at--;
         if (at >= 1 && CouldBeHeader(records[at], width) && IsUnitsRow(records[at]) && CouldBeHeader(records[at - 1], width))
         {
             units = Texts(records[at], width);
@@ -276,6 +278,9 @@ internal sealed class CsvHead
         {
             headerLine = records[at].Line;
             names = Texts(records[at], width);
+            // Avionics write the units in a comment over the names.
+            if (units is null && at >= 1 && IsComment(records[at - 1]) && records[at - 1].Cells.Length == records[at].Cells.Length && CountUnits(records[at - 1]) >= 3)
+                units = Texts(records[at - 1], width);
             // Rows above may name groups ("Brake" over "left", "right"); they count only when they make more of the names known.
             for (int above = at - 1; above >= Math.Max(0, at - 2) && records[above].Cells.Length == records[at].Cells.Length && CouldBeHeader(records[above], width); above--)
             {
@@ -286,6 +291,9 @@ internal sealed class CsvHead
                 headerLine = records[above].Line;
             }
         }
+        AlignRecordNames(ref names, ref units);
+        if (names is not null)
+            CheckAligned(source, headerLine, names.Length, sample);
         int columns = Math.Max(width, names?.Length ?? 0);
         int shortRows = sample.Count(r => r.Cells.Length < columns);
         string[] all = new string[columns];
@@ -329,8 +337,39 @@ internal sealed class CsvHead
         return filled > 0 && text > 0.6 * filled;
     }
 
+    // "$COL,GNSS,time,…" names the cells of rows that begin with "$GNSS,": two words before the names where the rows have one.
+    private static void AlignRecordNames(ref string[]? names, ref string[]? units)
+    {
+        if (names is ["$COL", var kind, ..])
+        {
+            names = [$"${kind}", .. names[2..]];
+            units = units is ["$UNIT", ..] ? ["", .. units[2..]] : null;
+        }
+    }
+
+    // A header that has another number of names than every row has cells may be shifted against them, and a shifted name is a wrong one.
+    private static void CheckAligned(LogSource source, int headerLine, int names, List<CsvRecord> sample)
+    {
+        int cells = sample[0].Cells.Length;
+        foreach (CsvRecord row in sample)
+        {
+            if (row.Cells.Length != cells)
+                return;
+        }
+        bool lastIsEmpty = sample.TrueForAll(row => CsvNumber.Trim(row.Cells[^1]).IsEmpty);
+        if (cells == names || lastIsEmpty && cells == names + 1)
+            return;
+        throw LogFormatException.At(source.Name, headerLine, null, FormattableString.Invariant($"{names} names over rows of {cells} cells"), "a name for each cell",
+            "Which name belongs to which cell cannot be told; correct the header.");
+    }
+
+    private static int CountUnits(CsvRecord record) => Texts(record, record.Cells.Length).Count(text => text.Length > 0 && LogUnits.TryParse(text, out _));
+
     private static bool IsUnitsRow(CsvRecord record)
     {
+        if (record.Cells[0].AsSpan().SequenceEqual("$UNIT"u8))
+            return true;
+
         int filled = 0, units = 0;
         foreach (string text in Texts(record, record.Cells.Length))
         {

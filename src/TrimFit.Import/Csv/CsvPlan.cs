@@ -27,11 +27,12 @@ internal sealed class CsvPlan
 
     /// <summary>Makes the plan.</summary>
     /// <exception cref="LogFormatException">A told column is not there, no column gives the time, or none but the time is known.</exception>
-    public static CsvPlan Create(string file, CsvHead head, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan Create(string file, CsvHead head, ImportOptions options)
     {
         var plan = new CsvPlan(file, head);
-        plan.ApplyRules(rules);
+        plan.ApplyRules(options.Columns, options.ColumnsMayBeElsewhere);
         plan.FindByName();
+        plan.FindAxesByFileName();
         plan.KeepOnePerRole();
         plan.FindTime();
         plan.CheckSample();
@@ -41,10 +42,10 @@ internal sealed class CsvPlan
     }
 
     /// <summary>Makes the plan of a log with one value per row: here only its time.</summary>
-    public static CsvPlan CreateForTime(string file, CsvHead head, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan CreateForTime(string file, CsvHead head, ImportOptions options)
     {
         var plan = new CsvPlan(file, head);
-        plan.ApplyRules([.. rules.Where(r => r.Role is ChannelRole.Time or ChannelRole.Date)]);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is ChannelRole.Time or ChannelRole.Date)], options.ColumnsMayBeElsewhere);
         plan.FindByName();
         foreach (CsvColumn column in plan.Columns)
         {
@@ -57,10 +58,10 @@ internal sealed class CsvPlan
     }
 
     /// <summary>Makes the plan of the channels of such a log.</summary>
-    public static CsvPlan CreateForChannels(string file, CsvHead head, IReadOnlyList<CsvColumn> channels, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan CreateForChannels(string file, CsvHead head, IReadOnlyList<CsvColumn> channels, ImportOptions options)
     {
         var plan = new CsvPlan(file, head, channels);
-        plan.ApplyRules([.. rules.Where(r => r.Role is not (ChannelRole.Time or ChannelRole.Date))]);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is not (ChannelRole.Time or ChannelRole.Date))], options.ColumnsMayBeElsewhere);
         plan.FindByName();
         foreach (CsvColumn column in plan.Columns)
         {
@@ -81,14 +82,16 @@ internal sealed class CsvPlan
         return new CsvColumn { Index = index, Name = name, BareName = parts.Name, Unit = unit, UnitBasis = basis };
     }
 
-    private void ApplyRules(IReadOnlyList<ColumnRule> rules)
+    private void ApplyRules(IReadOnlyList<ColumnRule> rules, bool mayBeElsewhere)
     {
         var given = new HashSet<ChannelRole>();
         foreach (ColumnRule rule in rules)
         {
+            CsvColumn? column = Find(rule.Name);
+            if (column is null && mayBeElsewhere)
+                continue;
             if (!given.Add(rule.Role)) // the person's word comes before the rig file's
                 continue;
-            CsvColumn? column = Find(rule.Name);
             if (column is null)
             {
                 throw LogFormatException.At(_file, Math.Max(1, _head.HeaderLine), null, $"no column \"{rule.Name}\" for {ChannelRoles.NameOf(rule.Role)}",
@@ -158,6 +161,30 @@ internal sealed class CsvPlan
             column.RoleBasis = "name";
             column.Unit = unit;
             column.UnitBasis = unitBasis;
+        }
+    }
+
+    // Phones write one file per sensor, with the axes as x, y, z and the sensor in the file's name.
+    private void FindAxesByFileName()
+    {
+        string key = ColumnNames.Key(Path.GetFileNameWithoutExtension(_file));
+        ChannelRole? x = key.Contains("gyro", StringComparison.Ordinal) || key.Contains("rotationrate", StringComparison.Ordinal) ? ChannelRole.GyroX
+            : key.Contains("accel", StringComparison.Ordinal) ? ChannelRole.AccelerationX : null;
+        if (x is null || _head.Names.Length > 12 || Columns.Any(c => c.Role >= ChannelRole.GyroX && c.Role <= ChannelRole.AccelerationZ))
+            return;
+        foreach (CsvColumn column in Columns)
+        {
+            int axis = column.Role is null ? ColumnNames.Key(column.BareName) switch { "x" => 0, "y" => 1, "z" => 2, _ => -1 } : -1;
+            ChannelRole role = x.Value + axis;
+            if (axis < 0 || column.Unit is not null && !LogUnits.Fits(role, column.Unit))
+                continue;
+            column.Role = role;
+            column.RoleBasis = "file name";
+            if (column.Unit is null && x == ChannelRole.GyroX && LogUnits.TryParse("rad/s", out LogUnit radians))
+            {
+                column.Unit = radians;
+                column.UnitBasis = "by convention of phones";
+            }
         }
     }
 

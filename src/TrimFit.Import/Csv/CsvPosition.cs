@@ -3,6 +3,9 @@ namespace TrimFit.Import.Csv;
 /// <summary>Latitude and longitude in one cell.</summary>
 internal static class CsvPosition
 {
+    /// <summary>Whether the text is a letter N, S, E or W behind a number of degrees.</summary>
+    public static bool IsHemisphere(ReadOnlySpan<byte> text) => text.Length == 1 && (text[0] & ~0x20) is 'N' or 'S' or 'E' or 'W';
+
     /// <summary>Reads two numbers, latitude first, separated by a space, a semicolon or a comma that is no decimal mark.</summary>
     /// <param name="cell">The cell's bytes, such as <c>31.166881 121.356245</c>.</param>
     /// <param name="decimalMark">The file's decimal mark.</param>

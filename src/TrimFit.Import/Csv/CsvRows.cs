@@ -33,6 +33,7 @@ internal sealed class CsvRows : ICsvRows
     private readonly double[] _suffixFactor;
     private readonly List<Notice> _notices = [];
     private byte _decimalMark;
+    private bool _markSeen;
     private double[] _timeSec;
     private long _zeroSec;
     private bool _hasZero;
@@ -47,6 +48,7 @@ internal sealed class CsvRows : ICsvRows
         _time = plan.Time;
         _wanted = [.. plan.Columns.Where(c => c.Role is not null and not ChannelRole.Time and not ChannelRole.Date)];
         _decimalMark = head.DecimalMark;
+        _markSeen = head.DecimalMarkSeen;
         _clock = new CsvClock(plan.Time, head.DecimalMark);
         _leftOut = new CsvLeftOut(file, strict);
         _row = new double[_wanted.Length];
@@ -264,10 +266,14 @@ internal sealed class CsvRows : ICsvRows
         CellKind kind = CsvNumber.Parse(cell, _decimalMark, out double value, out ReadOnlySpan<byte> suffix);
         _row[i] = value;
         if (kind == CellKind.Number && suffix.IsEmpty || kind == CellKind.Missing)
+        {
+            if (!_markSeen && kind == CellKind.Number && cell.Contains(_decimalMark))
+                _markSeen = true;
             return true;
+        }
         if (kind == CellKind.Number ? TakeSuffix(suffix, i) : TakeWord(cell, i))
             return true;
-        return LeaveOutNumber(cell, column, line);
+        return LeaveOutNumber(cell, i, line);
     }
 
     // A unit in the cell: the first one is the column's, another of the same kind is converted to it.
@@ -276,6 +282,12 @@ internal sealed class CsvRows : ICsvRows
         CsvColumn column = _wanted[i];
         if (suffix.Length > 16)
             return false;
+        if (column.Role is ChannelRole.Latitude or ChannelRole.Longitude && CsvPosition.IsHemisphere(suffix) && _row[i] >= 0)
+        {
+            if ((suffix[0] & ~0x20) is 'S' or 'W')
+                _row[i] = -_row[i];
+            return true;
+        }
         string text = Encoding.UTF8.GetString(suffix);
         if (_suffix[i] == text)
         {
@@ -314,9 +326,18 @@ internal sealed class CsvRows : ICsvRows
         }
     }
 
-    private bool LeaveOutNumber(ReadOnlySpan<byte> cell, CsvColumn column, int line)
+    private bool LeaveOutNumber(ReadOnlySpan<byte> cell, int i, int line)
     {
+        CsvColumn column = _wanted[i];
         byte other = _decimalMark == (byte)'.' ? (byte)',' : (byte)'.';
+        if (!_markSeen && _head.Separator != (byte)',' && CsvNumber.Parse(cell, other, out double first, out ReadOnlySpan<byte> rest) == CellKind.Number && rest.IsEmpty)
+        {
+            // The head held whole numbers only; the first decimal mark of the file decides.
+            (_decimalMark, _markSeen) = (other, true);
+            _clock.DecimalMark = other;
+            _row[i] = first;
+            return true;
+        }
         bool wrongMark = CsvNumber.Parse(cell, other, out _, out ReadOnlySpan<byte> suffix) == CellKind.Number && suffix.IsEmpty;
         string shown = Show(cell);
         (string has, string mark) = _decimalMark == (byte)'.' ? ("decimal points", "a decimal point") : ("decimal commas", "a decimal comma");
@@ -338,7 +359,7 @@ internal sealed class CsvRows : ICsvRows
                 _firstRepeatLine = line;
             return true;
         }
-        if (_time.Kind == CsvTimeKind.TimeOfDay && back > MidnightSec)
+        if (_time.Kind is CsvTimeKind.TimeOfDay or CsvTimeKind.ClockOfDateTime && back > MidnightSec)
         {
             _carrySec += 86400;
             t += 86400;

@@ -13,6 +13,8 @@ internal enum CsvTimeKind
     TwoColumns,
     /// <summary>Time of day without a date.</summary>
     TimeOfDay,
+    /// <summary>Time of day out of stamps whose date can be read both ways.</summary>
+    ClockOfDateTime,
     /// <summary>GPS week and seconds of the week.</summary>
     GpsWeek,
 }
@@ -25,4 +27,5 @@ internal enum CsvTimeKind
 /// <param name="UnitExponent">Power of ten of a number's unit in seconds: 0, −3, −6, −9; for other units <paramref name="UnitFactor"/> says.</param>
 /// <param name="UnitFactor">Seconds in the unit when it is no power of ten (min, h); else 1.</param>
 /// <param name="IsUtc">Whether the clock is known to be UTC.</param>
-internal sealed record CsvTime(CsvTimeKind Kind, CsvColumn Time, CsvColumn? Date, DateOrder Order, int UnitExponent, double UnitFactor, bool IsUtc);
+/// <param name="Packed">Whether the time of day is written as one number, hhmmss.</param>
+internal sealed record CsvTime(CsvTimeKind Kind, CsvColumn Time, CsvColumn? Date, DateOrder Order, int UnitExponent, double UnitFactor, bool IsUtc, bool Packed = false);

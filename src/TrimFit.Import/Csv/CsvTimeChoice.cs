@@ -19,6 +19,7 @@ internal static class CsvTimeChoice
         Date,
         AmbiguousDate,
         TimeOfDay,
+        PackedTime,
     }
 
     /// <summary>Chooses; a column that is not chosen loses its role.</summary>
@@ -44,6 +45,11 @@ internal static class CsvTimeChoice
             times.Remove(column);
             dates.Add(column);
         }
+        foreach (CsvColumn column in times)
+        {
+            if (looks[column] == Look.Number && IsPacked(head, column, dates.Count > 0))
+                looks[column] = Look.PackedTime;
+        }
         dates.RemoveAll(c => looks[c] is not (Look.Date or Look.AmbiguousDate) && Drop(c));
         if (times.Count == 0 && columns.FirstOrDefault(c => c.Role is null && LookOf(head, c) == Look.DateTime) is { } stamped)
         {
@@ -63,7 +69,7 @@ internal static class CsvTimeChoice
                 "a column with the time of each row", "Name it: --column time=NAME:s.");
         }
         CsvColumn time = times.OrderByDescending(c => c.Told).ThenBy(c => Preference(head, c, looks[c], dates.Count > 0)).ThenBy(c => c.Rank).ThenBy(c => c.Index).First();
-        CsvColumn? date = looks[time] == Look.TimeOfDay ? dates.OrderByDescending(c => c.Told).ThenBy(c => c.Index).FirstOrDefault() : null;
+        CsvColumn? date = looks[time] is Look.TimeOfDay or Look.PackedTime ? dates.OrderByDescending(c => c.Told).ThenBy(c => c.Index).FirstOrDefault() : null;
         if (times.Count > 1 && !time.Told)
         {
             notices.Add(new("several_columns", $"{file}: {string.Join(", ", times.OrderBy(c => c.Index).Select(c => $"\"{c.Name}\""))} can all give the time; \"{time.Name}\" is used. To choose: --column time=NAME."));
@@ -79,6 +85,15 @@ internal static class CsvTimeChoice
         return Build(file, head, time, date, looks[time], notices);
     }
 
+    // 194159, 194200, …: hours, minutes and seconds in one number. A counter would pass through numbers ending in 60 to 99 within 41 of its steps.
+    private static bool IsPacked(CsvHead head, CsvColumn column, bool hasDate)
+    {
+        double[] values = Numbers(head, column);
+        if (column.Unit is not null || values.Length < 2 || values.Any(v => v is < 0 or >= 240000 || v % 100 >= 60 || v / 100 % 100 >= 60))
+            return false;
+        return values.Max() >= 10000 && (hasDate || values.Max() - values.Min() > 100 && values.Length > 41);
+    }
+
     private static bool Keep(CsvColumn column) => column.Told || !Drop(column);
 
     private static bool Drop(CsvColumn column)
@@ -91,21 +106,22 @@ internal static class CsvTimeChoice
     {
         Look.DateTime => 0,
         Look.Number when Epoch(head, column) is not null => 0,
-        Look.TimeOfDay when hasDate => 1,
-        Look.TimeOfDay => 2,
+        Look.TimeOfDay or Look.PackedTime when hasDate => 1,
+        Look.TimeOfDay or Look.PackedTime => 2,
         Look.Number => 3,
         _ => 4,
     };
 
     private static CsvTime Build(string file, CsvHead head, CsvColumn time, CsvColumn? date, Look look, List<Notice> notices)
     {
-        bool isUtc = time.BareName.Contains("utc", StringComparison.OrdinalIgnoreCase) || time.BareName.Contains("gps", StringComparison.OrdinalIgnoreCase)
-            || time.BareName.Contains("zulu", StringComparison.OrdinalIgnoreCase);
+        bool isUtc = time.Name.Contains("utc", StringComparison.OrdinalIgnoreCase) || time.Name.Contains("gps", StringComparison.OrdinalIgnoreCase)
+            || time.Name.Contains("zulu", StringComparison.OrdinalIgnoreCase);
+        bool packed = look == Look.PackedTime;
         if (look == Look.Number)
             return BuildNumber(file, head, time, isUtc, notices);
         CsvColumn dated = date ?? time;
         DateOrder order = dated.Unit?.Quantity == Quantity.DateOrder
-            ? dated.Unit.Name switch { "dmy" => DateOrder.DayMonthYear, "mdy" => DateOrder.MonthDayYear, _ => DateOrder.Unknown }
+            ? dated.Unit.Name switch { "dmy" => DateOrder.DayMonthYear, "mdy" => DateOrder.MonthDayYear, _ => DateOrder.YearMonthDay }
             : OrderOf(head, dated);
         time.Unit = null;
         time.UnitBasis = "";
@@ -115,13 +131,14 @@ internal static class CsvTimeChoice
             date.UnitBasis = "";
         }
         bool hasDate = date is not null || look == Look.DateTime;
-        if (hasDate && order == DateOrder.Unknown && head.Sample.Any(r => dated.Index < r.Cells.Length && TimeText.OrderOf(r.Cells[dated.Index]) == DateOrder.Unknown))
+        if (hasDate && order == DateOrder.Unknown && head.Sample.Any(r => dated.Index < r.Cells.Length && TimeText.TryParse(r.Cells[dated.Index], DateOrder.Unknown, out TimeStamp stamp) && stamp.AmbiguousDate))
         {
             notices.Add(new("date_order_unknown",
                 $"{file}: the dates of column \"{dated.Name}\" can be read as day/month and as month/day; only the time of day is used. To say which: --column {ChannelRoles.NameOf(dated.Role!.Value)}={dated.Name}:dmy or :mdy."));
-            return new(CsvTimeKind.TimeOfDay, time, null, DateOrder.Unknown, 0, 1, isUtc);
+            date?.Release();
+            return new(look == Look.DateTime ? CsvTimeKind.ClockOfDateTime : CsvTimeKind.TimeOfDay, time, null, DateOrder.Unknown, 0, 1, isUtc, packed);
         }
-        return new(date is not null ? CsvTimeKind.TwoColumns : look == Look.DateTime ? CsvTimeKind.DateTime : CsvTimeKind.TimeOfDay, time, date, order, 0, 1, isUtc);
+        return new(date is not null ? CsvTimeKind.TwoColumns : look == Look.DateTime ? CsvTimeKind.DateTime : CsvTimeKind.TimeOfDay, time, date, order, 0, 1, isUtc, packed);
     }
 
     private static CsvTime BuildWeek(CsvHead head, IReadOnlyList<CsvColumn> columns, CsvColumn week, CsvColumn time)
@@ -237,7 +254,7 @@ internal static class CsvTimeChoice
     private static Look LookOf(CsvHead head, CsvColumn column)
     {
         int numbers = 0, dateTimes = 0, dates = 0, ambiguous = 0, times = 0, all = 0;
-        bool named = column.Role == ChannelRole.Date;
+        bool named = column.Role == ChannelRole.Date && !column.BareName.Contains("time", StringComparison.OrdinalIgnoreCase);
         foreach (CsvHead.CsvRecord row in head.Sample)
         {
             if (column.Index >= row.Cells.Length || CsvNumber.IsMissing(row.Cells[column.Index]))

@@ -13,6 +13,9 @@ internal sealed class CsvUnits
     /// <summary>Yaw rates, in the unit as written, that only degrees per second (above) or only radians per second (below) give in a whole flight.</summary>
     private const double OnlyDegrees = 8;
 
+    /// <summary>Median difference, deg, below which two directions are the same: positions a second apart give a course to about 2 deg.</summary>
+    private const double SameDirectionDeg = 4;
+
     private readonly string _file;
     private readonly double[] _time;
     private readonly Dictionary<ChannelRole, CsvColumn> _columns;
@@ -222,7 +225,10 @@ internal sealed class CsvUnits
     private void Angles()
     {
         if (Of(ChannelRole.Heading) is { } heading)
+        {
             Angle(heading, reference: null);
+            HeadingThatIsACourse();
+        }
         if (Of(ChannelRole.Roll) is not { } roll)
             return;
         if (roll.Unit is null)
@@ -235,6 +241,23 @@ internal sealed class CsvUnits
                 Infer(roll, "rad", "in degrees the wing would never have banked");
         }
         ApplyOrAsk(roll, "deg, rad");
+    }
+
+    // GPS receivers call the course a heading. Where it is the direction of the way over ground it is used as that; without wind both are the same.
+    private void HeadingThatIsACourse()
+    {
+        if (Of(ChannelRole.Heading) is not { Told: false } heading || Of(ChannelRole.GroundCourse) is not null)
+            return;
+        double[]? course = Of(ChannelRole.VelocityNorth) is { } north && Of(ChannelRole.VelocityEast) is { } east ? Directions(north.Values, east.Values) : CourseReference();
+        if (course is null || Disagreement(heading.Values, 1, course) is not { } degrees || !(degrees < SameDirectionDeg))
+            return;
+        Say("heading_is_course", FormattableString.Invariant(
+            $"column \"{heading.Name}\" is the direction of the way over ground (they differ by {degrees:F1} deg in the median) and is used as ground_course. To use it as the nose's: --column heading={heading.BareName}."));
+        _columns.Remove(ChannelRole.Heading);
+        heading.Role = ChannelRole.GroundCourse;
+        heading.RoleBasis = "name and the data";
+        _columns[ChannelRole.GroundCourse] = heading;
+        _headingRate ??= HeadingRate();
     }
 
     // An angle of the full circle: its unit by its range, and a 16-bit number that ran over is put right.

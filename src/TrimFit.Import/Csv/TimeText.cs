@@ -9,6 +9,8 @@ internal enum DateOrder
     DayMonthYear,
     /// <summary>Month, day, year.</summary>
     MonthDayYear,
+    /// <summary>Year, month, day, as told; a year of four digits in front needs no telling.</summary>
+    YearMonthDay,
 }
 
 /// <summary>A time stamp as written.</summary>
@@ -63,6 +65,23 @@ internal static class TimeText
         return true;
     }
 
+    /// <summary>Reads a time of day written as one number, hhmmss with or without a fraction.</summary>
+    public static bool TryParsePacked(ReadOnlySpan<byte> cell, out TimeStamp stamp)
+    {
+        stamp = default;
+        if (!CsvNumber.TryParseParts(CsvNumber.Trim(cell), (byte)'.', out CsvNumber.Parts parts) || parts.Negative || parts.Exponent is > 0 or < -12)
+            return false;
+        ulong scale = 1;
+        for (int i = 0; i < -parts.Exponent; i++)
+            scale *= 10;
+        ulong whole = parts.Digits / scale;
+        ulong h = whole / 10000, m = whole / 100 % 100, s = whole % 100;
+        if (h > 23 || m > 59 || s > 60)
+            return false;
+        stamp = new(null, true, (long)(h * 3600 + m * 60 + s), (double)(parts.Digits % scale) / scale, null, false);
+        return true;
+    }
+
     /// <summary>Whether a date of numbers tells its order: the larger number of two that start it is no month.</summary>
     /// <returns>Null when the cell is no such date; <see cref="DateOrder.Unknown"/> when both orders are possible.</returns>
     public static DateOrder? OrderOf(ReadOnlySpan<byte> cell)
@@ -106,8 +125,22 @@ internal static class TimeText
             return false;
         if (firstDigits is 8 or 6 && (rest.IsEmpty || !IsDigit(rest[0]) && rest[0] is not ((byte)'/' or (byte)'.')))
         {
-            // 20260512; six digits alone could be anything and are no date here.
-            return firstDigits == 8 && Finish(first / 10000, 4, first / 100 % 100, first % 100, rest, ref text, out day);
+            if (firstDigits == 8) // 20260512
+                return Finish(first / 10000, 4, first / 100 % 100, first % 100, rest, ref text, out day);
+            (int a, int b, int c) = (first / 10000, first / 100 % 100, first % 100);
+            switch (order) // 120526 needs telling
+            {
+                case DateOrder.DayMonthYear:
+                    return Finish(c, 2, b, a, rest, ref text, out day);
+                case DateOrder.MonthDayYear:
+                    return Finish(c, 2, a, b, rest, ref text, out day);
+                case DateOrder.YearMonthDay:
+                    return Finish(a, 2, b, c, rest, ref text, out day);
+                default:
+                    ambiguous = true;
+                    text = rest;
+                    return true;
+            }
         }
         if (rest.IsEmpty || rest[0] is not ((byte)'-' or (byte)'/' or (byte)'.' or (byte)' '))
             return false;
@@ -138,6 +171,8 @@ internal static class TimeText
             text = rest;
             return true;
         }
+        if (order == DateOrder.YearMonthDay)
+            return Finish(first, 2, second, year, rest, ref text, out day);
         (int dd, int mm) = order == DateOrder.DayMonthYear ? (first, second) : (second, first);
         return Finish(year, digits, mm, dd, rest, ref text, out day);
     }

@@ -36,12 +36,15 @@ internal sealed record ClockMatch(double OffsetSec, double StdErrorSec, double C
             {
                 if (Comparison(a.Kind, b.Kind) is (double half, bool eitherSign, double lagSd, string words)
                     && Find(a, b, half, eitherSign, lagSd, words, lowest, highest) is ClockMatch match
-                    && (best is null || (match.IsFirm, -match.StdErrorSec).CompareTo((best.IsFirm, -best.StdErrorSec)) > 0))
+                    && (best is null || Worth(match).CompareTo(Worth(best)) > 0))
                     best = match;
             }
         }
         return best;
     }
+
+    /// <summary>Firm before not, the same quantity before engine against climb, then by correlation.</summary>
+    private static (bool, bool, double) Worth(ClockMatch match) => (match.IsFirm, match.StdErrorSec < ClimbLagSd, match.Correlation);
 
     /// <summary>Which signals compare, over which half window, and whether their signs may differ (a gyro may hang upside down).</summary>
     private static (double Half, bool EitherSign, double LagSd, string Words)? Comparison(SignalKind a, SignalKind b) => (a, b) switch

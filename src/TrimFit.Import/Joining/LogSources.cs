@@ -95,7 +95,7 @@ public static class LogSources
     private static bool IsPerhapsLog(string path)
     {
         string[] parts = path.Split('/', '\\');
-        return !Array.Exists(parts, part => part.StartsWith('.') || part == "__MACOSX") // what file managers leave behind
+        return !Array.Exists(parts, part => (part.StartsWith('.') && part is not ("." or "..")) || part == "__MACOSX") // what file managers leave behind
             && !_otherKinds.Contains(Path.GetExtension(path).ToLowerInvariant());
     }
 
@@ -120,7 +120,7 @@ public static class LogSources
         {
             archive = new ZipArchive(open(), ZipArchiveMode.Read);
             ZipArchiveEntry entry = archive.Entries[index];
-            return new CheckedEntryStream(name, archive, entry.Open(), entry.Length);
+            return new CheckedEntryStream(name, archive, entry.Open(), entry.Length, entry.Crc32);
         }
         catch (InvalidDataException)
         {
@@ -135,9 +135,13 @@ public static class LogSources
         LogFormatException.At(name, null, null, "a zip that unpacks to far more than a flight", Invariant($"at most {MostBytes >> 30} GB and {MostRatio} times its size"), "Unpack it yourself if it is yours, and give the files.");
 
     /// <summary>One file of a zip: ends the reading when the entry gives more than it declared, and names a damaged zip as such.</summary>
-    private sealed class CheckedEntryStream(string name, ZipArchive archive, Stream inner, long declared) : Stream
+    /// <remarks>The library does not compare the checksum and cuts an entry at its declared length, so both are looked at here.</remarks>
+    private sealed class CheckedEntryStream(string name, ZipArchive archive, Stream inner, long declared, uint checksum) : Stream
     {
+        private static readonly uint[] _crcTable = [.. Enumerable.Range(0, 256).Select(CrcOfByte)];
+
         private long _read;
+        private uint _crc = uint.MaxValue;
 
         public override bool CanRead => true;
 
@@ -167,7 +171,20 @@ public static class LogSources
                 throw Damaged(name);
             }
             _read += n;
-            return _read <= declared ? n : throw TooLarge(name);
+            if (_read > declared)
+                throw TooLarge(name);
+            foreach (byte b in buffer[..n])
+                _crc = _crcTable[(byte)(_crc ^ b)] ^ (_crc >> 8);
+            return n > 0 || buffer.IsEmpty || ~_crc == checksum ? n : throw Damaged(name);
+        }
+
+        /// <summary>CRC-32 of one byte with the reflected polynomial of ISO 3309, as zip files use it.</summary>
+        private static uint CrcOfByte(int value)
+        {
+            uint crc = (uint)value;
+            for (int bit = 0; bit < 8; bit++)
+                crc = (crc >> 1) ^ ((crc & 1) * 0xEDB88320u);
+            return crc;
         }
 
         public override void Flush()

@@ -141,7 +141,7 @@ internal sealed class TrackSignal
             || !table.Columns.TryGetValue(ChannelRole.AccelerationX, out double[]? ax) || !table.Columns.TryGetValue(ChannelRole.AccelerationY, out double[]? ay) || !table.Columns.TryGetValue(ChannelRole.AccelerationZ, out double[]? az))
             return null;
         double mx = MeanOf(ax), my = MeanOf(ay), mz = MeanOf(az), length = Math.Sqrt((mx * mx) + (my * my) + (mz * mz));
-        if (!(length > 3)) // m/s²: acceleration without gravity has no direction to level by
+        if (!(length > 0.6)) // acceleration without gravity averages to nothing and has no direction to level by; in g it is 1, in m/s² 9.8
             return null;
         double[] rate = new double[x.Length];
         for (int i = 0; i < rate.Length; i++)

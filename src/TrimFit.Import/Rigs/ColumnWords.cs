@@ -10,8 +10,6 @@ internal static class ColumnWords
     public static ColumnRule Parse(ChannelRole role, string words)
     {
         int colon = words.LastIndexOf(':');
-        return colon > 0 && IsUnit(words[(colon + 1)..]) ? new(role, words[..colon].Trim(), words[(colon + 1)..].Trim()) : new(role, words.Trim(), null);
+        return colon > 0 && LogUnits.TryParse(words[(colon + 1)..], out _) ? new(role, words[..colon].Trim(), words[(colon + 1)..].Trim()) : new(role, words.Trim(), null);
     }
-
-    private static bool IsUnit(string word) => word.Trim().Length is > 0 and <= 12 && !word.Contains(' ', StringComparison.Ordinal);
 }

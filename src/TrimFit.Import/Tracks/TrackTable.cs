@@ -97,7 +97,7 @@ internal sealed class TrackTable
             },
             Clock = clock,
             Origin = origin,
-            IsUtc = clock == ClockKind.Absolute,
+            IsUtc = true, // satellite time in all of these formats
             TimeSec = [.. _time],
             Columns = columns,
             Warnings = [.. _warnings],

@@ -21,7 +21,8 @@ internal static class FitDocument
         FitAnswer answer = FitAnswer.Of(a);
 
         document.Answer(words.Answer(answer, numbers));
-        document.Paragraph(words.Verdict(a.Verdict.Code) + " " + words.Strength(a.Verdict.Strength));
+        // Strength is about moving something; where nothing needs to be moved it would only confuse.
+        document.Paragraph(words.Verdict(a.Verdict.Code) + (a.Verdict.Code == VerdictCode.Balanced ? "" : " " + words.Strength(a.Verdict.Strength)));
         WhatToDo(document, a, answer, numbers);
         if (figures)
         {

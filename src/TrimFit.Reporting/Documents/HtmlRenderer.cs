@@ -35,7 +35,7 @@ internal static class HtmlRenderer
         .cautions { border: 2px solid var(--alert); padding: .8rem 1rem .1rem; margin: 0; list-style-position: inside; }
         .cautions li { margin-bottom: .6rem; padding-left: 0; }
         @media print { main { max-width: none; padding: 0; } h2 { break-after: avoid; } figure, .do, .answer, tr { break-inside: avoid; } body { font-size: 10pt; } .table { overflow: visible; } table { font-size: 7.5pt; } }
-        @media (max-width: 30rem) { .answer { font-size: 1.1rem; } .cautions { padding-left: .7rem; } }
+        @media (max-width: 30rem) { .answer { font-size: 1.1rem; } figure.plot { overflow-x: auto; } figure.plot svg { width: 38rem; max-width: none; } .cautions { padding-left: .7rem; } }
         """;
 
     public static string Render(ReportDocument document)

@@ -9,7 +9,7 @@ namespace TrimFit.Reporting.Figures;
 /// <remarks>The rig file knows lateral places only, so places along the machine and the width of a pair of harness hang points are sketched.</remarks>
 internal static class RigDrawing
 {
-    private const int BarFront = -150, CarabinerY = -70, FrontY = -120, CgY = 20, RearY = 95, FrameY = 140, PropellerY = 190, Bottom = 225;
+    private const int BarFront = -150, CarabinerY = -70, FrontY = -120, CgY = 20, RearY = 95, FrameY = 140, PropellerY = 190, Bottom = 204;
     // A white rim keeps letters readable where they cross the centre line.
     private static readonly HtmlText _halo = new(" paint-order=\"stroke\" stroke=\"#fff\" stroke-width=\"6\"");
     private static readonly int[] _scales = [10, 5, 4, 3, 2];
@@ -34,7 +34,7 @@ internal static class RigDrawing
             (Cross(15, 0, false), l.CarabinerMiddle),
             (Centre(15, 0, false), l.Cg),
         ];
-        int legendTop = Bottom + 30;
+        int legendTop = PropellerY + 66;
         int closeTop = legendTop + (LegendRow * (legend.Length + (after is null ? 0 : 1))) + 16;
         (string Name, Func<double, double, bool, string> Draw, double Now, double? After)[] rows =
         [
@@ -67,7 +67,7 @@ internal static class RigDrawing
         svg.Append(Invariant($"<path d=\"M{left - 30:0.#} {FrameY}Q0 {FrameY + 34} {right + 30:0.#} {FrameY}\" fill=\"none\" stroke=\"{Palette.Shade}\" stroke-width=\"10\" stroke-linecap=\"round\"/>\n"));
         double tip = Math.Min(half - 20, 260);
         svg.Append(Invariant($"<path d=\"M{(now.Thrust * 1000) - tip:0.#} {PropellerY}H{(now.Thrust * 1000) + tip:0.#}\" stroke=\"{Palette.Grey}\" stroke-width=\"5\" stroke-linecap=\"round\"/>\n"));
-        svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{PropellerY + 26}")}\" fill=\"{Palette.Grey}\"{_halo}>{words.Propeller(rig.Propeller.Rotation)}</text>\n"));
+        svg.Append(Html.Of($"<text x=\"{Invariant($"{-half + 14:0.#}")}\" y=\"{Invariant($"{PropellerY + 32}")}\" fill=\"{Palette.Grey}\"{_halo}>{words.Propeller(rig.Propeller.Rotation)}</text>\n"));
         svg.Append(Line(0, -222, 0, Bottom, Palette.Grey, 1.5, "10 4 2 4"));
         svg.Append(Invariant($"<path d=\"M0 -240l-9 20h18z\" fill=\"{Palette.Grey}\"/>"));
         svg.Append(Html.Of($"<text x=\"16\" y=\"-224\" fill=\"{Palette.Grey}\">{l.FlightDirection}</text>\n"));
@@ -77,13 +77,16 @@ internal static class RigDrawing
         svg.Append(Invariant($"<path d=\"M{x1:0.#} {CarabinerY - 102}l-7 14h14z\" fill=\"{Palette.Green}\"/>\n"));
         foreach ((Places places, bool outlined) in after is null ? new[] { (now, false) } : [(now, false), (after, true)])
         {
-            foreach ((double middle, int y) in new[] { (places.Front * 1000, FrontY), (places.Rear * 1000, RearY) })
+            bool Same(Func<Places, double> place) => outlined && Math.Abs(place(places) - place(now)) < 0.0005; // what stays is drawn once
+            foreach ((double middle, int y, bool same) in new[] { (places.Front * 1000, FrontY, Same(p => p.Front)), (places.Rear * 1000, RearY, Same(p => p.Rear)) })
             {
+                if (same)
+                    continue;
                 svg.Append(Line(middle - pair, y, middle + pair, y, outlined ? Palette.Vermilion : Palette.Blue, 1, outlined ? "4 3" : ""));
                 svg.Append(Square(middle - pair, y, outlined)).Append(Square(middle + pair, y, outlined)).Append('\n');
             }
-            svg.Append(Ring(places.Left * 1000, CarabinerY, outlined)).Append(Ring(places.Right * 1000, CarabinerY, outlined));
-            svg.Append(Cross(places.Middle * 1000, CarabinerY, outlined)).Append(Centre(places.Cg * 1000, CgY, outlined)).Append('\n');
+            svg.Append(Same(p => p.Left) ? "" : Ring(places.Left * 1000, CarabinerY, outlined)).Append(Same(p => p.Right) ? "" : Ring(places.Right * 1000, CarabinerY, outlined));
+            svg.Append(Same(p => p.Middle) ? "" : Cross(places.Middle * 1000, CarabinerY, outlined)).Append(Same(p => p.Cg) ? "" : Centre(places.Cg * 1000, CgY, outlined)).Append('\n');
         }
     }
 

@@ -113,6 +113,8 @@ internal sealed record GyroJson
     public required double? Scale { get; init; }
     public required int? Sign { get; init; }
     public required double? DelayS { get; init; }
+    public required double? ScaleStdError { get; init; }
+    public required double? DelayStdErrorS { get; init; }
 }
 
 internal record TurnModelJson
@@ -130,6 +132,7 @@ internal record TurnModelJson
 internal sealed record CrossCheckJson : TurnModelJson
 {
     /// <summary><c>agrees</c>, <c>differs</c>, or null when one of the two cannot say.</summary>
+    [JsonPropertyOrder(1)] // after the keys it shares with the turn model
     public required string? Agreement { get; init; }
 }
 

@@ -11,6 +11,10 @@ internal sealed class FlightMotion
     private const double SlowdownAtFullBrake = 0.35; // of trim speed, with both brakes at full travel: order of a paraglider's speed range
     private const double MaxPilotSteerM = 0.30;
     private const double SpeedNoiseMPerSec = 0.15;
+    private const double MostTrimmedOutRadPerSec = 0.35; // what a pilot leans on a brake for in the long run: 20 deg/s
+    private const double CircleGainPerSec = 0.3;
+    private const double TurnLeadSec = 1.2; // a pilot lets up before the heading is reached, since the wing turns on
+    private const double FlyingShareOfTrimSpeed = 0.5; // below it a take-off run is on the ground
 
     private readonly Scenario _s;
     private readonly Dictionary<double, ThrustTable> _tables = [];
@@ -19,7 +23,7 @@ internal sealed class FlightMotion
     private readonly (double Time, double Lift, double Turn)[] _thermals;
     private readonly double[] _headingSeen, _rateSeen; // ring buffers: what the pilot saw a reaction time ago
     private readonly double _speedKeep, _handKeep, _engineKeep, _firstKeep;
-    private readonly double _liftDragNewton, _allKg;
+    private readonly double _levelDragN, _allKg;
 
     private ThrustTable _table;
     private ThrustTable.Row _row;
@@ -36,7 +40,7 @@ internal sealed class FlightMotion
         _s = s;
         _table = _tables[0] = new ThrustTable(s);
         _allKg = s.Mass.PilotKg + s.Mass.PowerUnitKg + s.Mass.WingKg;
-        _liftDragNewton = s.LevelThrustN;
+        _levelDragN = s.LevelThrustN;
         var air = new RandomStream(s.Seed, 1);
         var gust = new RandomStream(s.Seed, 2);
         var disturbance = new RandomStream(s.Seed, 3);
@@ -104,7 +108,7 @@ internal sealed class FlightMotion
     public bool LegDone => _turnDone || (_step - _legStart) * StepSec >= _leg.DurationSec - (StepSec / 2);
 
     /// <summary>Share of the air's motion that moves the machine: on the ground it stands still.</summary>
-    private double Moving => OnGround ? 0 : Math.Min(1, SpeedMPerSec / (0.5 * _s.Wing.TrimSpeedMPerSec));
+    private double Moving => OnGround ? 0 : Math.Min(1, SpeedMPerSec / (FlyingShareOfTrimSpeed * _s.Wing.TrimSpeedMPerSec));
 
     public void Begin(FlightLeg leg)
     {
@@ -157,7 +161,7 @@ internal sealed class FlightMotion
         _table.At(ThrustN, out _row);
         StepFrame();
         UpdateWind();
-        if (OnGround || (_leg.Control == LegControl.TakeOff && SpeedMPerSec < 0.5 * _s.Wing.TrimSpeedMPerSec))
+        if (OnGround || (_leg.Control == LegControl.TakeOff && SpeedMPerSec < FlyingShareOfTrimSpeed * _s.Wing.TrimSpeedMPerSec))
         {
             StandOrRun();
             return;
@@ -223,7 +227,7 @@ internal sealed class FlightMotion
         double wanted = (_s.Wing.TrimSpeedMPerSec * (1 - (SlowdownAtFullBrake * Math.Min(1, brakes)))) + _speedNoise.Step();
         SpeedMPerSec = wanted + (_speedKeep * (SpeedMPerSec - wanted));
         double load = 1 / Math.Cos(BankRad);
-        double drag = _liftDragNewton * load * Math.Sqrt(load); // sink grows as load to 3/2 at one angle of attack
+        double drag = _levelDragN * load * Math.Sqrt(load); // sink grows as load to 3/2 at one angle of attack
         double climb = ((ThrustN - drag) / (_allKg * PhysicalConstants.StandardGravity) * SpeedMPerSec) + lift;
         ClimbMPerSec += StepSec * (climb - ClimbMPerSec) / ClimbLagSec;
         AltitudeM += StepSec * ClimbMPerSec;
@@ -248,20 +252,20 @@ internal sealed class FlightMotion
                 break;
             case LegControl.HoldHeading:
             case LegControl.Land:
-            case LegControl.TakeOff when SpeedMPerSec > 0.5 * _s.Wing.TrimSpeedMPerSec:
+            case LegControl.TakeOff when SpeedMPerSec > FlyingShareOfTrimSpeed * _s.Wing.TrimSpeedMPerSec:
                 double error = (_leg.Control == LegControl.TakeOff ? _headingAtStart : _target) - headingSeen;
                 error = Math.CopySign(Math.Max(0, Math.Abs(error) - pilot.HeadingDeadBandRad), error);
-                _integral = Math.Clamp(_integral + (StepSec * pilot.IntegralGain * error), -0.35, 0.35);
+                _integral = Math.Clamp(_integral + (StepSec * pilot.IntegralGain * error), -MostTrimmedOutRadPerSec, MostTrimmedOutRadPerSec);
                 Difference((((pilot.HeadingGain * error) - (pilot.RateGain * rateSeen) + _integral) / _s.Brakes.TurnPerMeter) + noise);
                 break;
             case LegControl.Turn:
                 double turned = HeadingRad - _headingAtStart;
-                double lead = Math.Abs(TurnRateRadPerSec) * 1.2; // let up before the heading is reached, since the wing turns on
+                double lead = Math.Abs(TurnRateRadPerSec) * TurnLeadSec;
                 _turnDone = Math.Abs(turned) >= Math.Abs(_leg.TurnRad) - lead && turned * _leg.TurnRad >= 0;
-                Difference((Math.CopySign(pilot.TurnBrakeM, _leg.TurnRad)) + noise);
+                Difference(Math.CopySign(pilot.TurnBrakeM, _leg.TurnRad) + noise);
                 break;
             case LegControl.Circle:
-                _integral = Math.Clamp(_integral + (StepSec * 0.3 * (_leg.TurnRateRadPerSec - rateSeen)), -0.35, 0.35);
+                _integral = Math.Clamp(_integral + (StepSec * CircleGainPerSec * (_leg.TurnRateRadPerSec - rateSeen)), -MostTrimmedOutRadPerSec, MostTrimmedOutRadPerSec);
                 Difference(((_leg.TurnRateRadPerSec + _integral) / _s.Brakes.TurnPerMeter) + noise);
                 break;
             default:
@@ -324,7 +328,7 @@ internal sealed class FlightMotion
     }
 
     private double ThrustAt(double ratio) =>
-        _s.Propeller.Clutch && ratio < 1.15 * _s.Propeller.IdleRatio ? 0 : _s.Propeller.FullThrustN * Density() * ratio * ratio;
+        _s.Propeller.Clutch && ratio < PropellerSetup.ClutchOverIdle * _s.Propeller.IdleRatio ? 0 : _s.Propeller.FullThrustN * Density() * ratio * ratio;
 
     private double RatioFor(double throttle, FlightLeg leg)
     {
@@ -337,7 +341,7 @@ internal sealed class FlightMotion
     private double LevelThrottle()
     {
         PropellerSetup p = _s.Propeller;
-        double ratio = Math.Sqrt(_liftDragNewton / (p.FullThrustN * Density()));
+        double ratio = Math.Sqrt(_levelDragN / (p.FullThrustN * Density()));
         double x = Math.Clamp((ratio - p.IdleRatio) / (1 - p.IdleRatio), 0, 1);
         return Math.Pow(x, 1 / p.ThrottleExponent);
     }

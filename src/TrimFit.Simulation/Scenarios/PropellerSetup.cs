@@ -5,6 +5,8 @@ namespace TrimFit.Simulation;
 /// <summary>Engine, propeller and thrust line.</summary>
 public sealed record PropellerSetup
 {
+    internal const double ClutchOverIdle = 1.15; // a clutch takes hold this much above idle
+
     /// <summary>+1 clockwise seen from behind, −1 counter-clockwise, 0 contra-rotating.</summary>
     public int Rotation
     {

@@ -45,7 +45,7 @@ public static class RigText
         if (p.Clutch)
         {
             Line($"drive = \"clutch\"");
-            Line($"clutch_engage_rpm = {Value(1.15 * p.IdleRatio * p.FullRevPerSec * s.Sensors.RpmFactor * 60)}");
+            Line($"clutch_engage_rpm = {Value(PropellerSetup.ClutchOverIdle * p.IdleRatio * p.FullRevPerSec * s.Sensors.RpmFactor * 60)}");
         }
         if (k.ThrustLine)
         {

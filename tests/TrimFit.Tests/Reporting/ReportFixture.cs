@@ -99,7 +99,7 @@ internal static class ReportFixture
         };
     }
 
-    public static TrimAnalysis Analysis(VerdictCode code = VerdictCode.PowerPull, VerdictStrength strength = VerdictStrength.Weak, double? degPerSec = 2.1, double half = 0.4,
+    public static TrimAnalysis Result(VerdictCode code = VerdictCode.PowerPull, VerdictStrength strength = VerdictStrength.Weak, double? degPerSec = 2.1, double half = 0.4,
         ImmutableArray<AdjustmentReport>? adjustments = null, ImmutableArray<Finding>? reasons = null, BalanceThrust? balance = null, Rig? rig = null)
     {
         ImmutableArray<AdjustmentReport> ways = adjustments ?? [Adjustment()];
@@ -149,7 +149,7 @@ internal static class ReportFixture
 
     public static FitReport Report(TrimAnalysis? analysis = null, FlightImport? import = null, string rigFile = "demo-rig.toml") => new()
     {
-        Analysis = analysis ?? Analysis(), Import = import ?? Import(), RigFile = new(rigFile, new string('b', 64)), Provenance = new("1.2.3"),
+        Analysis = analysis ?? Result(), Import = import ?? Import(), RigFile = new(rigFile, new string('b', 64)), Provenance = new("1.2.3"),
     };
 
     public static InspectReport Inspection(FlightImport? import = null) => new()

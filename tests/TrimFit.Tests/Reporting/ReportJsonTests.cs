@@ -24,7 +24,7 @@ public class ReportJsonTests
         Assert.Equal(["name", "sha256", "format", "rows_read", "rows_left_out", "columns"], Keys(fit.GetProperty("inputs").GetProperty("files")[0]));
         Assert.Equal(["start", "duration_s", "rate_hz", "gaps", "clocks"], Keys(fit.GetProperty("sampling")));
         Assert.Equal(["north_m_s", "east_m_s", "airspeed_m_s", "arc_deg", "north_std_error_m_s", "east_std_error_m_s", "airspeed_std_error_m_s"], Keys(fit.GetProperty("wind")));
-        Assert.Equal(["bias_deg_s", "bias_std_error_deg_s", "scale", "sign", "delay_s"], Keys(fit.GetProperty("gyro")));
+        Assert.Equal(["bias_deg_s", "bias_std_error_deg_s", "scale", "sign", "delay_s", "scale_std_error", "delay_std_error_s"], Keys(fit.GetProperty("gyro")));
         Assert.Equal(["method", "thrust_basis", "coefficients", "covariance", "lag_s", "disturbance", "n_eff", "condition"], Keys(fit.GetProperty("turn_model")));
         Assert.Equal(["name", "unit", "value", "std_error", "low95", "high95", "reason"], Keys(fit.GetProperty("turn_model").GetProperty("coefficients")[0]));
         Assert.Equal(["rms_deg_s", "tau_s"], Keys(fit.GetProperty("turn_model").GetProperty("disturbance")));
@@ -66,8 +66,8 @@ public class ReportJsonTests
         Assert.Equal("deg/s per %", brake.GetProperty("unit").GetString());
         Accuracy.AgreesTo(8, 0.7, brake.GetProperty("value").GetDouble()); // 70 deg/s for the whole travel
         Accuracy.AgreesTo(8, 0.05 * 0.05, fit.GetProperty("turn_model").GetProperty("covariance")[3][3].GetDouble());
-        // Student's t, 10 degrees of freedom, two-sided 95 %: 2.228 (any table)
-        Accuracy.AgreesTo(3.5, 0.4 - (2.228 * 0.2), fit.GetProperty("turn_model").GetProperty("coefficients")[0].GetProperty("low95").GetDouble());
+        // Student's t, 10 degrees of freedom, two-sided 95 %: 2.22814 (tables of the t distribution)
+        Accuracy.AgreesTo(4.5, 0.4 - (2.22814 * 0.2), fit.GetProperty("turn_model").GetProperty("coefficients")[0].GetProperty("low95").GetDouble());
     }
 
     [Fact]
@@ -82,7 +82,7 @@ public class ReportJsonTests
     [Fact]
     public void Ballast_and_cant_have_their_own_units()
     {
-        JsonElement ways = Parse(ReportFixture.Report(ReportFixture.Analysis(adjustments:
+        JsonElement ways = Parse(ReportFixture.Report(ReportFixture.Result(adjustments:
         [
             ReportFixture.Adjustment(AdjustmentKind.Ballast, 2.5, 1, 4, TravelUnit.Kilogram),
             ReportFixture.Adjustment(AdjustmentKind.EngineCant, double.DegreesToRadians(2), 0.01, 0.05, TravelUnit.Radian),
@@ -109,7 +109,7 @@ public class ReportJsonTests
     [Fact]
     public void No_number_is_ever_NaN()
     {
-        TrimAnalysis analysis = ReportFixture.Analysis() with
+        TrimAnalysis analysis = ReportFixture.Result() with
         {
             Sensitivity = new()
             {
@@ -126,7 +126,7 @@ public class ReportJsonTests
     [Fact]
     public void A_cross_check_has_the_form_of_the_turn_model_and_its_agreement()
     {
-        TrimAnalysis same = ReportFixture.Analysis() with { CrossCheck = ReportFixture.Fit() };
+        TrimAnalysis same = ReportFixture.Result() with { CrossCheck = ReportFixture.Fit() };
         JsonElement check = Parse(ReportFixture.Report(same)).GetProperty("cross_check");
         Assert.Equal([.. Keys(Fit().GetProperty("turn_model")), "agreement"], Keys(check));
         Assert.Equal("agrees", check.GetProperty("agreement").GetString());

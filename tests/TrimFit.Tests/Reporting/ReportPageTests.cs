@@ -13,7 +13,7 @@ public partial class ReportPageTests
     [Fact]
     public void Names_from_files_never_become_markup()
     {
-        FitReport report = ReportFixture.Report(ReportFixture.Analysis(rig: ReportFixture.Rig(name: Hostile)), ReportFixture.Import(Hostile, Hostile, Hostile), Hostile);
+        FitReport report = ReportFixture.Report(ReportFixture.Result(rig: ReportFixture.Rig(name: Hostile)), ReportFixture.Import(Hostile, Hostile, Hostile), Hostile);
         foreach (string page in new[]
         {
             ReportPage.Fit(report, new()), ReportPage.Inspect(ReportFixture.Inspection(report.Import), new()),
@@ -74,7 +74,7 @@ public partial class ReportPageTests
         Assert.Contains("95 % band", turn, StringComparison.Ordinal);
         string flight = string.Concat(figures[2].Descendants().Where(e => e.Name.LocalName == "text").Select(e => e.Value));
         Assert.Contains("time [min]", flight, StringComparison.Ordinal);
-        Assert.Contains("brakes, right + [%]", flight, StringComparison.Ordinal);
+        Assert.Contains("brakes [%]", flight, StringComparison.Ordinal);
     }
 
     [Fact]
@@ -96,7 +96,7 @@ public partial class ReportPageTests
     public void A_flight_with_nothing_to_draw_still_gives_a_page()
     {
         TurnFit empty = ReportFixture.Fit() with { Coefficients = [new("constant", null, "nothing flown")], Covariance = [0], Points = [], DegreesOfFreedom = 0 };
-        TrimAnalysis analysis = ReportFixture.Analysis(VerdictCode.Insufficient, VerdictStrength.None, null, adjustments: [], reasons: [Finding.Of(FindingCode.NoThrust)]) with
+        TrimAnalysis analysis = ReportFixture.Result(VerdictCode.Insufficient, VerdictStrength.None, null, adjustments: [], reasons: [Finding.Of(FindingCode.NoThrust)]) with
         {
             Fit = empty,
             Signals = new()

@@ -60,7 +60,7 @@ public class ReportTextTests
     public void A_reason_said_in_the_answer_is_not_said_again()
     {
         Finding reason = Finding.Of(FindingCode.NoThrust);
-        string text = ReportText.Fit(ReportFixture.Report(ReportFixture.Analysis(VerdictCode.Insufficient, VerdictStrength.None, null, adjustments: [], reasons: [reason]) with { Warnings = [reason] }), new())
+        string text = ReportText.Fit(ReportFixture.Report(ReportFixture.Result(VerdictCode.Insufficient, VerdictStrength.None, null, adjustments: [], reasons: [reason]) with { Warnings = [reason] }), new())
             .Replace('\n', ' ');
         Assert.Single(System.Text.RegularExpressions.Regex.Matches(text, "The log says nothing about thrust"));
     }

@@ -66,9 +66,9 @@ public partial class WordsTests
     [Fact]
     public void A_strong_pull_brings_its_caution()
     {
-        TrimAnalysis strong = ReportFixture.Analysis() with { Warnings = [Finding.Of(FindingCode.StrongPull, -0.12)] };
+        TrimAnalysis strong = ReportFixture.Result() with { Warnings = [Finding.Of(FindingCode.StrongPull, -0.12)] };
         Assert.Contains(CautionCode.StrongPull, Cautions.Of(strong));
-        Assert.DoesNotContain(CautionCode.StrongPull, Cautions.Of(ReportFixture.Analysis()));
+        Assert.DoesNotContain(CautionCode.StrongPull, Cautions.Of(ReportFixture.Result()));
     }
 
     private static string[] Codes(CautionPlaces places) => [.. Cautions.For(places).Select(Cautions.CodeOf)];

@@ -77,6 +77,45 @@ public class SteadyTurnTests
     }
 
     [Fact]
+    public void Moments_follow_the_closed_form_at_the_thrust_of_level_flight()
+    {
+        // Written apart from the solver. Beyond the small-angle formulas three things count: the weight acts at e with the risers' load R,
+        // the stiffness against twist is R a b/h, and the CG, swung back by the frame's pitch under power, is carried sideways by the twist.
+        for (ulong seed = 0; seed < 40; seed++)
+        {
+            Scenario s = RandomScenarios.Draw(seed);
+            double thrust = s.LevelThrustN;
+            double kg = s.Mass.PilotKg + s.Mass.PowerUnitKg;
+            double weight = kg * G;
+            double depth = s.Mass.CgDepthM;
+            double pilot = s.Mass.PostureM + (s.Geometry.FrontShare * s.Geometry.FrontHangPointsM) + ((1 - s.Geometry.FrontShare) * s.Geometry.RearHangPointsM);
+            double e = ((s.Mass.PilotKg * pilot) + (s.Mass.PowerUnitKg * s.Mass.PowerUnitLateralM)) / kg; // carabiners are drawn centred
+            double angle = s.Propeller.HangBackRad;
+            double risers = weight;
+            for (int i = 0; i < 50; i++)
+            {
+                double square = thrust * Math.Cos(angle);
+                risers = Math.Sqrt((weight * weight) - (square * square)) - (thrust * Math.Sin(angle));
+                angle = s.Propeller.HangBackRad - (thrust * (depth - s.Propeller.ThrustLineDepthM) / (risers * depth));
+            }
+            double torque = s.Propeller.Rotation * s.Propeller.FullTorqueNm * thrust / s.Propeller.FullThrustN;
+            double yaw = (-thrust * Math.Cos(angle) * (s.Propeller.ThrustLineM - e)) + (torque * Math.Sin(angle));
+            double half = s.Geometry.RightCarabinerM;
+            double height = Math.Sqrt((s.Wing.LineLengthM * s.Wing.LineLengthM) - ((s.Wing.LineSpreadM - half) * (s.Wing.LineSpreadM - half)));
+            double twist = Math.Asin(yaw * height / (risers * half * s.Wing.LineSpreadM));
+            double wholeDepth = ((kg * depth) - (s.Mass.WingKg * s.Wing.LineLengthM)) / (kg + s.Mass.WingKg);
+            double roll = (risers * (e + (depth * Math.Sin(angle - s.Propeller.HangBackRad) * Math.Sin(twist))))
+                - (torque * Math.Cos(angle)) - ((s.Propeller.ThrustLineDepthM - wholeDepth) * thrust * Math.Sin(twist));
+
+            FrameEquilibrium frame = new FrameStatics(s).Solve(thrust)!;
+            double size = Math.Abs(torque) + (risers * Math.Abs(e)) + 1; // N·m: what the sums are made of
+            Assert.InRange(frame.YawMomentNm, yaw - (0.02 * size), yaw + (0.02 * size));
+            Assert.InRange(frame.RollMomentNm, roll - (0.04 * size), roll + (0.04 * size));
+            Assert.InRange(frame.TwistRad, twist - 0.01, twist + 0.01);
+        }
+    }
+
+    [Fact]
     public void The_mirror_image_turns_the_other_way() => Gen.Select(
         Gen.Double[-0.03, 0.03], Gen.Double[-0.02, 0.02], Gen.Double[-0.02, 0.02], Gen.Double[0.1, 0.4], Gen.Double[0, 0.15], Gen.Double[0, 450])
         .Sample((shift, line, front, depth, hangBack, thrust) =>

@@ -165,9 +165,9 @@ public class ReferenceNistLinearTests
         double[] deviations = [298.084530995537, 559.779865474950, 466.477572127796, 227.204274477751, 71.6478660875927, 15.2897178747400, 2.23691159816033,
             0.221624321934227, 0.142363763154724e-1, 0.535617408889821e-3, 0.896632837373868e-5];
         LeastSquaresFit fit = LeastSquares.Fit(design, data["y"], estimates.Length);
-        Agree(7, estimates, [.. fit.Coefficients]);
-        Agree(7, deviations, [.. Enumerable.Range(0, estimates.Length).Select(j => fit[j].StandardError)]);
-        Accuracy.AgreesTo(7, 0.334801051324544e-2, fit.ResidualScale);
+        Agree(7.5, estimates, [.. fit.Coefficients]); // what rounding the powers of x to doubles leaves; the fit to those doubles is exact to all digits
+        Agree(7.5, deviations, [.. Enumerable.Range(0, estimates.Length).Select(j => fit[j].StandardError)]);
+        Accuracy.AgreesTo(9, 0.334801051324544e-2, fit.ResidualScale);
         Assert.Equal(estimates.Length, fit.Rank);
     }
 

@@ -91,7 +91,7 @@ public class ReferenceRobustTests
             Assert.True(fit.Convergence.Converged);
             Assert.Equal(2, fit.Coefficients[0], 0.3); // 36 good rows of 0.1: standard error 0.03
             Assert.Equal(0.5, fit.Coefficients[1], 0.06);
-        });
+        }, iter: 30);
 
     [Fact]
     public void Huber_s_fit_bounds_a_few_wild_rows_and_the_bisquare_forgets_them()
