@@ -306,8 +306,8 @@ internal sealed record EnglishWords : Words
             FindingCode.FullPowerSpeedAssumed => $"Propeller speed at full power is not in the rig file; the largest in the log stands in: {Value(0, n => numbers.Plain(n * 60, 0))} rpm. Give full_power_rpm.",
             FindingCode.ThrottleTakenAsThrust => "There is no throttle table in the rig file, so thrust is taken as proportional to throttle. Give throttle_thrust_percent, or log the rpm.",
             FindingCode.GyroUnitCorrected => $"The gyro's unit did not fit the GPS turns and was corrected by a factor of {Value(0, g => numbers.Significant(g, 3))}. Name the unit: --column yaw_rate=NAME:deg/s.",
-            FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Plain(s, 2))} times the turn of the GPS track and no known unit explains it; "
-                + (Sign(1) != 0 ? "it was calibrated by the GPS. " : "it was set aside. ") + "Check how the logger is mounted and the unit of its yaw rate.",
+            FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Significant(s, 3))} times the turn of the GPS track, which is no unit of a turn rate. "
+                + (Sign(1) > 0 ? "It was calibrated by the GPS." : "The gyro was set aside and the turn taken from the GPS.") + " Check the unit of its yaw rate.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
             FindingCode.GyroScaleCorrected => $"The gyro shows {Value(0, numbers.Percent)} (± {Value(1, e => numbers.PercentNumber(1.96 * e))}) of the turn of the GPS track"
                 + (Sign(2) > 0 ? $", as one mounted {Value(2, numbers.Angle)} off the vertical would" : "") + "; its readings were divided by that.",
