@@ -22,7 +22,9 @@ internal sealed record HeaderName(string Name, LogUnit? Unit, string? UnknownUni
                 string before = text[..at].Trim(' ', '_', '-', ':', ',');
                 if (LogUnits.TryParse(inside, out LogUnit unit))
                     return new(before, unit, null);
-                // "Alt (baro)" is a name; what is no name either is kept as a unit nobody knows.
+                if (LogUnits.IsRemark(inside))
+                    return new(ColumnNames.TryFind(text, out _, out _) ? text : before, null, null);
+                // "Alt (left)" is a name; what is no name either is kept as a unit nobody knows.
                 return ColumnNames.TryFind(text, out _, out _) ? new(text, null, null) : new(before, null, inside.Length > 0 ? inside : null);
             }
         }
