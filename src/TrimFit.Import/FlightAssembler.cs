@@ -3,7 +3,7 @@ using TrimFit.Core.Logs;
 
 namespace TrimFit.Import;
 
-/// <summary>Makes the flight and the summary of its clock from one table.</summary>
+/// <summary>Sums up the clock of a flight.</summary>
 internal static class FlightAssembler
 {
     /// <summary>Median steps that make a pause.</summary>
@@ -11,24 +11,6 @@ internal static class FlightAssembler
 
     /// <summary>Shortest pause, s, that is called one.</summary>
     private const double GapSec = 2;
-
-    /// <summary>The flight of a single file.</summary>
-    public static FlightImport FromOne(LogTable table)
-    {
-        DateTimeOffset? start = table.Clock == ClockKind.Absolute ? table.Origin : null;
-        var flight = FlightLog.TakeOver(table.TimeSec, table.Columns, new FlightLogOptions
-        {
-            StartUtc = start,
-            BrakeUnit = table.BrakeUnit,
-            TrimmerUnit = table.TrimmerUnit,
-        });
-        return new(flight, new ImportDiagnostics
-        {
-            Files = [table.File],
-            Sampling = Summarise(table.TimeSec, table.Columns.Values, start),
-            Warnings = [.. table.Warnings],
-        });
-    }
 
     /// <summary>Rate, duration and pauses.</summary>
     /// <param name="timeSec">Time of each row, s, strictly increasing.</param>

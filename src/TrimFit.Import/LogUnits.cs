@@ -116,7 +116,7 @@ public static class LogUnits
             ChannelRole.Rpm => unit.Quantity == Quantity.Rotation,
             ChannelRole.Power => unit.Quantity == Quantity.Power,
             ChannelRole.Voltage => unit.Quantity == Quantity.Voltage,
-            ChannelRole.Current => unit.Quantity == Quantity.Current,
+            ChannelRole.Current or ChannelRole.MotorCurrent => unit.Quantity == Quantity.Current,
             ChannelRole.YawRate or ChannelRole.GyroX or ChannelRole.GyroY or ChannelRole.GyroZ or ChannelRole.RollRate => unit.Quantity == Quantity.AngularRate,
             ChannelRole.AccelerationX or ChannelRole.AccelerationY or ChannelRole.AccelerationZ => unit.Quantity == Quantity.Acceleration,
             ChannelRole.Heading or ChannelRole.Roll or ChannelRole.GroundCourse or ChannelRole.Latitude or ChannelRole.Longitude or ChannelRole.Position =>

@@ -19,11 +19,11 @@ public sealed class CsvLogFormat : ILogFormat
         CsvHead head = CsvHead.Read(source);
         if (CsvLongRows.Layout(head) is { } layout)
             return ReadLong(source, options, head, layout);
-        CsvPlan plan = CsvPlan.Create(source.Name, head, options.Columns);
+        CsvPlan plan = CsvPlan.Create(source.Name, head, options);
         var rows = new CsvRows(source.Name, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
         {
-            plan = CsvPlan.Create(source.Name, head, options.Columns);
+            plan = CsvPlan.Create(source.Name, head, options);
             rows = new CsvRows(source.Name, head, plan, options.Strict);
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }
@@ -34,10 +34,10 @@ public sealed class CsvLogFormat : ILogFormat
     // One value per row: the time comes from the file's columns, the rest from the channels.
     private static LogTable ReadLong(LogSource source, ImportOptions options, CsvHead head, CsvLongLayout layout)
     {
-        CsvPlan timePlan = CsvPlan.CreateForTime(source.Name, head, options.Columns);
+        CsvPlan timePlan = CsvPlan.CreateForTime(source.Name, head, options);
         var rows = new CsvLongRows(source.Name, head, layout, timePlan.Time, options);
         rows.Read(source, options.Progress);
-        CsvPlan plan = CsvPlan.CreateForChannels(source.Name, head, rows.Finish(), options.Columns);
+        CsvPlan plan = CsvPlan.CreateForChannels(source.Name, head, rows.Finish(), options);
         return Table(source.Name, head, timePlan.Time, [.. timePlan.Columns.Where(c => c.Role is not null), .. plan.Columns], plan.Columns, [.. timePlan.Notices, .. plan.Notices], rows);
     }
 
@@ -80,6 +80,7 @@ public sealed class CsvLogFormat : ILogFormat
             Clock = clock,
             Origin = origin,
             IsUtc = clock != ClockKind.Elapsed && (dated.IsUtc || rows.SawZone),
+            ElapsedStartSec = clock == ClockKind.Elapsed ? rows.ZeroSec + first : 0,
             TimeSec = time,
             Columns = columns,
             BrakeUnit = units.BrakeUnit,

@@ -27,10 +27,10 @@ internal sealed class CsvPlan
 
     /// <summary>Makes the plan.</summary>
     /// <exception cref="LogFormatException">A told column is not there, no column gives the time, or none but the time is known.</exception>
-    public static CsvPlan Create(string file, CsvHead head, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan Create(string file, CsvHead head, ImportOptions options)
     {
         var plan = new CsvPlan(file, head);
-        plan.ApplyRules(rules);
+        plan.ApplyRules(options.Columns, options.ColumnsMayBeElsewhere);
         plan.FindByName();
         plan.FindAxesByFileName();
         plan.KeepOnePerRole();
@@ -42,10 +42,10 @@ internal sealed class CsvPlan
     }
 
     /// <summary>Makes the plan of a log with one value per row: here only its time.</summary>
-    public static CsvPlan CreateForTime(string file, CsvHead head, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan CreateForTime(string file, CsvHead head, ImportOptions options)
     {
         var plan = new CsvPlan(file, head);
-        plan.ApplyRules([.. rules.Where(r => r.Role is ChannelRole.Time or ChannelRole.Date)]);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is ChannelRole.Time or ChannelRole.Date)], options.ColumnsMayBeElsewhere);
         plan.FindByName();
         foreach (CsvColumn column in plan.Columns)
         {
@@ -58,10 +58,10 @@ internal sealed class CsvPlan
     }
 
     /// <summary>Makes the plan of the channels of such a log.</summary>
-    public static CsvPlan CreateForChannels(string file, CsvHead head, IReadOnlyList<CsvColumn> channels, IReadOnlyList<ColumnRule> rules)
+    public static CsvPlan CreateForChannels(string file, CsvHead head, IReadOnlyList<CsvColumn> channels, ImportOptions options)
     {
         var plan = new CsvPlan(file, head, channels);
-        plan.ApplyRules([.. rules.Where(r => r.Role is not (ChannelRole.Time or ChannelRole.Date))]);
+        plan.ApplyRules([.. options.Columns.Where(r => r.Role is not (ChannelRole.Time or ChannelRole.Date))], options.ColumnsMayBeElsewhere);
         plan.FindByName();
         foreach (CsvColumn column in plan.Columns)
         {
@@ -82,14 +82,16 @@ internal sealed class CsvPlan
         return new CsvColumn { Index = index, Name = name, BareName = parts.Name, Unit = unit, UnitBasis = basis };
     }
 
-    private void ApplyRules(IReadOnlyList<ColumnRule> rules)
+    private void ApplyRules(IReadOnlyList<ColumnRule> rules, bool mayBeElsewhere)
     {
         var given = new HashSet<ChannelRole>();
         foreach (ColumnRule rule in rules)
         {
+            CsvColumn? column = Find(rule.Name);
+            if (column is null && mayBeElsewhere)
+                continue;
             if (!given.Add(rule.Role)) // the person's word comes before the rig file's
                 continue;
-            CsvColumn? column = Find(rule.Name);
             if (column is null)
             {
                 throw LogFormatException.At(_file, Math.Max(1, _head.HeaderLine), null, $"no column \"{rule.Name}\" for {ChannelRoles.NameOf(rule.Role)}",
@@ -275,7 +277,7 @@ internal sealed class CsvPlan
         ChannelRole.Pressure => "hPa, Pa",
         ChannelRole.Power => "W, kW",
         ChannelRole.Voltage => "V, mV",
-        ChannelRole.Current => "A, mA",
+        ChannelRole.Current or ChannelRole.MotorCurrent => "A, mA",
         ChannelRole.Accelerator or ChannelRole.EngineNoise => "%, 0-1",
         ChannelRole.HandsOff or ChannelRole.Marker => "count",
         _ => "m/s, km/h",

@@ -385,7 +385,7 @@ internal sealed class CsvUnits
                         Infer(column, high > 1000 ? "mV" : "V", "of its size");
                     ApplyOrAsk(column, "V, mV");
                     break;
-                case ChannelRole.Current:
+                case ChannelRole.Current or ChannelRole.MotorCurrent:
                     if (column.Unit is null)
                         Infer(column, high > 2000 ? "mA" : "A", "of its size");
                     ApplyOrAsk(column, "A, mA");
