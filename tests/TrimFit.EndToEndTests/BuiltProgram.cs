@@ -16,6 +16,7 @@ internal static class BuiltProgram
 
     /// <summary>Runs the program to its end.</summary>
     /// <param name="locale">Locale of the person's shell; null leaves the machine's.</param>
+    /// <param name="args">Words of the command line.</param>
     public static Outcome Run(string? locale, params ReadOnlySpan<string> args)
     {
         var start = new ProcessStartInfo(Executable)
