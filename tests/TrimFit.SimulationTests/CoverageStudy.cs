@@ -29,6 +29,8 @@ internal sealed record QuantityCoverage(double Covered, double BiasInErrors, dou
 
 internal static class CoverageStudy
 {
+    public static FilterErrorOptions Options { get; set; } = new();
+
     /// <summary>Flies and fits; half the flights have a first-order wing, half a second-order one.</summary>
     public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Action<int>? progress = null)
     {
@@ -62,7 +64,7 @@ internal static class CoverageStudy
         var random = new Gauss(seed);
         TurnScenario scenario = TurnScenario.Random(random, secondOrder, sensors, hardship);
         TurnSignals signals = MadeUpFlight.Fly(scenario, random);
-        var estimator = new FilterErrorEstimator();
+        var estimator = new FilterErrorEstimator(Options);
         TurnFit fit = estimator.Estimate(signals);
         TurnFit? known = withKnown ? estimator.EstimateWith(signals, TrueNoise(scenario)) : null;
         double t = StudentT.InvCDF(0, 1, fit.DegreesOfFreedom, 0.975);

@@ -30,7 +30,8 @@ internal static class MadeUpFlight
         double thermal = 0, thermalEnds = 0, nextThermal = random.Between(10, 40);
         var seen = new Queue<(double Psi, double R)>(); // the pilot's reaction time
         int reaction = (int)(random.Between(0.3, 0.6) / Step);
-        double eagerness = random.Between(0.15, 0.5), damping = random.Between(0.2, 0.8);
+        double scaleK = double.Parse(Environment.GetEnvironmentVariable("FEED") ?? "1", System.Globalization.CultureInfo.InvariantCulture);
+        double eagerness = scaleK * random.Between(0.15, 0.5), damping = scaleK * random.Between(0.2, 0.8);
 
         for (int i = 0; i < rows; i++)
         {

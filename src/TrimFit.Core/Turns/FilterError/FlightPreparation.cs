@@ -158,6 +158,10 @@ internal static class FlightPreparation
         double[] startHeading = new double[n];
         int start = 0;
         double lastHeading = 0, lastHeadingTime = double.NaN, lastRate = 0, turned = 0;
+        // Wind and deviation columns are taken at the heading expected from what came before, never at the measured one: a column that
+        // holds the measurement's own noise lets the fit explain the heading by itself (a likelihood without its Jacobian), and brake and
+        // disturbance then shrink towards nothing.
+        double expected = 0;
         double compassAhead = double.NaN; // compass minus air heading, followed so that both stay on the same turn of the circle
         for (int i = 0; i < n; i++)
         {
@@ -185,10 +189,10 @@ internal static class FlightPreparation
                 double heading = Unwrap(MeanAngle(air, g, s.TimeSec, time[i], hasGyro ? lastRate : 0));
                 Span<double> row = headingRows.AsSpan(i * stride, stride);
                 row[0] = heading;
-                double speed = Math.Max(MeanAirspeed(s, air, g), LeastAirspeedShare * s.Wind!.AirspeedMPerSec);
+                double speed = s.Wind!.AirspeedMPerSec;
                 int at = kinds.IndexOf(ColumnKind.WindNorth);
-                row[at + 1] = Math.Sin(heading) / speed;
-                row[at + 2] = -Math.Cos(heading) / speed;
+                row[at + 1] = Math.Sin(expected) / speed;
+                row[at + 2] = -Math.Cos(expected) / speed;
                 flags[i] |= FlightColumns.Heading;
                 measurements++;
             }
@@ -201,6 +205,7 @@ internal static class FlightPreparation
                 {
                     double predicted = lastHeading + (hasGyro ? turned : lastRate * (time[i] - lastHeadingTime)) + (double.IsFinite(compassAhead) ? compassAhead : 0);
                     heading = predicted + Math.IEEERemainder(measured - predicted, Math.Tau);
+                    expected = predicted;
                     if (g.Air > 0)
                         compassAhead = heading - headingRows[i * stride];
                 }
@@ -220,8 +225,8 @@ internal static class FlightPreparation
                     if (offset >= 0)
                         row[offset + 1] = -1;
                     int sine = kinds.IndexOf(ColumnKind.CompassSine);
-                    row[sine + 1] = -Math.Sin(heading);
-                    row[sine + 2] = -Math.Cos(heading);
+                    row[sine + 1] = -Math.Sin(expected);
+                    row[sine + 2] = -Math.Cos(expected);
                     flags[i] |= FlightColumns.Compass;
                     measurements++;
                 }
@@ -232,13 +237,14 @@ internal static class FlightPreparation
                 double heading;
                 if (!double.IsFinite(lastHeadingTime))
                 {
-                    heading = measured;
+                    heading = expected = measured;
                     startHeading[start] = heading - (hasGyro ? turned : 0);
                 }
                 else
                 {
                     double predicted = lastHeading + (hasGyro ? turned : lastRate * (time[i] - lastHeadingTime));
                     heading = predicted + Math.IEEERemainder(measured - predicted, Math.Tau);
+                    expected = predicted;
                     if (!hasGyro)
                         lastRate = (heading - lastHeading) / (time[i] - lastHeadingTime);
                 }
@@ -405,17 +411,6 @@ internal static class FlightPreparation
             cosine += Math.Cos(a);
         }
         return Math.Atan2(sine, cosine);
-    }
-
-    private static double MeanAirspeed(TurnSignals s, double[] air, Group g)
-    {
-        double sum = 0;
-        for (int j = g.First; j <= g.Last; j++)
-        {
-            if (double.IsFinite(air[j]))
-                sum += double.Hypot(s.VelocityNorth[j] - s.Wind!.NorthMPerSec, s.VelocityEast[j] - s.Wind.EastMPerSec);
-        }
-        return sum / g.Air;
     }
 
     private static double RmsOf(double[] values, bool[] use)
