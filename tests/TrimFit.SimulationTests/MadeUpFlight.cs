@@ -28,10 +28,13 @@ internal static class MadeUpFlight
         bool hands = c.Hardship == Hardship.HeldLegs, stepping = false;
         double nextHands = random.Between(10, 30), target = psi, brake = 0, stepBrake = 0, stepEnds = 0, nextTarget = random.Between(30, 60);
         double thermal = 0, thermalEnds = 0, nextThermal = random.Between(10, 40);
+        // A person is no servo: what a human operator does beyond answering what he sees is called remnant (McRuer and Jex 1967, "A review of
+        // quasi-linear pilot models", IEEE Trans. Human Factors in Electronics 8:231, doi 10.1109/THFE.1967.234304). The hard case of held
+        // legs has none.
+        double remnantRms = c.Hardship == Hardship.HeldLegs ? 0 : random.Between(0.01, 0.04), remnant = 0;
         var seen = new Queue<(double Psi, double R)>(); // the pilot's reaction time
         int reaction = (int)(random.Between(0.3, 0.6) / Step);
-        double scaleK = double.Parse(Environment.GetEnvironmentVariable("FEED") ?? "1", System.Globalization.CultureInfo.InvariantCulture);
-        double eagerness = scaleK * random.Between(0.15, 0.5), damping = scaleK * random.Between(0.2, 0.8);
+        double eagerness = random.Between(0.15, 0.5), damping = random.Between(0.2, 0.8);
 
         for (int i = 0; i < rows; i++)
         {
@@ -67,7 +70,7 @@ internal static class MadeUpFlight
                 target = psi;
             }
             (double feltPsi, double feltR) = seen.Count >= reaction ? seen.Peek() : (psi, r);
-            double wanted = !hands ? 0 : stepping ? stepBrake : Math.Clamp((-eagerness * (feltPsi - target)) - (damping * feltR), -0.4, 0.4);
+            double wanted = !hands ? 0 : stepping ? stepBrake : remnant + Math.Clamp((-eagerness * (feltPsi - target)) - (damping * feltR), -0.4, 0.4);
             brake += Math.Clamp(wanted - brake, -0.08, 0.08);
             if (Math.Abs(brake) < 1e-12)
                 brake = 0;
@@ -137,6 +140,7 @@ internal static class MadeUpFlight
                 {
                     w = Markov(w, c.DisturbanceRms, c.DisturbanceTau);
                 }
+                remnant = Markov(remnant, remnantRms, 0.7);
                 gust = Markov(gust, c.GustRms, c.GustTau);
                 if (c.Sensors == Sensors.PhoneGyro)
                     wander = Markov(wander, double.DegreesToRadians(0.1), 200);

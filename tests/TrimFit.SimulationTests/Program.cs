@@ -38,7 +38,7 @@ internal static class Program
     {
         int flights = Number("--flights", 2000), threads = Number("--threads", 1), seed = Number("--seed", 1);
         int hard = Number("--hard", Math.Max(1, flights / 4));
-        CoverageStudy.Options = new() { BlockSec = Text("--block").Length == 0 ? 0.3 : double.Parse(Text("--block"), CultureInfo.InvariantCulture), OutlierLimit = Text("--limit").Length == 0 ? 3.5 : double.Parse(Text("--limit"), CultureInfo.InvariantCulture) };
+        CoverageStudy.Options = new() { BlockSec = Text("--block").Length == 0 ? 0.2 : double.Parse(Text("--block"), CultureInfo.InvariantCulture), OutlierLimit = Text("--limit").Length == 0 ? 3.5 : double.Parse(Text("--limit"), CultureInfo.InvariantCulture) };
         string only = Text("--only");
         var rows = new List<(string Name, Sensors Sensors, Hardship Hardship, int Flights)>
         {
@@ -46,7 +46,7 @@ internal static class Program
             ("GPS only, 5 Hz", Sensors.Gps5Hz, Hardship.None, flights),
             ("GPS only, 1 Hz", Sensors.Gps1Hz, Hardship.None, flights),
             ("GPS and sheet, no brakes logged", Sensors.Gps5HzAndSheet, Hardship.None, flights),
-            ("telephone gyro + GPS 1 Hz", Sensors.PhoneGyro, Hardship.None, flights),
+            ("telephone: noisy gyro, GPS 1 Hz", Sensors.PhoneGyro, Hardship.None, flights),
             ("*disturbance on two time scales*", Sensors.GyroAndGps, Hardship.TwoTimeScales, hard),
             ("*thermals*", Sensors.GyroAndGps, Hardship.Thermals, hard),
             ("*8 % brake dead band*", Sensors.GyroAndGps, Hardship.BrakeDeadBand, hard),

@@ -20,6 +20,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     public const string MethodName = "filter_error";
 
     private const double LeastThrustRange = 0.05; // of full thrust, between the 5 % and 95 % quantiles: less shows no growth with power
+    private const double DecidedBy = 8; // of log-likelihood: one order is e^8 times as likely as the other
     private const double CollinearInflation = 100; // variance inflation: the standard error is ten times what separate inputs would give
 
     private readonly FilterErrorOptions _options;
@@ -35,7 +36,8 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         return Fit(signals, null);
     }
 
-    /// <summary>The same likelihood with noise parameters that are known, as a yardstick for what the search costs.</summary>
+    /// <summary>The same likelihood with noise levels, their time constants and the order of the response known, as a yardstick for what
+    /// finding them costs. The wing's own time constants are estimated here too: they belong to the turn, not to the noise.</summary>
     /// <param name="signals">The flight.</param>
     /// <param name="perSample">Time constants and noise levels; white noise of one sample, before averaging in blocks.</param>
     internal TurnFit EstimateWith(TurnSignals signals, NoiseParameters perSample) => Fit(signals, perSample);
@@ -64,13 +66,16 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             GyroNoise = perSample.GyroNoise / Math.Sqrt(flight.GyroSamplesPerRow),
             HeadingNoise = perSample.HeadingNoise / Math.Sqrt(flight.HeadingSamplesPerRow),
         };
-        for (int round = 0; round < 3; round++) // the curvature's prior follows the slope
+        ParameterLayout layout = ParameterLayout.ResponseOnly(noise);
+        var search = new NoiseSearch(filter, layout, flight.Measurements, flight.Coefficients);
+        double[] theta = layout.ToVector(noise);
+        SearchResult result = search.From(theta, _options.MostIterations);
+        for (int round = 0; round < 2; round++) // the curvature's prior follows the slope
         {
-            filter.Run(noise);
             SetCurvaturePrior(flight, filter);
+            result = search.From(result.Theta, _options.MostIterations);
         }
-        filter.Run(noise);
-        return new(noise, null, 4, 0);
+        return new(result.Noise, result, result.Evaluations, 0);
     }
 
     private Chosen Search(FlightColumns flight, AugmentedFilter filter)
@@ -125,8 +130,11 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         ParameterLayout secondLayout = new(ResponseOrder.Second, flight.HasGyro, flight.HasHeading, flight.HasCompass);
         var second = new NoiseSearch(filter, secondLayout, flight.Measurements, flight.Coefficients);
         SearchResult? two = null;
-        foreach (double damping in (ReadOnlySpan<double>)[0.5, 1.0])
+        foreach (double damping in (ReadOnlySpan<double>)[0.6, 1.0])
         {
+            // A well damped second start, where the first did not decide between the orders.
+            if (two is { Convergence.Converged: true } && Math.Abs(one.Objective - two.Objective) > DecidedBy)
+                break;
             NoiseParameters start = one.Noise with
             {
                 Order = ResponseOrder.Second,

@@ -12,15 +12,27 @@ internal sealed class ParameterLayout
     private readonly double[] _centre;
     private readonly double[] _sd;
 
+    private readonly NoiseParameters? _known;
+
+    /// <summary>Only the wing's response is free; the air's and the sensors' noise is known.</summary>
+    public static ParameterLayout ResponseOnly(NoiseParameters known) => new(known.Order, false, false, false, known);
+
     public ParameterLayout(ResponseOrder order, bool hasGyro, bool hasHeading, bool hasCompass)
+        : this(order, hasGyro, hasHeading, hasCompass, null)
+    {
+    }
+
+    private ParameterLayout(ResponseOrder order, bool hasGyro, bool hasHeading, bool hasCompass, NoiseParameters? known)
     {
         Order = order;
+        _known = known;
         var slots = new List<Slot>();
         if (order == ResponseOrder.First)
             slots.Add(Slot.Lag);
         else
             slots.AddRange([Slot.Frequency, Slot.Damping]);
-        slots.AddRange([Slot.DisturbanceRms, Slot.DisturbanceTau]);
+        if (known is null)
+            slots.AddRange([Slot.DisturbanceRms, Slot.DisturbanceTau]);
         if (hasGyro)
             slots.Add(Slot.Gyro);
         if (hasHeading)
@@ -86,6 +98,8 @@ internal sealed class ParameterLayout
                 default: compass = value; break;
             }
         }
+        if (_known is not null)
+            return _known with { LagSec = lag, NaturalFrequency = frequency, Damping = damping };
         return new()
         {
             Order = Order,
