@@ -1,1 +1,3 @@
-return 0;
+using TrimFit.Cli;
+
+return TrimFitProgram.Run(args);

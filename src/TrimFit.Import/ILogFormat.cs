@@ -29,6 +29,9 @@ public static partial class LogFormats
 /// <param name="Length">Length in bytes; null when unknown.</param>
 public sealed record LogSource(string Name, Func<Stream> Open, long? Length = null)
 {
+    /// <summary>The folder or zip this file came out of: its files are one recording with one clock. Null for a file named by itself.</summary>
+    public string? Recording { get; init; }
+
     /// <summary>A file on disk.</summary>
     public static LogSource FromFile(string path) => new(Path.GetFileName(path), () => File.OpenRead(path), new FileInfo(path).Length);
 
@@ -41,6 +44,9 @@ public sealed record ImportOptions
 {
     /// <summary>The person's word on columns (<c>--column</c> first, then the rig file's); overrules every inference.</summary>
     public IReadOnlyList<ColumnRule> Columns { get; init; } = [];
+
+    /// <summary>With several files, a column of <see cref="Columns"/> that this file lacks stands in another.</summary>
+    internal bool ColumnsMayBeElsewhere { get; init; }
 
     /// <summary>Any row left out is an error.</summary>
     public bool Strict { get; init; }

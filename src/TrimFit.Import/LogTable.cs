@@ -20,6 +20,9 @@ public sealed class LogTable
     /// <summary>Time of each row, s, finite and strictly increasing. Starts at 0 for elapsed clocks whatever the file's zero was.</summary>
     public required double[] TimeSec { get; init; }
 
+    /// <summary>What the file's own clock showed at <c>TimeSec = 0</c>, s, for <see cref="ClockKind.Elapsed"/>: files of one recording share that clock.</summary>
+    public double ElapsedStartSec { get; init; }
+
     /// <summary>Columns by role in SI units, NaN where a cell was empty.</summary>
     public required IReadOnlyDictionary<ChannelRole, double[]> Columns { get; init; }
 

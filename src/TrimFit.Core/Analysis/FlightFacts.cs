@@ -13,4 +13,8 @@ public sealed record GyroReport
     public int? Sign { get; init; }
     /// <summary>Delay of the gyro behind the GPS, s; null when it cannot be told.</summary>
     public double? DelaySec { get; init; }
+    /// <summary>Standard error of <see cref="DelaySec"/>, s.</summary>
+    public double? DelayStdErrorSec { get; init; }
+    /// <summary>Standard error of <see cref="Scale"/>.</summary>
+    public double? ScaleStdError { get; init; }
 }

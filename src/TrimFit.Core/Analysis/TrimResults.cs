@@ -97,14 +97,16 @@ public sealed record AdjustmentReport
 {
     /// <summary>Which part.</summary>
     public required AdjustmentKind Kind { get; init; }
-    /// <summary>Mechanical travel, m, right positive: median.</summary>
-    public required double TravelM { get; init; }
+    /// <summary>What the travel is measured in.</summary>
+    public TravelUnit Unit { get; init; }
+    /// <summary>Mechanical travel in <see cref="Unit"/>, right positive: median.</summary>
+    public required double Travel { get; init; }
     /// <summary>95 % interval of the travel.</summary>
     public required ConfidenceInterval Interval95 { get; init; }
-    /// <summary>Travel rounded to the part's step, or to 1 mm, m.</summary>
-    public required double RoundedM { get; init; }
-    /// <summary>First step, m: at most half the median travel and 15 mm until sign and size are confirmed.</summary>
-    public required double FirstStepM { get; init; }
+    /// <summary>Travel rounded to the part's step, or to 1 mm, 0.1 deg or 0.1 kg.</summary>
+    public required double Rounded { get; init; }
+    /// <summary>First step: at most half the median travel and 15 mm until sign and size are confirmed.</summary>
+    public required double FirstStep { get; init; }
     /// <summary>Change of CG offset per travel at rest (the table of the model).</summary>
     public required double Efficiency { get; init; }
     /// <summary>Thrust-line offset t after the whole travel, m.</summary>
@@ -127,7 +129,7 @@ public sealed record AdjustmentReport
     public required ImmutableArray<PullAtSetting> TurnLeftAt { get; init; }
     /// <summary>Inside the rig's limits; null when the rig gives none.</summary>
     public bool? WithinLimits { get; init; }
-    /// <summary>Probability that the rounded travel ends on the wrong side.</summary>
+    /// <summary>Probability that the first step already ends past the null.</summary>
     public required double ProbabilityWrongSide { get; init; }
     /// <summary>Things to say about this adjustment.</summary>
     public ImmutableArray<Finding> Notes { get; init; } = [];
@@ -261,6 +263,60 @@ public enum FindingCode
     FewThrustLevels,
     /// <summary>The wing turns by itself or the brakes rest unevenly: no more can be said from one flight.</summary>
     ConstantPullSource,
+    /// <summary>Speed of rotation at full power is not given; the largest in the log stands in: rev/s.</summary>
+    FullPowerSpeedAssumed,
+    /// <summary>No throttle table: thrust is taken as proportional to throttle.</summary>
+    ThrottleTakenAsThrust,
+    /// <summary>The gyro's unit was wrong by this factor against the GPS turn and was corrected: factor.</summary>
+    GyroUnitCorrected,
+    /// <summary>Gyro scale against the GPS turn is off by no known unit: slope, 1 when it was calibrated by the GPS and 0 when the gyro was set aside.</summary>
+    GyroScaleOff,
+    /// <summary>No GPS and no compass: which way the yaw rate turns is taken on trust.</summary>
+    YawSignUnconfirmed,
+    /// <summary>The first step would be smaller than the step this part moves in: that step, m.</summary>
+    FirstStepTooSmall,
     /// <summary>A step ending on the wrong side is likelier than 10 %: probability.</summary>
     WrongSideLikely,
+    /// <summary>The gyro reads this share of the GPS turn and was divided by it: share, its standard error, tilt of the mounting that would explain it (rad, 0 when none can).</summary>
+    GyroScaleCorrected,
+    /// <summary>The gyro is behind the GPS and was moved: delay and its standard error, s.</summary>
+    GyroDelayed,
+    /// <summary>The GPS is behind the gyro and was moved: delay and its standard error, s.</summary>
+    GpsDelayed,
+    /// <summary>Three gyro axes were turned into a heading rate by the accelerometer's gravity: mean tilt of the sensor's z axis from the vertical, rad.</summary>
+    GyroLevelled,
+    /// <summary>Three gyro axes were turned into a heading rate by the GPS turn: standard error of the axis, rad.</summary>
+    GyroAxisFromGps,
+    /// <summary>Three gyro axes without gravity, GPS or compass: one axis is taken on trust: 0 x, 1 y, 2 z; +1 when it points down, -1 up.</summary>
+    GyroAxisAssumed,
+    /// <summary>The sensor moved in flight: time s, angle rad, 1 when it was levelled anew and 0 when what came before or after was left out.</summary>
+    GyroSlipped,
+    /// <summary>The sensor was loose and its gyro is set aside: number of moves, typical angle between its attitude and the mean around it, rad.</summary>
+    GyroLoose,
+    /// <summary>Bias of the gyro from standing still: bias and standard error (rad/s), seconds.</summary>
+    GyroBiasFromStandstill,
+    /// <summary>Clear turns go against the brakes, so left and right are swapped or the wing reverses: seconds of such turns, share of them.</summary>
+    BrakesAgainstTurn,
+    /// <summary>Fixes that no flight could have flown were left out: fixes, of how many.</summary>
+    GpsOutliers,
+    /// <summary>The GPS repeated its last fix in flight; the repeats were left out: spans, seconds together.</summary>
+    GpsFrozen,
+    /// <summary>Throttle and speed of rotation do not rise together: rank correlation.</summary>
+    ThrottleAgainstRpm,
+    /// <summary>Time stamps are uneven: median step s, share of steps off by more than half of it.</summary>
+    TimeJitter,
+    /// <summary>Thrust follows from power to the two-thirds: power taken as full (W), 1 when the log's largest and 0 when the rig's.</summary>
+    ThrustFromPower,
+    /// <summary>Current without voltage: taken as power at a constant voltage: current taken as full, A.</summary>
+    CurrentTakenAsPower,
+    /// <summary>Thrust is taken as proportional to motor current: current taken as full, A.</summary>
+    ThrustFromMotorCurrent,
+    /// <summary>The speed at which the clutch engages is not given; it was taken from the log's idle: rev/s as logged.</summary>
+    ClutchEngageAssumed,
+    /// <summary>Thrust was taken from climb, W (climb + glide sink)/airspeed: standard error of a reading, N.</summary>
+    ThrustFromClimb,
+    /// <summary>Thrust in flight by climb over thrust by the rig: ratio, its standard error, ratio by momentum theory (0 when unknown), 1 when they agree.</summary>
+    ThrustScaleByClimb,
+    /// <summary>No full thrust in the rig; this flight's climb gives one in flight: N, its standard error.</summary>
+    FullThrustByClimb,
 }

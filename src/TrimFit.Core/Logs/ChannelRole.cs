@@ -77,4 +77,6 @@ public enum ChannelRole
     HandsOff,
     /// <summary>Number of a mark set in flight.</summary>
     Marker,
+    /// <summary>Current through the windings of an electric motor, A; it follows the shaft's torque.</summary>
+    MotorCurrent,
 }

@@ -36,7 +36,7 @@ public static class ChannelRoles
         ChannelRole.Rpm => "rev/s",
         ChannelRole.Power => "W",
         ChannelRole.Voltage => "V",
-        ChannelRole.Current => "A",
+        ChannelRole.Current or ChannelRole.MotorCurrent => "A",
         ChannelRole.YawRate or ChannelRole.GyroX or ChannelRole.GyroY or ChannelRole.GyroZ or ChannelRole.RollRate => "rad/s",
         ChannelRole.AccelerationX or ChannelRole.AccelerationY or ChannelRole.AccelerationZ => "m/s2",
         ChannelRole.Heading or ChannelRole.Roll or ChannelRole.GroundCourse or ChannelRole.Latitude or ChannelRole.Longitude => "rad",

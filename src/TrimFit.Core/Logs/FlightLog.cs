@@ -18,6 +18,7 @@ public sealed class FlightLog
         BrakeUnit = options.BrakeUnit;
         TrimmerUnit = options.TrimmerUnit;
         GyroDelaySec = options.GyroDelaySec;
+        StartTimeOfDay = options.StartUtc?.UtcDateTime.TimeOfDay ?? options.StartTimeOfDay;
     }
 
     /// <summary>Seconds since <see cref="StartUtc"/> or since the first sample; finite and strictly increasing.</summary>
@@ -28,6 +29,9 @@ public sealed class FlightLog
 
     /// <summary>Absolute time of <c>TimeSec = 0</c>; null when no logger knew the date.</summary>
     public DateTimeOffset? StartUtc { get; }
+
+    /// <summary>Time of day of <c>TimeSec = 0</c> on the log's clock, for logs that know no date too; null when only elapsed time is known.</summary>
+    public TimeSpan? StartTimeOfDay { get; }
 
     /// <summary>Unit of the brake channels.</summary>
     public ControlUnit BrakeUnit { get; }
@@ -63,5 +67,28 @@ public sealed class FlightLog
                 copied[role] = [.. column];
         }
         return new(timeSec.ToArray(), copied, options ?? new());
+    }
+
+    /// <summary>The same flight with one column put in or replaced.</summary>
+    /// <exception cref="ArgumentException">The column has another length or an infinite value.</exception>
+    public FlightLog WithChannel(ChannelRole role, ReadOnlySpan<double> column)
+    {
+        Guard.SameLength(_timeSec, column);
+        double[] copy = column.ToArray();
+        if (copy.AsSpan().ContainsAnyInfinite())
+            throw new ArgumentException("holds an infinite value", nameof(column));
+        var channels = new Dictionary<ChannelRole, double[]>(_channels); // columns never change, so both logs may hold them
+        if (copy.AsSpan().ContainsAnyFinite())
+            channels[role] = copy;
+        else
+            channels.Remove(role);
+        return new(_timeSec, channels, new()
+        {
+            StartUtc = StartUtc,
+            StartTimeOfDay = StartTimeOfDay,
+            BrakeUnit = BrakeUnit,
+            TrimmerUnit = TrimmerUnit,
+            GyroDelaySec = GyroDelaySec,
+        });
     }
 }

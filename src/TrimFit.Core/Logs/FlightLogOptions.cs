@@ -6,6 +6,9 @@ public sealed record FlightLogOptions
     /// <summary>Absolute time of the log's zero; null when unknown.</summary>
     public DateTimeOffset? StartUtc { get; init; }
 
+    /// <summary>Time of day of the log's zero when no date is known; follows from <see cref="StartUtc"/> when that is given.</summary>
+    public TimeSpan? StartTimeOfDay { get; init; }
+
     /// <summary>Unit of the brake channels.</summary>
     public ControlUnit BrakeUnit { get; init; } = ControlUnit.Fraction;
 

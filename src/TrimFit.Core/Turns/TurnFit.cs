@@ -53,7 +53,7 @@ public sealed record TurnFit
     public ImmutableArray<SpanLeftOut> SpansLeftOut { get; init; } = [];
 
     /// <summary>Things the fit wants said.</summary>
-    public ImmutableArray<Logs.Notice> Notices { get; init; } = [];
+    public ImmutableArray<Analysis.Finding> Notices { get; init; } = [];
 
     /// <summary>The coefficient of a name, or null when the flight could not give it.</summary>
     public Estimate? this[string name]

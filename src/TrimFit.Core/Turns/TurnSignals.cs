@@ -5,7 +5,7 @@ namespace TrimFit.Core.Turns;
 /// <summary>One flight made ready for an estimator: inputs held over one clock, measurements where they were taken.</summary>
 /// <remarks>All columns have one value per time stamp. Inputs (thrust, brakes, trimmers) are finite everywhere and hold between samples;
 /// measurements (gyro, heading, velocity) are NaN where nothing was measured. Positive is to the pilot's right.</remarks>
-public sealed class TurnSignals
+public sealed partial class TurnSignals
 {
     /// <summary>Seconds, strictly increasing.</summary>
     public required double[] TimeSec { get; init; }
@@ -63,6 +63,21 @@ public sealed class TurnSignals
 
     /// <summary>Whether hands-off spans were declared by a sheet or channel (not guessed from brakes).</summary>
     public bool HandsOffDeclared { get; init; }
+
+    /// <summary>Altitude, m, NaN where missing; empty when not logged.</summary>
+    public double[] AltitudeM { get; init; } = [];
+
+    /// <summary>Unit of <see cref="BrakeDifference"/>.</summary>
+    public Logs.ControlUnit BrakeUnit { get; init; }
+
+    /// <summary>What was found about the gyro; null without one.</summary>
+    public Analysis.GyroReport? Gyro { get; init; }
+
+    /// <summary>Whether GPS or compass confirm which way the yaw rate turns.</summary>
+    public bool YawSignConfirmed { get; init; }
+
+    /// <summary>Things found while preparing that people should know.</summary>
+    public ImmutableArray<Analysis.Finding> Findings { get; init; } = [];
 
     /// <summary>Number of samples.</summary>
     public int Count => TimeSec.Length;

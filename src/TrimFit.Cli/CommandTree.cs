@@ -1,0 +1,67 @@
+using System.CommandLine;
+
+namespace TrimFit.Cli;
+
+/// <summary>Commands and their options; one table of what the program understands.</summary>
+internal static class CommandTree
+{
+    public static RootCommand Create(TextWriter output, TextWriter error)
+    {
+        var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
+        {
+            Inspect(output), Fit(output, error), Rig(output), Synth(error),
+        };
+        return root;
+    }
+
+    private static Command Inspect(TextWriter output)
+    {
+        Argument<string[]> logs = Logs();
+        var common = new CommonOptions();
+        var command = new Command("inspect", "What was read: columns, units, rates, gaps, clocks, sensors, wind.") { logs };
+        common.AddForPeople(command);
+        common.AddForLogs(command);
+        command.SetAction(parsed => InspectCommand.Run(parsed.GetValue(logs)!, common.Choices(parsed), output));
+        return command;
+    }
+
+    private static Command Fit(TextWriter output, TextWriter error)
+    {
+        Argument<string[]> logs = Logs();
+        var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
+        var sheet = new Option<string?>("--sheet") { Description = "What the pilot did: a flight sheet (TOML).", HelpName = "SHEET" };
+        var common = new CommonOptions();
+        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet };
+        common.AddForPeople(command);
+        common.AddForLogs(command);
+        common.AddForFit(command);
+        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), common.Choices(parsed), output, error));
+        return command;
+    }
+
+    private static Command Rig(TextWriter output)
+    {
+        var rig = new Argument<string>("RIG") { Description = "The machine: a rig file (TOML)." };
+        var common = new CommonOptions();
+        var command = new Command("rig", "Statics and adjustment table of a machine without a flight.") { rig };
+        common.AddForPeople(command);
+        common.AddSeed(command);
+        command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, common.Choices(parsed), output));
+        return command;
+    }
+
+    private static Command Synth(TextWriter error)
+    {
+        var scenario = new Argument<string>("SCENARIO") { Description = "The flight to make up: a scenario file (TOML)." };
+        var folder = new Option<string>("--out") { Description = "Folder for log, rig file, flight sheet and truth.", Required = true, HelpName = "DIR" };
+        var common = new CommonOptions();
+        var command = new Command("synth", "A made-up flight with known truth.") { scenario, folder };
+        common.AddSeed(command);
+        common.AddQuiet(command);
+        command.SetAction(parsed => SynthCommand.Run(parsed.GetValue(scenario)!, parsed.GetValue(folder)!, common.Choices(parsed), error));
+        return command;
+    }
+
+    private static Argument<string[]> Logs() =>
+        new("LOG") { Description = "Flight logs: one file, or one for each logger of the same flight.", Arity = ArgumentArity.OneOrMore };
+}

@@ -1,0 +1,39 @@
+using TrimFit.Core.Analysis;
+using TrimFit.Core.Logs;
+using TrimFit.Core.Rigging;
+using TrimFit.Reporting;
+
+namespace TrimFit.Cli;
+
+internal static class FitCommand
+{
+    public static int Run(IReadOnlyList<string> logs, string rigPath, string? sheetPath, CommonChoices choices, TextWriter output, TextWriter error)
+    {
+        (Rig rig, SourceFile rigFile) = InputFiles.Rig(rigPath);
+        (FlightSheet Sheet, SourceFile File)? sheet = sheetPath is null ? null : InputFiles.Sheet(sheetPath);
+        FlightImport import = InputFiles.Flight(logs, choices, rig.Log);
+        if (sheet is (FlightSheet Sheet, SourceFile) given)
+        {
+            SheetedFlight sheeted = SheetLegs.Apply(import.Flight, given.Sheet);
+            import = new(sheeted.Flight, import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] });
+        }
+        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions);
+        var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
+        OutputFiles.Deliver(choices, output,
+            () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),
+            () => ReportJson.Fit(report), () => ReportPage.Fit(report, choices.Style), () => ReportMarkdown.Fit(report, choices.Style));
+        if (Answered(analysis))
+            return ExitCode.Done;
+        if (!choices.Quiet)
+            error.WriteLine("trimfit: the data cannot answer the whole question (exit 4); what could be found is in the result.");
+        return ExitCode.NoAnswer;
+    }
+
+    /// <summary>Balanced needs no travel; every other verdict is an answer only with one.</summary>
+    private static bool Answered(TrimAnalysis analysis) => analysis.Verdict.Code switch
+    {
+        VerdictCode.Insufficient => false,
+        VerdictCode.Balanced => true,
+        _ => analysis.Verdict.TravelGiven,
+    };
+}

@@ -1,0 +1,65 @@
+using System.Collections.Immutable;
+using System.Security.Cryptography;
+using TrimFit.Core.Logs;
+using TrimFit.Core.Rigging;
+using TrimFit.Import;
+using TrimFit.Import.Rigs;
+using TrimFit.Import.Sheets;
+using TrimFit.Reporting;
+
+namespace TrimFit.Cli;
+
+/// <summary>Everything the program reads; a file that cannot be read becomes a <see cref="LogFormatException"/> that names it.</summary>
+internal static class InputFiles
+{
+    public static FlightImport Flight(IReadOnlyList<string> paths, CommonChoices choices, LogSettings? machine = null)
+    {
+        foreach (string path in paths)
+            MustExist(path);
+        // The command line speaks before the rig file: a role named there is not looked up again.
+        ImmutableArray<ColumnRule> fromRig = machine is null ? [] : [.. machine.Columns.Where(r => !choices.Columns.Any(c => c.Role == r.Role))];
+        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict };
+        return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => FlightReader.Read([.. paths.Select(LogSource.FromFile)], options));
+    }
+
+    public static (Rig Rig, SourceFile File) Rig(string path)
+    {
+        MustExist(path);
+        return (RigFileReader.ReadFile(path), Source(path));
+    }
+
+    public static (FlightSheet Sheet, SourceFile File) Sheet(string path)
+    {
+        MustExist(path);
+        return (FlightSheetReader.ReadFile(path), Source(path));
+    }
+
+    public static string Text(string path)
+    {
+        MustExist(path);
+        return Readable(Path.GetFileName(path), () => File.ReadAllText(path));
+    }
+
+    private static SourceFile Source(string path) =>
+        new(Path.GetFileName(path), Convert.ToHexStringLower(Readable(Path.GetFileName(path), () => SHA256.HashData(File.ReadAllBytes(path)))));
+
+    private static void MustExist(string path)
+    {
+        if (Directory.Exists(path))
+            throw LogFormatException.At(path, null, null, "a folder", "a file", "Name the file in it.");
+        if (!File.Exists(path))
+            throw LogFormatException.At(path, null, null, "no such file", "a file", "Check the name and the folder.");
+    }
+
+    private static T Readable<T>(string name, Func<T> read)
+    {
+        try
+        {
+            return read();
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            throw LogFormatException.At(name, null, null, "a file that cannot be opened", "a readable file", "Check its rights and whether another program holds it.");
+        }
+    }
+}

@@ -1,0 +1,98 @@
+using TrimFit.Core.Statistics;
+
+namespace TrimFit.Core.Rigging;
+
+/// <summary>Turns a <see cref="Rig"/> into plain numbers: the nominal ones, or draws from what was not measured.</summary>
+public sealed class RigSpread
+{
+    /// <summary>b/H when nothing is given: 0.2, with a stiffness good to a factor 1.7 at 95 % (model page, "Twist stiffness").</summary>
+    private const double UsualLineSpreadRatio = 0.2, UsualStiffnessFactor95 = 1.7;
+
+    private readonly Rig _rig;
+    private readonly Propulsion _propulsion;
+
+    /// <summary>Prepares a rig.</summary>
+    public RigSpread(Rig rig)
+    {
+        ArgumentNullException.ThrowIfNull(rig);
+        _rig = rig;
+        _propulsion = Propulsion.Of(rig);
+        Nominal = Build(static reading => reading.Value, _propulsion.FullThrustN, _propulsion.TorqueArmM, stiffnessFactor: 1, hangCheckError: 0);
+    }
+
+    /// <summary>The rig's thrust and torque.</summary>
+    public Propulsion Propulsion => _propulsion;
+
+    /// <summary>Every reading at its value.</summary>
+    public RigValues Nominal { get; }
+
+    /// <summary>One draw: every reading from its normal spread (kept to what is physical), thrust, torque and stiffness log-normal.</summary>
+    public RigValues Draw(SeededRandom random)
+    {
+        ArgumentNullException.ThrowIfNull(random);
+        double thrust = _propulsion.FullThrustN * Math.Exp(_propulsion.FullThrustRelativeSd * random.NextNormal());
+        // Q = P/(2 pi n) does not depend on the thrust scale: drawn thrust times drawn arm must give the drawn torque.
+        double torque = _propulsion.FullTorqueNm * Math.Exp(_propulsion.TorqueArmRelativeSd * random.NextNormal());
+        double stiffnessFactor = Math.Exp(StiffnessLogSd * random.NextNormal());
+        double hangCheckError = random.NextNormal();
+        return Build(reading => reading.Value + (reading.StandardDeviation * random.NextNormal()), thrust, torque / thrust, stiffnessFactor, hangCheckError);
+    }
+
+    private double StiffnessLogSd => _rig.Wing.YawStiffnessNmPerRad is Reading k
+        ? Math.Max(k.StandardDeviation / k.Value, 0.05)
+        : _rig.Wing.LineSpreadM is null ? Math.Log(UsualStiffnessFactor95) / 1.96 : 0.15;
+
+    private RigValues Build(Func<Reading, double> take, double thrust, double torqueArm, double stiffnessFactor, double hangCheckError)
+    {
+        RigMasses mass = _rig.Mass;
+        double unit = mass.PowerUnitKg.Value, fuel = mass.FuelKg.Value, wheels = mass.WheelsKg.Value;
+        double powerUnitKg = unit + fuel + wheels;
+        double lineLength = Math.Max(1, take(_rig.Wing.LineLengthM));
+        var values = new RigValues
+        {
+            PilotKg = mass.PilotKg.Value + mass.PassengerKg.Value,
+            PowerUnitKg = powerUnitKg,
+            WingKg = Math.Max(0.5, take(_rig.Wing.MassKg)),
+            PostureM = take(mass.PostureM),
+            PowerUnitLateralM = ((unit * take(mass.PowerUnitLateralM)) + (fuel * take(mass.FuelLateralM))) / powerUnitKg,
+            FrontShare = Math.Clamp(take(_rig.HangPoints.FrontShare), 0, 1),
+            FrontOffsetM = take(_rig.HangPoints.FrontOffsetM),
+            RearOffsetM = take(_rig.HangPoints.RearOffsetM),
+            LeftM = take(_rig.Carabiners.LeftM),
+            RightM = take(_rig.Carabiners.RightM),
+            CgDepthM = Math.Max(0.15, take(mass.CgDepthM)),
+            ThrustDepthM = Math.Clamp(take(_rig.Propeller.ThrustLineDepthM), -0.2, 0.6),
+            HangBackRad = Math.Clamp(take(_rig.Propeller.HangBackRad), double.DegreesToRadians(-5), double.DegreesToRadians(20)),
+            ThrustLineM = take(_rig.Propeller.ThrustLineM),
+            CantRad = take(_rig.Propeller.CantRad),
+            LineLengthM = lineLength,
+            LineSpreadRatio = _rig.Wing.LineSpreadM is Reading b ? b.Value / lineLength : UsualLineSpreadRatio,
+            StiffnessFactor = stiffnessFactor,
+            StiffnessNmPerRad = _rig.Wing.YawStiffnessNmPerRad?.Value ?? double.NaN,
+            RotationSign = _rig.Propeller.RotationSign,
+            FullThrustN = thrust,
+            TorqueArmM = torqueArm,
+        };
+        return _rig.HangCheck is RigHangCheck check ? WithHangCheck(values, check, hangCheckError) : values;
+    }
+
+    /// <summary>A hang check that is better than the tape replaces the geometry's CG offset: the pilot's seat takes up the difference.</summary>
+    private static RigValues WithHangCheck(RigValues values, RigHangCheck check, double standardNormal)
+    {
+        (double offset, double sd) = HangCheckOffset(values, check);
+        double wanted = offset + (sd * standardNormal);
+        double postureShift = (wanted - values.CgOffsetM) * values.SuspendedKg / values.PilotKg;
+        return values with { PostureM = values.PostureM + postureShift };
+    }
+
+    /// <summary>e = s (F_R - F_L)/(2 W) from two hanging scales, and its standard deviation, m.</summary>
+    internal static (double Offset, double StandardDeviation) HangCheckOffset(in RigValues values, RigHangCheck check)
+    {
+        double spacing = check.CarabinerSpacingM?.Value ?? values.CarabinerSpacingM;
+        double sum = check.LeftKg.Value + check.RightKg.Value;
+        double offset = spacing * (check.RightKg.Value - check.LeftKg.Value) / (2 * sum);
+        double scaleSd = Math.Sqrt((check.LeftKg.StandardDeviation * check.LeftKg.StandardDeviation)
+            + (check.RightKg.StandardDeviation * check.RightKg.StandardDeviation));
+        return (offset, spacing * scaleSd / (2 * sum));
+    }
+}

@@ -1,0 +1,102 @@
+namespace TrimFit.Core.Rigging;
+
+/// <summary>Statics of the machine on its risers at one thrust. All moments N·m, loads N, angles rad; right positive.</summary>
+public readonly record struct StaticState
+{
+    /// <summary>Thrust, N.</summary>
+    public double ThrustN { get; init; }
+    /// <summary>Torque magnitude Q, N·m.</summary>
+    public double TorqueNm { get; init; }
+    /// <summary>th: hang-back of the thrust axis from square to the risers.</summary>
+    public double HangBackRad { get; init; }
+    /// <summary>R: sum of the riser loads.</summary>
+    public double RiserLoadN { get; init; }
+    /// <summary>N: moment about the riser axis, nose right positive.</summary>
+    public double YawMomentNm { get; init; }
+    /// <summary>N/k_chi, the sine of the riser twist; beyond ±1 there is no equilibrium.</summary>
+    public double TwistSine { get; init; }
+    /// <summary>M: roll moment about the CG of the whole, right positive: what turns the wing.</summary>
+    public double RollMomentNm { get; init; }
+    /// <summary>M_r: roll moment at the carabiners.</summary>
+    public double CarabinerRollMomentNm { get; init; }
+    /// <summary>Load of the left risers.</summary>
+    public double RiserLoadLeftN { get; init; }
+    /// <summary>Load of the right risers.</summary>
+    public double RiserLoadRightN { get; init; }
+
+    /// <summary>Riser twist chi, or null where there is no equilibrium.</summary>
+    public double? TwistRad => Math.Abs(TwistSine) <= 1 ? Math.Asin(TwistSine) : null;
+}
+
+/// <summary>Solves the statics of model page section 1; derived in DEVELOPERS.md, "Rig statics".</summary>
+public static class RigStatics
+{
+    /// <summary>Most steps of the fixed-point solve of hang-back and riser load. A step shrinks by about (T/W)² v/h: 0.1 on real machines,
+    /// 0.4 with a strong engine at carabiner height, where 40 steps leave 1e-15.</summary>
+    private const int HangBackSteps = 60;
+    private const double HangBackTolerance = 1e-14; // rad; below rounding of the angle
+
+    /// <summary>Statics at one thrust.</summary>
+    /// <param name="rig">The rig's numbers.</param>
+    /// <param name="thrustN">Thrust, N, not negative.</param>
+    /// <returns>The state; the twist's sine is clamped to ±1 inside the roll moments when there is no equilibrium.</returns>
+    public static StaticState Solve(in RigValues rig, double thrustN)
+    {
+        double weight = rig.WeightN;
+        double torque = rig.TorqueArmM * thrustN;
+        double hangBack = rig.HangBackRad, riserLoad = weight;
+        for (int i = 0; i < HangBackSteps; i++)
+        {
+            double sinLean = Math.Clamp(thrustN * Math.Cos(hangBack) / weight, -1, 1); // the risers lean until weight and thrust leave nothing square to them
+            riserLoad = (weight * Math.Sqrt(1 - (sinLean * sinLean))) - (thrustN * Math.Sin(hangBack));
+            riserLoad = Math.Max(riserLoad, 0.05 * weight); // thrust beyond the weight has no level equilibrium; stay finite
+            double next = rig.HangBackRad - (thrustN * rig.ThrustAboveCgM / (riserLoad * rig.CgDepthM));
+            bool settled = Math.Abs(next - hangBack) < HangBackTolerance;
+            hangBack = next;
+            if (settled)
+                break;
+        }
+        double cos = Math.Cos(hangBack), sin = Math.Sin(hangBack);
+        double cgOffset = rig.CgOffsetM, signedTorque = rig.RotationSign * torque;
+        // y_T is where the thrust line passes the carabiners' station, so a canted axis needs no term of its own about the riser axis.
+        double yawMoment = (-thrustN * cos * (rig.ThrustLineOffsetM - cgOffset)) + (signedTorque * sin);
+        double twistSine = yawMoment / rig.TwistStiffness;
+        double sinTwist = Math.Clamp(twistSine, -1, 1);
+        double sideways = sinTwist + Math.Sin(rig.CantRad); // the thrust points sideways by twist and cant alike
+        double roll = (weight * cgOffset) - (signedTorque * cos) - ((rig.ThrustDepthM - rig.WholeCgDepthM) * thrustN * sideways);
+        double rollAtCarabiners = (weight * cgOffset) - (signedTorque * cos) + (rig.ThrustAboveCgM * thrustN * sideways);
+        return new StaticState
+        {
+            ThrustN = thrustN,
+            TorqueNm = torque,
+            HangBackRad = hangBack,
+            RiserLoadN = riserLoad,
+            YawMomentNm = yawMoment,
+            TwistSine = twistSine,
+            RollMomentNm = roll,
+            CarabinerRollMomentNm = rollAtCarabiners,
+            RiserLoadLeftN = (riserLoad / 2) - (rollAtCarabiners / rig.CarabinerSpacingM),
+            RiserLoadRightN = (riserLoad / 2) + (rollAtCarabiners / rig.CarabinerSpacingM),
+        };
+    }
+
+    /// <summary>(M + rho_y N)/W, m: the CG offset that would turn the wing as much as roll and yaw moment do together.</summary>
+    /// <param name="rig">The rig's numbers.</param>
+    /// <param name="thrustN">Thrust, N.</param>
+    /// <param name="yawRatio">rho_y, turn per yaw moment over turn per roll moment.</param>
+    public static double TurningOffset(in RigValues rig, double thrustN, double yawRatio)
+    {
+        StaticState state = Solve(rig, thrustN);
+        return (state.RollMomentNm + (yawRatio * state.YawMomentNm)) / rig.WeightN;
+    }
+
+    /// <summary>The CG offset that balances a torque at hang-back <paramref name="hangBackRad"/>: e = Q cos(th)/W.</summary>
+    /// <remarks>Torque's roll and weight's roll about the carabiners' mid-point cancel. Static; yaw is left out (DEVELOPERS.md, "Torque is a CG offset").</remarks>
+    /// <param name="signedTorqueNm">rot Q: positive for a propeller that turns clockwise seen from behind, N·m.</param>
+    /// <param name="suspendedKg">Suspended mass, above 0 kg.</param>
+    /// <param name="hangBackRad">Hang-back of the thrust axis, rad.</param>
+    /// <returns>CG offset, m, right positive.</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The mass is not above 0 kg, or an argument is not finite.</exception>
+    public static double TorqueBalancingOffset(double signedTorqueNm, double suspendedKg, double hangBackRad) =>
+        Guard.Finite(signedTorqueNm) * Math.Cos(Guard.Finite(hangBackRad)) / (Guard.Positive(suspendedKg) * Units.PhysicalConstants.StandardGravity);
+}

@@ -1,3 +1,0 @@
-namespace TrimFit.Reporting;
-
-internal static class AssemblyMarker;

@@ -1,3 +1,0 @@
-namespace TrimFit.Simulation;
-
-internal static class AssemblyMarker;
