@@ -1,5 +1,4 @@
 using System.Globalization;
-using MathNet.Numerics.Distributions;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
 using TrimFit.Core.Turns.FilterError;
@@ -67,7 +66,7 @@ internal static class CoverageStudy
         var estimator = new FilterErrorEstimator(Options);
         TurnFit fit = estimator.Estimate(signals);
         TurnFit? known = withKnown ? estimator.EstimateWith(signals, TrueNoise(scenario)) : null;
-        double t = StudentT.InvCDF(0, 1, fit.DegreesOfFreedom, 0.975);
+        double t = StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom);
         return new FlightResult(
             Of(scenario.PullAt(scenario.LevelShare), fit.PullAt(scenario.LevelThrust), known?.PullAt(scenario.LevelThrust), 1),
             Of(scenario.SlopePerFull, fit[TurnCoefficient.Thrust], known?[TurnCoefficient.Thrust], scenario.FullThrust),

@@ -34,9 +34,6 @@ public sealed partial class TurnSignals
     /// <summary>Measured yaw rate, rad/s, already right positive; NaN where missing; empty without a gyro.</summary>
     public double[] GyroRadPerSec { get; init; } = [];
 
-    /// <summary>Bias of the gyro seen while standing still before or after the flight, rad/s; null when it never stood still.</summary>
-    public Statistics.Estimate? StandingStillGyroBias { get; init; }
-
     /// <summary>Square of speed of rotation over full, for the vibration offset of the gyro; all 0 when unknown.</summary>
     public required double[] RotationRatioSquared { get; init; }
 

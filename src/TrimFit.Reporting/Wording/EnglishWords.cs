@@ -334,6 +334,8 @@ internal sealed record EnglishWords : Words
                 + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is to be expected in flight" : "")
                 + (Sign(3) != 0 ? ": they agree." : ": they do not agree. Check static_thrust_n, masses and the wing's glide sink."),
             FindingCode.FullThrustByClimb => $"Full thrust is not in the rig file; the climb gives {Value(0, numbers.Force)} ± {Value(1, e => numbers.Force(1.96 * e))} in flight. Give static_thrust_n.",
+            FindingCode.TurnSearchNotSettled => $"The search for the wing's and the air's time constants did not settle in {Value(0, n => numbers.Plain(n, 0))} steps; take the intervals as too narrow.",
+            FindingCode.TurnOutliers => $"{Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))} measurements of the turn are out of line with the rest and count less.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
             FindingCode.GyroScaleCorrected => $"The gyro shows {Value(0, numbers.Percent)} (± {Value(1, e => numbers.PercentNumber(1.96 * e))}) of the turn of the GPS track"
                 + (Sign(2) > 0 ? $", as one mounted {Value(2, numbers.Angle)} off the vertical would" : "") + "; its readings were divided by that.",

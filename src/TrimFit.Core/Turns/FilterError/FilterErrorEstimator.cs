@@ -1,5 +1,5 @@
 using System.Collections.Immutable;
-using TrimFit.Core.Logs;
+using TrimFit.Core.Analysis;
 using TrimFit.Core.Statistics;
 using static System.FormattableString;
 
@@ -20,6 +20,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     public const string MethodName = "filter_error";
 
     private const double LeastThrustRange = 0.05; // of full thrust, between the 5 % and 95 % quantiles: less shows no growth with power
+    private const double NotableOutliers = 0.01; // share of measurements; clean ones give 0.0005
     private const double DecidedBy = 8; // of log-likelihood: one order is e^8 times as likely as the other
     private const double CollinearInflation = 100; // variance inflation: the standard error is ten times what separate inputs would give
 
@@ -203,7 +204,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         double meanThrust = MeanThrust(flight);
         FitCovariance covariance = FitCovariance.Of(flight, filter, chosen.Result, chosen.Noise.DisturbanceRms, meanThrust);
         NoiseParameters noise = chosen.Noise;
-        var notices = new List<Notice>();
+        var notices = new List<Finding>();
 
         int constant = flight.IndexOf(ColumnKind.Constant);
         int slope = flight.IndexOf(ColumnKind.Thrust), curvature = flight.IndexOf(ColumnKind.ThrustSquared);
@@ -224,8 +225,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             double inflation = covariance.Inflation[brake];
             if (inflation > CollinearInflation)
             {
-                notices.Add(new("brake_follows_thrust", Invariant(
-                    $"Brake and thrust went together all flight (variance inflation {Math.Min(inflation, 1e6):F0}), so the pull cannot be split between them. Two opposite brake steps of 10 s at one power setting would separate them.")));
+                notices.Add(Finding.Of(FindingCode.BrakesCollinear, Math.Sqrt(1 - (1 / inflation))));
             }
         }
         var names = new List<(string Name, int Column, string Reason)>
@@ -264,20 +264,20 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         if (bias >= 0)
             gyroBias = new Estimate(filter.Coefficients[bias] + flight.GyroBiasTaken, Math.Sqrt(covariance.Matrix[(bias * k) + bias]));
         if (biasHidden)
+            notices.Add(Finding.Of(FindingCode.GyroBiasUnknown));
+        if (!thrustMoves)
         {
-            notices.Add(new("gyro_bias_hidden", "There is neither GPS nor compass nor a spell of standing still, so the gyro's own bias looks like a constant pull; only the change with power is shown, and the gyro's vibration offset limits that too."));
+            notices.Add(signals.HasThrust
+                ? Finding.Of(FindingCode.ThrustRangeTooSmall, lowThrust / signals.FullThrust, highThrust / signals.FullThrust)
+                : Finding.Of(FindingCode.NoThrust));
         }
-        if (!signals.HasBrakes)
-        {
-            notices.Add(new("no_brakes", signals.HandsOffDeclared
-                ? "Brakes were not logged: only the spans marked hands-off were used."
-                : "Brakes were not logged and no span is marked hands-off: turns the pilot meant look like pull, and a held course hides it."));
-        }
+        if (!signals.HasBrakes && !signals.HandsOffDeclared)
+            notices.Add(Finding.Of(FindingCode.NoSteeringNoHandsOff));
         if (chosen.Result is { Convergence.Converged: false })
-            notices.Add(new("search_not_settled", Invariant($"The search for the time constants and noise levels did not settle in {chosen.Result.Convergence.Iterations} steps; take the intervals as too narrow.")));
+            notices.Add(Finding.Of(FindingCode.TurnSearchNotSettled, chosen.Result.Convergence.Iterations));
         int outliers = filter.ExtraVariance.Count(v => v > 0);
-        if (outliers > 0.01 * flight.Measurements)
-            notices.Add(new("outliers", Invariant($"{outliers} of {flight.Measurements} measurements of the turn were out of line with the rest and count less.")));
+        if (outliers > NotableOutliers * flight.Measurements)
+            notices.Add(Finding.Of(FindingCode.TurnOutliers, outliers, flight.Measurements));
 
         return new TurnFit
         {
@@ -326,7 +326,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             EffectiveSamples = 0,
             Condition = double.PositiveInfinity,
             SpansLeftOut = signals.SpansLeftOut,
-            Notices = [new("turn_not_estimated", Invariant($"The turn could not be estimated: {reason}."))],
+            Notices = signals.HasGyro || signals.HasVelocity || signals.HeadingRad.Length > 0 ? [] : [Finding.Of(FindingCode.NoTurnRate)],
         };
     }
 }

@@ -1,5 +1,3 @@
-using MathNet.Numerics.Distributions;
-
 namespace TrimFit.Core.Turns.FilterError;
 
 /// <summary>Covariance of the coefficients, and what else the information says.</summary>
@@ -75,13 +73,13 @@ internal sealed class FitCovariance
         double pullVariance = likelihoodContrast[(constant * k) + constant];
         double effective = Math.Clamp(disturbanceRms * disturbanceRms / pullVariance, 1, flight.Measurements);
         double freedom = Math.Max(4, effective - turnColumns);
-        double blockFreedom = Math.Max(1, flight.Blocks - turnColumns);
-        double ratio = StudentT.InvCDF(0, 1, blockFreedom, 0.975) / StudentT.InvCDF(0, 1, freedom, 0.975);
+        // The blocks' scores add up to nothing at the solution, which takes as many degrees of freedom as there are turn coefficients.
+        double correction = flight.Blocks > turnColumns ? (double)flight.Blocks / (flight.Blocks - turnColumns) : 1;
         double[] raise = new double[k];
         for (int a = 0; a < k; a++)
         {
             double likelihood = likelihoodContrast[(a * k) + a];
-            double other = sandwichContrast[(a * k) + a] * ratio * ratio;
+            double other = sandwichContrast[(a * k) + a] * correction;
             raise[a] = other > likelihood && likelihood > 0 ? Math.Sqrt(other / likelihood) : 1;
         }
         for (int a = 0; a < k; a++)

@@ -45,7 +45,8 @@ internal static class FlightPreparation
         hasHeading = hasHeading && groups.Any(g => g.Air > 0);
         hasCompass = hasCompass && groups.Any(g => g.Compass > 0);
         bool headingKnown = hasHeading || hasCompass;
-        Estimate? still = s.StandingStillGyroBias;
+        // With a heading the fit finds the bias itself, and the signals' bias may come from the same fixes; without one it comes from standing still.
+        Estimate? still = headingKnown ? null : s.Gyro?.BiasRadPerSec;
         bool rotation = s.RotationRatioSquared.AsSpan().ContainsAnyExcept(0.0);
         if (hasGyro)
         {
@@ -78,7 +79,7 @@ internal static class FlightPreparation
                 ColumnKind.ThrustSquared => (full * full, quarterTurn),
                 ColumnKind.Brake => (brakeScale, quarterTurn),
                 ColumnKind.Trimmer => (trimmerScale, quarterTurn),
-                ColumnKind.GyroBias => (1, !headingKnown && still is Estimate e ? Math.Max(e.StandardError, 1e-5) : double.DegreesToRadians(20)),
+                ColumnKind.GyroBias => (1, still is Estimate e ? Math.Max(e.StandardError, 1e-5) : double.DegreesToRadians(20)),
                 ColumnKind.GyroRotation => (1, double.DegreesToRadians(0.5)),
                 ColumnKind.GyroTwist => (1, double.DegreesToRadians(10)),
                 // The circle fit's own error is small beside what the air does over a flight, so it only sets a floor.
