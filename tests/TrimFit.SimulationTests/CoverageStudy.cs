@@ -28,23 +28,24 @@ internal sealed record QuantityCoverage(double Covered, double BiasInErrors, dou
 
 internal static class CoverageStudy
 {
-    public static FilterErrorOptions Options { get; set; } = new();
 
     /// <summary>Flies and fits; half the flights have a first-order wing, half a second-order one.</summary>
-    public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Action<int>? progress = null)
+    public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Func<int, bool>? goOn = null)
     {
-        var results = new FlightResult[flights];
+        var all = new FlightResult?[flights];
         int done = 0;
-        Parallel.For(0, flights, new ParallelOptions { MaxDegreeOfParallelism = threads }, i =>
+        Parallel.For(0, flights, new ParallelOptions { MaxDegreeOfParallelism = threads }, (i, loop) =>
         {
-            results[i] = One(sensors, hardship, unchecked((seed * 1_000_003) + i), i % 2 == 1, withKnown);
+            all[i] = One(sensors, hardship, unchecked((seed * 1_000_003) + i), i % 2 == 1, withKnown);
             int now = Interlocked.Increment(ref done);
-            progress?.Invoke(now);
+            if (goOn is not null && !goOn(now))
+                loop.Stop();
         });
+        FlightResult[] results = [.. all.OfType<FlightResult>()];
         return new CoverageRow
         {
             Name = name,
-            Flights = flights,
+            Flights = results.Length,
             Missing = results.Count(f => f.Level is null || f.Slope is null),
             NotConverged = results.Count(f => !f.Converged),
             Level = Summarise(results, f => f.Level, double.RadiansToDegrees(1)),
@@ -63,7 +64,7 @@ internal static class CoverageStudy
         var random = new Gauss(seed);
         TurnScenario scenario = TurnScenario.Random(random, secondOrder, sensors, hardship);
         TurnSignals signals = MadeUpFlight.Fly(scenario, random);
-        var estimator = new FilterErrorEstimator(Options);
+        var estimator = new FilterErrorEstimator();
         TurnFit fit = estimator.Estimate(signals);
         TurnFit? known = withKnown ? estimator.EstimateWith(signals, TrueNoise(scenario)) : null;
         double t = StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom);

@@ -4,29 +4,12 @@ using Xunit.Runner.InProc.SystemConsole;
 
 namespace TrimFit.SimulationTests;
 
-/// <summary>`coverage` runs the study and prints its table; anything else goes to the test runner.</summary>
+/// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
+/// --minutes for each row); anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
     {
-        if (args.Length > 0 && args[0] == "debug")
-        {
-            Sensors sn = Enum.Parse<Sensors>(args[1]);
-            Hardship hd = Enum.Parse<Hardship>(args[2]);
-            int nn = int.Parse(args[3], CultureInfo.InvariantCulture);
-            for (int i = 0; i < nn; i++)
-            {
-                var g = new Gauss(unchecked(1_000_003 + i));
-                TurnScenario sc = TurnScenario.Random(g, i % 2 == 1, sn, hd);
-                Core.Turns.TurnSignals sig = MadeUpFlight.Fly(sc, g);
-                var est = new Core.Turns.FilterError.FilterErrorEstimator();
-                Core.Turns.TurnFit f = est.Estimate(sig), k = est.EstimateWith(sig, CoverageStudy.TrueNoise(sc));
-                double d = 180 / Math.PI;
-                var b = f["brake_difference"] ?? default; var bk = k["brake_difference"] ?? default;
-                Console.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{i} {(sc.SecondOrder ? 2 : 1)}/{(f.ResponseIsSecondOrder == true ? 2 : 1)} brake {sc.Brake * d:F1} fit {b.Value * d:F2}±{b.StandardError * d:F2} known {bk.Value * d:F2}±{bk.StandardError * d:F2} lag {(sc.SecondOrder ? 2 * sc.Damping / sc.NaturalFrequency : sc.LagSec):F2} {f.LagSec:F2} w {sc.DisturbanceRms * d:F2} {f.DisturbanceRmsRadPerSec * d:F2} tau {sc.DisturbanceTau:F1} {f.DisturbanceTauSec:F1} lvl {sc.PullAt(sc.LevelShare) * d:F2} {f.PullAt(sc.LevelThrust)?.Value * d:F2}±{f.PullAt(sc.LevelThrust)?.StandardError * d:F2}  {k.PullAt(sc.LevelThrust)?.Value * d:F2}±{k.PullAt(sc.LevelThrust)?.StandardError * d:F2} neff {f.EffectiveSamples:F0} {string.Join(";", f.Notices.Select(n => n.Code))}"));
-            }
-            return 0;
-        }
         if (args.Length > 0 && args[0] == "coverage")
             return Coverage(args);
         return args.Any(a => a is "--server" or "--internal-msbuild-node")
@@ -38,7 +21,7 @@ internal static class Program
     {
         int flights = Number("--flights", 2000), threads = Number("--threads", 1), seed = Number("--seed", 1);
         int hard = Number("--hard", Math.Max(1, flights / 4));
-        CoverageStudy.Options = new() { BlockSec = Text("--block").Length == 0 ? 0.2 : double.Parse(Text("--block"), CultureInfo.InvariantCulture), OutlierLimit = Text("--limit").Length == 0 ? 3.5 : double.Parse(Text("--limit"), CultureInfo.InvariantCulture) };
+        double minutes = Number("--minutes", 24 * 60);
         string only = Text("--only");
         var rows = new List<(string Name, Sensors Sensors, Hardship Hardship, int Flights)>
         {
@@ -65,6 +48,7 @@ internal static class Program
             {
                 if (done % 50 == 0 || done == count)
                     Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\r{name}: {done}/{count}, {clock.Elapsed.TotalSeconds:F0} s "));
+                return clock.Elapsed.TotalMinutes < minutes;
             });
             Console.Error.WriteLine();
             Console.WriteLine(CoverageStudy.Line(row));

@@ -118,15 +118,12 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         // Gross errors (a gyro spike of 100 deg/s) would otherwise set the noise level of the first search.
         first.Evaluate(best);
         filter.RunRobust(firstLayout.FromVector(best), 3 * _options.OutlierLimit);
-        SearchResult one = first.From(best, _options.MostIterations);
-        evaluations += one.Evaluations + 2;
-        for (int round = 0; round < 2; round++)
-        {
-            SetCurvaturePrior(flight, filter);
-            filter.RunRobust(one.Noise, _options.OutlierLimit);
-            one = first.From(one.Theta, _options.MostIterations);
-            evaluations += one.Evaluations + 1;
-        }
+        SearchResult one = first.From(best, _options.MostIterations, NoiseSearch.Rough);
+        SetCurvaturePrior(flight, filter);
+        filter.RunRobust(one.Noise, _options.OutlierLimit);
+        evaluations += one.Evaluations + 3;
+        one = first.From(one.Theta, _options.MostIterations, NoiseSearch.Rough);
+        evaluations += one.Evaluations;
 
         ParameterLayout secondLayout = new(ResponseOrder.Second, flight.HasGyro, flight.HasHeading, flight.HasCompass);
         var second = new NoiseSearch(filter, secondLayout, flight.Measurements, flight.Coefficients);
@@ -142,7 +139,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
                 Damping = damping,
                 NaturalFrequency = Math.Clamp(2 * damping / one.Noise.LagSec, 0.5, 2.5),
             };
-            SearchResult candidate = second.From(secondLayout.ToVector(start), _options.MostIterations);
+            SearchResult candidate = second.From(secondLayout.ToVector(start), _options.MostIterations, NoiseSearch.Rough);
             evaluations += candidate.Evaluations;
             if (two is null || candidate.Objective < two.Objective)
                 two = candidate;
@@ -152,12 +149,9 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         bool takeSecond = gain > 0;
         SearchResult chosen = takeSecond ? two! : one;
         NoiseSearch search = takeSecond ? second : first;
-        if (takeSecond)
-        {
-            filter.Run(chosen.Noise);
-            SetCurvaturePrior(flight, filter);
-            filter.RunRobust(chosen.Noise, _options.OutlierLimit);
-        }
+        filter.Run(chosen.Noise);
+        SetCurvaturePrior(flight, filter);
+        filter.RunRobust(chosen.Noise, _options.OutlierLimit);
         // Always searched last, so that the filter holds the chosen model's run.
         chosen = search.From(chosen.Theta, _options.MostIterations);
         evaluations += chosen.Evaluations + 2;

@@ -35,7 +35,12 @@ internal sealed class SearchResult
 internal sealed class NoiseSearch
 {
     private const double Difference = 1e-4; // in the logarithm: the slope's error is half of it times the curvature, far below a standard error
-    private const double GoodEnough = 2e-3; // of log-likelihood still to be gained: 1/20 of a standard error of the best-known combination
+    /// <summary>Log-likelihood still to be gained at which a search may end: 1/16 of a standard error of the best-known combination.</summary>
+    public const double Settled = 2e-3;
+
+    /// <summary>The same for a search that only prepares another: a third of a standard error.</summary>
+    public const double Rough = 5e-2;
+
     private const double LargestStep = 1.2; // in the logarithm, times 3.3
 
     private readonly AugmentedFilter _filter;
@@ -53,7 +58,7 @@ internal sealed class NoiseSearch
 
     public double Evaluate(double[] theta) => _filter.Run(_layout.FromVector(theta)) + _layout.PriorPenalty(theta);
 
-    public SearchResult From(double[] start, int mostIterations)
+    public SearchResult From(double[] start, int mostIterations, double goodEnough = Settled)
     {
         int q = _layout.Count, m = _measurements;
         double[] theta = [.. start];
@@ -134,7 +139,7 @@ internal sealed class NoiseSearch
                     gain -= step[i] * gradient[i] / 2;
                     largest = Math.Max(largest, Math.Abs(step[i]));
                 }
-                if (gain < GoodEnough && damping <= 0.1)
+                if (gain < goodEnough && damping <= 0.1)
                 {
                     converged = true;
                     lastStep = largest;
