@@ -18,8 +18,16 @@ internal static class FlightAssembler
     /// <param name="start">Absolute time of zero, when known.</param>
     public static SamplingSummary Summarise(double[] timeSec, IEnumerable<double[]> columns, DateTimeOffset? start)
     {
-        double step = columns.Select(column => MedianStep(timeSec, column)).Where(s => s > 0).DefaultIfEmpty(MedianStep(timeSec, timeSec)).Min();
-        double pause = Math.Max(GapSec, GapSteps * MedianStep(timeSec, timeSec));
+        double rowStep = MedianStep(timeSec, timeSec);
+        double step = double.PositiveInfinity;
+        foreach (double[] column in columns)
+        {
+            double own = Array.Exists(column, double.IsNaN) ? MedianStep(timeSec, column) : rowStep;
+            step = own > 0 ? Math.Min(step, own) : step;
+        }
+        if (double.IsPositiveInfinity(step))
+            step = rowStep;
+        double pause = Math.Max(GapSec, GapSteps * rowStep);
         var gaps = ImmutableArray.CreateBuilder<TimeGap>();
         for (int i = 1; i < timeSec.Length; i++)
         {
@@ -39,16 +47,17 @@ internal static class FlightAssembler
     /// <summary>Median time between the values of a column; 0 with fewer than two.</summary>
     private static double MedianStep(double[] timeSec, double[] column)
     {
-        var steps = new List<double>(Math.Max(0, timeSec.Length - 1));
+        double[] steps = new double[Math.Max(0, timeSec.Length - 1)];
+        int count = 0;
         int last = -1;
         for (int i = 0; i < column.Length; i++)
         {
             if (!double.IsFinite(column[i]))
                 continue;
             if (last >= 0)
-                steps.Add(timeSec[i] - timeSec[last]);
+                steps[count++] = timeSec[i] - timeSec[last];
             last = i;
         }
-        return steps.Count == 0 ? 0 : Order.LowerMedian(System.Runtime.InteropServices.CollectionsMarshal.AsSpan(steps));
+        return count == 0 ? 0 : Order.LowerMedian(steps.AsSpan(0, count));
     }
 }

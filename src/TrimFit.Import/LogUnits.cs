@@ -94,10 +94,14 @@ public static class LogUnits
             return true;
         // "ft msl": the word says from where, not in what.
         int space = text.LastIndexOf(' ');
-        if (space > 0 && text[(space + 1)..].TrimEnd(')', ']').ToLowerInvariant() is "msl" or "amsl" or "agl" or "baro" or "gps" or "wgs" or "wgs84" or "true" or "mag")
+        if (space > 0 && IsRemark(text[(space + 1)..].TrimEnd(')', ']')))
             return TryParse(text[..space], out unit);
         return TryParseRange(simple, out unit);
     }
+
+    /// <summary>Whether a word beside a name or unit says from where a value is, not in what unit: <c>msl</c>, <c>WGS84</c>, <c>utc</c>.</summary>
+    internal static bool IsRemark(string word) =>
+        word.ToLowerInvariant() is "msl" or "amsl" or "agl" or "baro" or "gps" or "gnss" or "wgs" or "wgs84" or "true" or "mag" or "utc" or "local" or "txt" or "text";
 
     /// <summary>Whether numbers in the unit can stand in a column of the role.</summary>
     public static bool Fits(ChannelRole role, LogUnit unit)

@@ -96,7 +96,7 @@ public class CommandTests
     public void The_same_flight_gives_the_same_report_bytes()
     {
         using var folder = new TemporaryFolder();
-        Fit("uncorrected", "--report", folder["a.html"], "--quiet");
+        Assert.Equal("", Fit("uncorrected", "--report", folder["a.html"], "--quiet").Error); // nor does a library speak up
         Fit("uncorrected", "--report", folder["b.html"], "--quiet");
         Assert.Equal(File.ReadAllBytes(folder["a.html"]), File.ReadAllBytes(folder["b.html"]));
         Assert.Contains("<svg", File.ReadAllText(folder["a.html"]), StringComparison.Ordinal);

@@ -56,17 +56,23 @@ public sealed class FlightLog
     public static FlightLog Create(ReadOnlySpan<double> timeSec, IEnumerable<KeyValuePair<ChannelRole, double[]>> channels, FlightLogOptions? options = null)
     {
         ArgumentNullException.ThrowIfNull(channels);
+        return TakeOver(timeSec.ToArray(), channels.Select(c => KeyValuePair.Create(c.Key, c.Value.ToArray())), options);
+    }
+
+    /// <summary>As <see cref="Create"/> without the copy: for columns that were just made and that nobody else holds. A long log is most of the memory.</summary>
+    internal static FlightLog TakeOver(double[] timeSec, IEnumerable<KeyValuePair<ChannelRole, double[]>> channels, FlightLogOptions? options = null)
+    {
         Guard.StrictlyIncreasing(timeSec);
-        var copied = new Dictionary<ChannelRole, double[]>();
+        var kept = new Dictionary<ChannelRole, double[]>();
         foreach ((ChannelRole role, double[] column) in channels)
         {
             Guard.SameLength(timeSec, column, ChannelRoles.NameOf(role));
             if (column.AsSpan().ContainsAnyInfinite())
                 throw new ArgumentException("holds an infinite value", ChannelRoles.NameOf(role));
             if (column.AsSpan().ContainsAnyFinite())
-                copied[role] = [.. column];
+                kept[role] = column;
         }
-        return new(timeSec.ToArray(), copied, options ?? new());
+        return new(timeSec, kept, options ?? new());
     }
 
     /// <summary>The same flight with one column put in or replaced.</summary>

@@ -69,7 +69,8 @@ public static class StandardAtmosphere
     /// <exception cref="ArgumentOutOfRangeException">The pressure is below that at 11 km or not finite.</exception>
     public static double PressureAltitude(double pressurePa)
     {
-        double height = SeaLevelTemperature / _gradients[0] * (Math.Pow(Guard.Positive(pressurePa) / SeaLevelPressure, -GasConstant * _gradients[0] / PhysicalConstants.StandardGravity) - 1);
+        double exponent = -GasConstant * _gradients[0] / PhysicalConstants.StandardGravity;
+        double height = SeaLevelTemperature / _gradients[0] * (Math.Pow(Guard.Positive(pressurePa) / SeaLevelPressure, exponent) - 1);
         return height <= _baseHeights[1] + 1e-6 // the boundary itself comes back with some rounding
             ? height
             : throw new ArgumentOutOfRangeException(nameof(pressurePa), pressurePa, "must be at least the pressure at 11 km, 22632 Pa");

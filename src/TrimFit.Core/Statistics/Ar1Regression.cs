@@ -15,12 +15,14 @@ public static class Ar1Regression
     /// <param name="options">Choices; null for the defaults.</param>
     /// <param name="segments">Segment of each row, different across a gap; empty for one segment.</param>
     /// <exception cref="ArgumentException">Lengths do not match or a value is not finite.</exception>
-    public static Ar1Fit CochraneOrcutt(ReadOnlySpan<double> designColumnMajor, ReadOnlySpan<double> y, int columns, Ar1Options? options = null, ReadOnlySpan<int> segments = default) =>
+    public static Ar1Fit CochraneOrcutt(
+        ReadOnlySpan<double> designColumnMajor, ReadOnlySpan<double> y, int columns, Ar1Options? options = null, ReadOnlySpan<int> segments = default) =>
         Fit(designColumnMajor, y, columns, keepFirst: false, options ?? new Ar1Options(), segments);
 
     /// <summary>Prais and Winsten's estimate: the first row of each segment is kept.</summary>
     /// <inheritdoc cref="CochraneOrcutt"/>
-    public static Ar1Fit PraisWinsten(ReadOnlySpan<double> designColumnMajor, ReadOnlySpan<double> y, int columns, Ar1Options? options = null, ReadOnlySpan<int> segments = default) =>
+    public static Ar1Fit PraisWinsten(
+        ReadOnlySpan<double> designColumnMajor, ReadOnlySpan<double> y, int columns, Ar1Options? options = null, ReadOnlySpan<int> segments = default) =>
         Fit(designColumnMajor, y, columns, keepFirst: true, options ?? new Ar1Options(), segments);
 
     /// <summary>ρ of residuals by a rule, kept inside ±0.9999; 0 for residuals that are all 0.</summary>
@@ -96,7 +98,15 @@ public static class Ar1Regression
     }
 
     private static void Transform(
-        ReadOnlySpan<double> design, ReadOnlySpan<double> y, int p, double rho, bool keepFirst, ReadOnlySpan<int> segments, Span<double> transformed, Span<double> target, Span<int> runs)
+        ReadOnlySpan<double> design,
+        ReadOnlySpan<double> y,
+        int p,
+        double rho,
+        bool keepFirst,
+        ReadOnlySpan<int> segments,
+        Span<double> transformed,
+        Span<double> target,
+        Span<int> runs)
     {
         int n = y.Length, rows = target.Length, row = 0, run = 0;
         double first = Math.Sqrt(1 - (rho * rho));

@@ -11,11 +11,13 @@ public static class ChangePoints
     /// <param name="minimumSegment">Fewest values in a segment; at least 1.</param>
     /// <returns>Breaks in rising order; none when the column is shorter than two segments.</returns>
     /// <exception cref="ArgumentException">A value is not finite, or an argument is outside its range.</exception>
-    public static int[] Pelt(ReadOnlySpan<double> values, double penalty, int minimumSegment = 1) => Partition(values, penalty, minimumSegment, prune: true);
+    public static int[] Pelt(ReadOnlySpan<double> values, double penalty, int minimumSegment = 1) =>
+        Partition(values, penalty, minimumSegment, prune: true);
 
     /// <summary>The same by trying every last break: B. Jackson et al., IEEE Signal Process. Lett. 12 (2005) 105. Time grows with the square of the length.</summary>
     /// <inheritdoc cref="Pelt"/>
-    public static int[] OptimalPartitioning(ReadOnlySpan<double> values, double penalty, int minimumSegment = 1) => Partition(values, penalty, minimumSegment, prune: false);
+    public static int[] OptimalPartitioning(ReadOnlySpan<double> values, double penalty, int minimumSegment = 1) =>
+        Partition(values, penalty, minimumSegment, prune: false);
 
     /// <summary>The best segmentation with a given number of breaks. J. Bai &amp; P. Perron, J. Appl. Econometrics 18 (2003) 1.</summary>
     /// <param name="values">Finite values in order.</param>

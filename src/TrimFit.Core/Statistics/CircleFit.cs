@@ -221,7 +221,10 @@ public static class CircleFit
             {
                 double w = weights.IsEmpty ? 1 : weights[i];
                 if (!double.IsFinite(x[i]) || !double.IsFinite(y[i]) || !(w >= 0) || !double.IsFinite(w))
-                    throw new ArgumentException(FormattableString.Invariant($"point {i} is ({x[i]}, {y[i]}) with weight {w}: must be finite, the weight not negative"), nameof(x));
+                {
+                    throw new ArgumentException(
+                        FormattableString.Invariant($"point {i} is ({x[i]}, {y[i]}) with weight {w}: must be finite, the weight not negative"), nameof(x));
+                }
                 if (w > 0)
                     used++;
                 total += w;

@@ -12,7 +12,8 @@ public sealed class KalmanFilter
 
     private readonly int _n;
     private readonly double[] _state, _covariance, _diffuse, _gain, _diffuseGain, _moved, _work, _product;
-    private int _unknown; // directions of which nothing is known: each measurement that lowers it lowers it by one, so its end is counted, not guessed from rounding
+    // Directions of which nothing is known. A measurement that lowers their number lowers it by one, so the end is counted, not guessed from rounding.
+    private int _unknown;
 
     /// <summary>A filter whose states are known to be 0; see <see cref="Start"/>.</summary>
     /// <param name="states">Number of states; at least 1.</param>
@@ -22,7 +23,8 @@ public sealed class KalmanFilter
         ArgumentOutOfRangeException.ThrowIfLessThan(states, 1);
         _n = states;
         (_state, _gain, _diffuseGain, _moved) = (new double[states], new double[states], new double[states], new double[states]);
-        (_covariance, _diffuse, _work, _product) = (new double[states * states], new double[states * states], new double[states * states], new double[states * states]);
+        (_covariance, _diffuse) = (new double[states * states], new double[states * states]);
+        (_work, _product) = (new double[states * states], new double[states * states]);
     }
 
     /// <summary>Number of states.</summary>
@@ -51,7 +53,10 @@ public sealed class KalmanFilter
     public void Start(ReadOnlySpan<double> state, ReadOnlySpan<double> covariance, ReadOnlySpan<bool> diffuse = default)
     {
         if (state.Length != _n || covariance.Length != _n * _n || (!diffuse.IsEmpty && diffuse.Length != _n))
-            throw new ArgumentException(FormattableString.Invariant($"has {state.Length} values with a covariance of {covariance.Length}, expected {_n} and {_n * _n}"), nameof(state));
+        {
+            throw new ArgumentException(
+                FormattableString.Invariant($"has {state.Length} values with a covariance of {covariance.Length}, expected {_n} and {_n * _n}"), nameof(state));
+        }
         state.CopyTo(_state);
         covariance.CopyTo(_covariance);
         Array.Clear(_diffuse);
@@ -76,7 +81,11 @@ public sealed class KalmanFilter
     public void Predict(ReadOnlySpan<double> transition, ReadOnlySpan<double> processNoise, ReadOnlySpan<double> input = default)
     {
         if (transition.Length != _n * _n || processNoise.Length != _n * _n || (!input.IsEmpty && input.Length != _n))
-            throw new ArgumentException(FormattableString.Invariant($"has {transition.Length} values beside a process noise of {processNoise.Length}, expected {_n * _n} each"), nameof(transition));
+        {
+            throw new ArgumentException(
+                FormattableString.Invariant($"has {transition.Length} values beside a process noise of {processNoise.Length}, expected {_n * _n} each"),
+                nameof(transition));
+        }
         for (int i = 0; i < _n; i++)
         {
             double sum = input.IsEmpty ? 0 : input[i];

@@ -167,7 +167,13 @@ public static class LeastSquares
     }
 
     private static void Residuals(
-        HouseholderQr qr, ReadOnlySpan<double> design, ReadOnlySpan<double> target, ReadOnlySpan<double> coefficients, ReadOnlySpan<double> residuals, Span<double> f, Span<double> h)
+        HouseholderQr qr,
+        ReadOnlySpan<double> design,
+        ReadOnlySpan<double> target,
+        ReadOnlySpan<double> coefficients,
+        ReadOnlySpan<double> residuals,
+        Span<double> f,
+        Span<double> h)
     {
         int n = target.Length, p = qr.Rank;
         for (int i = 0; i < n; i++)

@@ -10,7 +10,8 @@ public sealed class MatrixExponential
     // Coefficients of the [13/13] approximant, exact integers (Higham 2005, Algorithm 2.3).
     private static readonly double[] _b =
     [
-        64764752532480000, 32382376266240000, 7771770303897600, 1187353796428800, 129060195264000, 10559470521600, 670442572800, 33522128640, 1323241920, 40840800, 960960, 16380, 182, 1,
+        64764752532480000, 32382376266240000, 7771770303897600, 1187353796428800, 129060195264000, 10559470521600, 670442572800,
+        33522128640, 1323241920, 40840800, 960960, 16380, 182, 1,
     ];
 
     private readonly int _n;
@@ -37,7 +38,10 @@ public sealed class MatrixExponential
     {
         int n = _n, length = n * n;
         if (matrix.Length != length || result.Length != length)
-            throw new ArgumentException(FormattableString.Invariant($"has {matrix.Length} values for a result of {result.Length}, expected {length} each"), nameof(matrix));
+        {
+            throw new ArgumentException(
+                FormattableString.Invariant($"has {matrix.Length} values for a result of {result.Length}, expected {length} each"), nameof(matrix));
+        }
         Guard.Finite(time);
         double norm = 0; // largest column sum
         for (int j = 0; j < n; j++)

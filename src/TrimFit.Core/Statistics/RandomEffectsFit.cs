@@ -33,7 +33,8 @@ public sealed record RandomEffectsFit
 
     /// <summary>Hartung and Knapp's interval: t with studies − 1 degrees of freedom; null for one study.</summary>
     /// <param name="level">Such as 0.95.</param>
-    /// <param name="neverNarrower">True keeps the standard error from falling below the one of <see cref="Mean"/> (factor not below 1), which chance agreement of few studies would.</param>
+    /// <param name="neverNarrower">True keeps the standard error from falling below the one of <see cref="Mean"/> (factor not below 1), as it would when few
+    /// studies agree by chance.</param>
     public ConfidenceInterval? HartungKnappInterval(double level, bool neverNarrower = true)
     {
         if (HartungKnappStandardError is not double error)

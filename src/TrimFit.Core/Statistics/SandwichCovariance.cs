@@ -27,7 +27,11 @@ public static class SandwichCovariance
     /// <returns>p×p covariance, row by row. Use t with clusters − 1 degrees of freedom; with one cluster the scores sum to zero and so does this.</returns>
     /// <exception cref="ArgumentException">Lengths do not match or a value is not finite.</exception>
     public static double[] Clustered(
-        ReadOnlySpan<double> designColumnMajor, ReadOnlySpan<double> residuals, int columns, ReadOnlySpan<int> clusters, SmallSample smallSample = SmallSample.DegreesOfFreedom)
+        ReadOnlySpan<double> designColumnMajor,
+        ReadOnlySpan<double> residuals,
+        int columns,
+        ReadOnlySpan<int> clusters,
+        SmallSample smallSample = SmallSample.DegreesOfFreedom)
     {
         LeastSquares.CheckShape(designColumnMajor, residuals, columns, []);
         int n = residuals.Length, p = columns;

@@ -14,8 +14,8 @@ public static class StudentT
         double v = Checked(degreesOfFreedom);
         if (double.IsPositiveInfinity(v))
             return StandardNormal.Density(t);
-        double log = SpecialFunctions.GammaLn((v + 1) / 2) - SpecialFunctions.GammaLn(v / 2) - (0.5 * Math.Log(v * Math.PI)) - ((v + 1) / 2 * Probability.Log1P(t * t / v));
-        return Math.Exp(log);
+        double constant = SpecialFunctions.GammaLn((v + 1) / 2) - SpecialFunctions.GammaLn(v / 2) - (0.5 * Math.Log(v * Math.PI));
+        return Math.Exp(constant - ((v + 1) / 2 * Probability.Log1P(t * t / v)));
     }
 
     /// <summary>Probability of a value below t; keeps its digits in the lower tail.</summary>

@@ -19,11 +19,11 @@ public sealed class CsvLogFormat : ILogFormat
         CsvHead head = CsvHead.Read(source);
         if (CsvLongRows.Layout(head) is { } layout)
             return ReadLong(source, options, head, layout);
-        CsvPlan plan = CsvPlan.Create(source.Name, head, options);
+        CsvPlan plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
         var rows = new CsvRows(source.Name, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
         {
-            plan = CsvPlan.Create(source.Name, head, options);
+            plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
             rows = new CsvRows(source.Name, head, plan, options.Strict);
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }
@@ -47,19 +47,20 @@ public sealed class CsvLogFormat : ILogFormat
             throw TooFewRows(file, rows, head);
         CsvUnits units = CsvUnits.Resolve(file, rows.TimeSec, channels, notices, out Dictionary<ChannelRole, double[]> columns);
         notices.AddRange(rows.LeftOut.Notices);
-        ClockKind clock = timing.Kind switch
+        CsvTime dated = rows.AnchorSec is null ? timing : timing.Anchor!;
+        ClockKind clock = dated.Kind switch
         {
             CsvTimeKind.Elapsed => ClockKind.Elapsed,
             CsvTimeKind.TimeOfDay or CsvTimeKind.ClockOfDateTime => ClockKind.TimeOfDay,
             _ => ClockKind.Absolute,
         };
         double[] time = rows.TimeSec;
-        DateTimeOffset? origin = null;
         double first = time[0];
-        if (clock == ClockKind.Absolute)
-            origin = DateTimeOffset.UnixEpoch.AddSeconds(rows.ZeroSec).AddTicks((long)Math.Round(first * TimeSpan.TicksPerSecond));
-        // A time of day stays one: zero is midnight.
-        double zero = clock == ClockKind.TimeOfDay ? -rows.ZeroSec : first;
+        // Zero of the result: the first row, and midnight for a time of day.
+        double zero = clock == ClockKind.TimeOfDay ? -(rows.AnchorSec ?? rows.ZeroSec) : first;
+        DateTimeOffset? origin = clock != ClockKind.Absolute ? null
+            : rows.AnchorSec is { } anchor ? DateTimeOffset.UnixEpoch.AddTicks((long)Math.Round((anchor + first) * TimeSpan.TicksPerSecond))
+            : DateTimeOffset.UnixEpoch.AddSeconds(rows.ZeroSec).AddTicks((long)Math.Round(first * TimeSpan.TicksPerSecond));
         if (zero != 0) // exact: nothing to take off
         {
             for (int i = 0; i < time.Length; i++)
@@ -78,7 +79,7 @@ public sealed class CsvLogFormat : ILogFormat
             },
             Clock = clock,
             Origin = origin,
-            IsUtc = clock != ClockKind.Elapsed && (timing.IsUtc || rows.SawZone),
+            IsUtc = clock != ClockKind.Elapsed && (dated.IsUtc || rows.SawZone),
             ElapsedStartSec = clock == ClockKind.Elapsed ? rows.ZeroSec + first : 0,
             TimeSec = time,
             Columns = columns,

@@ -29,6 +29,7 @@ internal sealed class CsvLongRows(string file, CsvHead head, CsvLongLayout layou
     public int Count => TimeSec.Length;
     public double[] TimeSec { get; private set; } = [];
     public long ZeroSec { get; private set; }
+    public double? AnchorSec => null;
     public bool SawZone => _clock.SawZone;
     public CsvLeftOut LeftOut { get; } = new(file, options.Strict);
     public string Sha256 { get; private set; } = "";

@@ -16,6 +16,9 @@ internal sealed class CsvRows : ICsvRows
     /// <summary>Step back, s, of an elapsed clock to near its beginning that is taken for a restart.</summary>
     private const double RestartSec = 5;
 
+    /// <summary>Beginning of the log, s, over which the coarser clock is compared; over hours the clocks drift apart.</summary>
+    private const double AnchorRowsSec = 600;
+
     /// <summary>Longest record, bytes; an unclosed quote must not swallow the memory.</summary>
     private const int LongestRecord = 1 << 20;
 
@@ -27,8 +30,13 @@ internal sealed class CsvRows : ICsvRows
     private readonly CsvColumn[] _wanted;
     private readonly CsvTime _time;
     private readonly CsvClock _clock;
+    private readonly CsvClock? _anchorClock;
+    private double _anchorSec = double.NegativeInfinity;
     private readonly CsvLeftOut _leftOut;
     private readonly double[] _row, _second;
+    private readonly int[] _index;
+    private readonly bool[] _isPosition;
+    private readonly double[][] _values;
     private readonly string?[] _suffix;
     private readonly double[] _suffixFactor;
     private readonly List<Notice> _notices = [];
@@ -50,9 +58,12 @@ internal sealed class CsvRows : ICsvRows
         _decimalMark = head.DecimalMark;
         _markSeen = head.DecimalMarkSeen;
         _clock = new CsvClock(plan.Time, head.DecimalMark);
+        _anchorClock = plan.Time.Anchor is { } anchor ? new CsvClock(anchor, head.DecimalMark) : null;
         _leftOut = new CsvLeftOut(file, strict);
         _row = new double[_wanted.Length];
         _second = new double[_wanted.Length];
+        _index = [.. _wanted.Select(c => c.Index)];
+        _isPosition = [.. _wanted.Select(c => c.Role == ChannelRole.Position)];
         _suffix = new string?[_wanted.Length];
         _suffixFactor = [.. Enumerable.Repeat(1.0, _wanted.Length)];
         int capacity = head.EstimatedRows > 0 ? (int)Math.Min(head.EstimatedRows * 1.02 + 16, Array.MaxLength) : FirstRows;
@@ -63,6 +74,7 @@ internal sealed class CsvRows : ICsvRows
             if (column.Role == ChannelRole.Position)
                 column.SecondValues = new double[capacity];
         }
+        _values = [.. _wanted.Select(c => c.Values)];
     }
 
     /// <summary>Rows of data in the file.</summary>
@@ -73,7 +85,8 @@ internal sealed class CsvRows : ICsvRows
     public double[] TimeSec => _timeSec;
     /// <summary>The clock's reading at <c>TimeSec = 0</c>.</summary>
     public long ZeroSec => _zeroSec;
-    public bool SawZone => _clock.SawZone;
+    public double? AnchorSec => double.IsFinite(_anchorSec) ? _anchorSec : null;
+    public bool SawZone => (_anchorClock ?? _clock).SawZone;
     public CsvLeftOut LeftOut => _leftOut;
     public IReadOnlyList<Notice> Notices => _notices;
     /// <summary>SHA-256 of the file.</summary>
@@ -130,6 +143,7 @@ internal sealed class CsvRows : ICsvRows
         foreach (CsvColumn column in _wanted)
         {
             column.Values = Cut(column.Values);
+            column.Missing = column.Values.Count(double.IsNaN);
             if (column.SecondValues.Length > 0)
                 column.SecondValues = Cut(column.SecondValues);
         }
@@ -161,9 +175,12 @@ internal sealed class CsvRows : ICsvRows
             LeaveOutTime(timeCell, dateCell, kind, line);
             return;
         }
-        for (int i = 0; i < _wanted.Length; i++)
+        for (int i = 0; i < _index.Length; i++)
         {
-            if (!ReadCell(Cell(reader, _wanted[i].Index, fields), i, line))
+            ReadOnlySpan<byte> cell = Cell(reader, _index[i], fields);
+            if (_markSeen && !_isPosition[i] && CsvNumber.TryParseOrdinary(cell, _decimalMark, out _row[i]))
+                continue;
+            if (!ReadCell(cell, i, line))
                 return;
         }
         if (!_hasZero)
@@ -175,19 +192,27 @@ internal sealed class CsvRows : ICsvRows
         if (Count > 0 && !(t > _timeSec[Count - 1]) && !PutInOrder(ref t, line))
             return;
         _restart = false;
+        if (_anchorClock is not null && _carrySec == 0 && t < AnchorRowsSec) // exact: nothing was shifted yet
+            Anchor(reader, fields, t);
         if (Count == _timeSec.Length)
             Grow();
         _timeSec[Count] = t;
-        for (int i = 0; i < _wanted.Length; i++)
+        for (int i = 0; i < _values.Length; i++)
         {
-            CsvColumn column = _wanted[i];
-            column.Values[Count] = _row[i];
-            if (column.SecondValues.Length > 0)
-                column.SecondValues[Count] = _second[i];
-            if (double.IsNaN(_row[i]))
-                column.Missing++;
+            _values[i][Count] = _row[i];
+            if (_isPosition[i])
+                _wanted[i].SecondValues[Count] = _second[i];
         }
         Count++;
+    }
+
+    // Clocks cut their stamps down, so the latest start that any row asks for is nearest to the true one.
+    private void Anchor(CsvReader reader, int fields, double t)
+    {
+        CsvTime anchor = _time.Anchor!;
+        ReadOnlySpan<byte> date = anchor.Date is null ? default : Cell(reader, anchor.Date.Index, fields);
+        if (_anchorClock!.Read(Cell(reader, anchor.Time.Index, fields), date, out long seconds, out double fraction) == CellKind.Number)
+            _anchorSec = Math.Max(_anchorSec, seconds + fraction - t);
     }
 
     private static ReadOnlySpan<byte> Cell(CsvReader reader, int index, int fields) => index < fields ? reader.GetSpan(index) : default;
@@ -395,11 +420,13 @@ internal sealed class CsvRows : ICsvRows
     {
         int size = (int)Math.Min(Math.Max(FirstRows, 2L * _timeSec.Length), Array.MaxLength);
         Array.Resize(ref _timeSec, size);
-        foreach (CsvColumn column in _wanted)
+        for (int i = 0; i < _wanted.Length; i++)
         {
+            CsvColumn column = _wanted[i];
             double[] values = column.Values;
             Array.Resize(ref values, size);
             column.Values = values;
+            _values[i] = values;
             if (column.SecondValues.Length > 0)
             {
                 values = column.SecondValues;

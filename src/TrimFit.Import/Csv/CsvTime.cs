@@ -28,4 +28,8 @@ internal enum CsvTimeKind
 /// <param name="UnitFactor">Seconds in the unit when it is no power of ten (min, h); else 1.</param>
 /// <param name="IsUtc">Whether the clock is known to be UTC.</param>
 /// <param name="Packed">Whether the time of day is written as one number, hhmmss.</param>
-internal sealed record CsvTime(CsvTimeKind Kind, CsvColumn Time, CsvColumn? Date, DateOrder Order, int UnitExponent, double UnitFactor, bool IsUtc, bool Packed = false);
+internal sealed record CsvTime(CsvTimeKind Kind, CsvColumn Time, CsvColumn? Date, DateOrder Order, int UnitExponent, double UnitFactor, bool IsUtc, bool Packed = false)
+{
+    /// <summary>A coarser clock of the file that knows the date or the time of day, when <see cref="Time"/> only counts; null without one.</summary>
+    public CsvTime? Anchor { get; init; }
+}

@@ -70,19 +70,43 @@ internal static class CsvTimeChoice
         }
         CsvColumn time = times.OrderByDescending(c => c.Told).ThenBy(c => Preference(head, c, looks[c], dates.Count > 0)).ThenBy(c => c.Rank).ThenBy(c => c.Index).First();
         CsvColumn? date = looks[time] is Look.TimeOfDay or Look.PackedTime ? dates.OrderByDescending(c => c.Told).ThenBy(c => c.Index).FirstOrDefault() : null;
-        if (times.Count > 1 && !time.Told)
+        CsvColumn? counter = time.Told || looks[time] == Look.Number && Epoch(head, time) is null || !IsCoarse(head, time) ? null
+            : times.Find(c => looks[c] == Look.Number && Epoch(head, c) is null && !IsCoarse(head, c));
+        if (counter is not null)
+        {
+            notices.Add(new("two_clocks", $"{file}: the stamps of column \"{time.Name}\" are coarser than the sampling; they give the start, and column \"{counter.Name}\" gives the steps."));
+        }
+        else if (times.Count > 1 && !time.Told)
         {
             notices.Add(new("several_columns", $"{file}: {string.Join(", ", times.OrderBy(c => c.Index).Select(c => $"\"{c.Name}\""))} can all give the time; \"{time.Name}\" is used. To choose: --column time=NAME."));
         }
         foreach (CsvColumn other in columns)
         {
-            if (other.Role is ChannelRole.Time or ChannelRole.Date && other != time && other != date)
+            if (other.Role is ChannelRole.Time or ChannelRole.Date && other != time && other != date && other != counter)
                 other.Release();
         }
         time.Role = ChannelRole.Time;
         if (date is not null)
             date.Role = ChannelRole.Date;
-        return Build(file, head, time, date, looks[time], notices);
+        if (counter is null)
+            return Build(file, head, time, date, looks[time], notices);
+        counter.Role = ChannelRole.Time;
+        return BuildNumber(file, head, counter, isUtc: false, notices) with { Anchor = Build(file, head, time, date, looks[time], notices) };
+    }
+
+    // Whether most rows of the head share their stamp with the row before.
+    private static bool IsCoarse(CsvHead head, CsvColumn column)
+    {
+        int same = 0, all = 0;
+        for (int i = 1; i < head.Sample.Count; i++)
+        {
+            byte[][] before = head.Sample[i - 1].Cells, now = head.Sample[i].Cells;
+            if (column.Index >= before.Length || column.Index >= now.Length)
+                continue;
+            all++;
+            same += before[column.Index].AsSpan().SequenceEqual(now[column.Index]) ? 1 : 0;
+        }
+        return all >= 5 && same > 0.4 * all;
     }
 
     // 194159, 194200, …: hours, minutes and seconds in one number. A counter would pass through numbers ending in 60 to 99 within 41 of its steps.

@@ -27,8 +27,6 @@ internal static class CsvTimeLine
             if (kept > 0 && !(timeSec[i] > timeSec[kept - 1]))
             {
                 leftOut.Add("repeat", firstLine, null, () => new("time repeats", "the row has the time of the row before.", "the time of the row before", "a later time", "Delete one of the rows."));
-                foreach (CsvColumn column in columns)
-                    column.Missing -= double.IsNaN(column.Values[i]) ? 1 : 0;
                 continue;
             }
             timeSec[kept] = timeSec[i];

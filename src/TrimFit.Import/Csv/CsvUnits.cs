@@ -10,6 +10,9 @@ internal sealed class CsvUnits
     /// <summary>How far, as a factor, a fitted scale may lie from a unit's. Half-way between m/s·kt and m/s·mph is 1.07.</summary>
     private const double SpeedScaleRoom = 1.06, RateScaleRoom = 3;
 
+    /// <summary>Values below which a range says nothing about a flight.</summary>
+    private const int EnoughValues = 100;
+
     /// <summary>Yaw rates, in the unit as written, that only degrees per second (above) or only radians per second (below) give in a whole flight.</summary>
     private const double OnlyDegrees = 8;
 
@@ -20,8 +23,7 @@ internal sealed class CsvUnits
     private readonly double[] _time;
     private readonly Dictionary<ChannelRole, CsvColumn> _columns;
     private readonly List<Notice> _notices;
-    private double[]? _north, _east;
-    private double[]? _headingRate;
+    private double[]? _latitude, _longitude, _north, _east;
 
     private CsvUnits(string file, double[] time, IEnumerable<CsvColumn> columns, List<Notice> notices)
     {
@@ -70,6 +72,9 @@ internal sealed class CsvUnits
     private void DropSentinels(CsvColumn column)
     {
         ReadOnlySpan<double> sentinels = [999999, -999999, 99999, -99999, 9999, -9999, -999, -32768, 32767, 65535, -2147483648, 2147483647, 4294967295, 999999.9, 9999.9, 9.99e9];
+        // Most columns hold no number as large as the smallest of these words.
+        if (!(Largest(column.Values) >= 999))
+            return;
         double largest = 0;
         bool any = false;
         foreach (double v in column.Values)
@@ -107,7 +112,7 @@ internal sealed class CsvUnits
             Apply(pair, pair.Unit ?? Unit("deg"), pair.Unit is null ? "by convention" : pair.UnitBasis);
             for (int i = 0; i < pair.SecondValues.Length; i++)
                 pair.SecondValues[i] *= pair.Unit!.Factor;
-            Velocity(pair.Values, pair.SecondValues);
+            (_latitude, _longitude) = (pair.Values, pair.SecondValues);
             return;
         }
         if (Of(ChannelRole.Latitude) is not { } latitude || Of(ChannelRole.Longitude) is not { } longitude)
@@ -126,7 +131,7 @@ internal sealed class CsvUnits
             Inferred(latitude, unit, "its numbers are too large for degrees");
         Apply(latitude, latitude.Unit ?? unit, latitude.Unit is null ? basis : latitude.UnitBasis);
         Apply(longitude, longitude.Unit ?? unit, longitude.Unit is null ? basis : longitude.UnitBasis);
-        Velocity(latitude.Values, longitude.Values);
+        (_latitude, _longitude) = (latitude.Values, longitude.Values);
     }
 
     private void NoFixAtZero(double[] latitude, double[] longitude, CsvColumn column)
@@ -145,7 +150,14 @@ internal sealed class CsvUnits
             Say("no_fix", FormattableString.Invariant($"{dropped} positions are 0, 0, which receivers write without a fix; they count as missing."));
     }
 
-    // Ground velocity from positions that moved, over at least a second, on a local plane: enough to tell units, nothing else uses it.
+    // Ground velocity from positions that moved, over at least a second, on a local plane: enough to tell units, nothing else uses it. Made when asked for.
+    private bool HasVelocity()
+    {
+        if (_north is null && _latitude is { } latitude && _longitude is { } longitude)
+            Velocity(latitude, longitude);
+        return _north is not null;
+    }
+
     private void Velocity(double[] latitude, double[] longitude)
     {
         _north = NaNs();
@@ -178,19 +190,18 @@ internal sealed class CsvUnits
     private void Course()
     {
         if (Of(ChannelRole.GroundCourse) is { } course)
-            Angle(course, reference: CourseReference());
-        _headingRate = HeadingRate();
+            Angle(course, CourseReference);
     }
 
     private double[]? CourseReference()
     {
-        if (_north is null)
+        if (!HasVelocity())
             return null;
         double[] reference = NaNs();
         for (int i = 0; i < reference.Length; i++)
         {
             // Below 2 m/s the rounding of positions turns the direction about.
-            if (_north[i] * _north[i] + _east![i] * _east[i] > 4)
+            if (_north![i] * _north[i] + _east![i] * _east[i] > 4)
                 reference[i] = Math.Atan2(_east[i], _north[i]);
         }
         return reference;
@@ -198,23 +209,14 @@ internal sealed class CsvUnits
 
     private void Speeds()
     {
-        double[]? speed = null;
-        if (_north is not null)
-        {
-            speed = NaNs();
-            for (int i = 0; i < speed.Length; i++)
-                speed[i] = Math.Sqrt(_north[i] * _north[i] + _east![i] * _east[i]);
-        }
-        foreach ((ChannelRole role, double[]? reference) in new[] { (ChannelRole.GroundSpeed, speed), (ChannelRole.VelocityNorth, _north), (ChannelRole.VelocityEast, _east) })
+        foreach (ChannelRole role in (ReadOnlySpan<ChannelRole>)[ChannelRole.GroundSpeed, ChannelRole.VelocityNorth, ChannelRole.VelocityEast])
         {
             if (Of(role) is not { } column)
                 continue;
-            if (column.Unit is null && reference is not null && Scale(column.Values, reference) is { } scale
+            if (column.Unit is null && SpeedReference(role) is { } reference && Scale(column.Values, reference) is { } scale
                 && Nearest(scale, SpeedScaleRoom, "m/s", "km/h", "kt", "mph", "cm/s") is { } unit)
             {
-                Inferred(column, unit, FormattableString.Invariant($"it is {1 / scale:G3} times the speed from the positions, m/s"));
-                column.Unit = unit;
-                column.UnitBasis = "inferred from the data";
+                Infer(column, unit.Name, FormattableString.Invariant($"it is {1 / scale:G3} times the speed from the positions, m/s"));
             }
             ApplyOrAsk(column, "m/s, km/h, kt, mph");
         }
@@ -222,11 +224,21 @@ internal sealed class CsvUnits
             ApplyOrAsk(airspeed, "m/s, km/h, kt, mph");
     }
 
+    private double[]? SpeedReference(ChannelRole role)
+    {
+        if (!HasVelocity() || role != ChannelRole.GroundSpeed)
+            return role == ChannelRole.VelocityNorth ? _north : role == ChannelRole.VelocityEast ? _east : null;
+        double[] speed = NaNs();
+        for (int i = 0; i < speed.Length; i++)
+            speed[i] = Math.Sqrt(_north![i] * _north[i] + _east![i] * _east[i]);
+        return speed;
+    }
+
     private void Angles()
     {
         if (Of(ChannelRole.Heading) is { } heading)
         {
-            Angle(heading, reference: null);
+            Angle(heading, () => null);
             HeadingThatIsACourse();
         }
         if (Of(ChannelRole.Roll) is not { } roll)
@@ -257,11 +269,10 @@ internal sealed class CsvUnits
         heading.Role = ChannelRole.GroundCourse;
         heading.RoleBasis = "name and the data";
         _columns[ChannelRole.GroundCourse] = heading;
-        _headingRate ??= HeadingRate();
     }
 
     // An angle of the full circle: its unit by its range, and a 16-bit number that ran over is put right.
-    private void Angle(CsvColumn column, double[]? reference)
+    private void Angle(CsvColumn column, Func<double[]?> reference)
     {
         if (column.Unit is not null && column.Unit.Quantity == Quantity.Angle && Unwrap16Bit(column, reference))
             return;
@@ -278,7 +289,7 @@ internal sealed class CsvUnits
 
     // Loggers that keep an angle in 16 bits let it run over: the number jumps from +32768 to −32768 units of its last digit and part of the circle
     // is written as negative numbers that no angle has. Putting 65536 units back makes it run from 0 to a full turn.
-    private bool Unwrap16Bit(CsvColumn column, double[]? reference)
+    private bool Unwrap16Bit(CsvColumn column, Func<double[]?> reference)
     {
         double low = double.PositiveInfinity, high = double.NegativeInfinity;
         foreach (double v in column.Values)
@@ -303,7 +314,7 @@ internal sealed class CsvUnits
                 for (int i = 0; i < column.Values.Length; i++)
                     column.Values[i] = (column.Values[i] < 0 ? column.Values[i] + 2 * limit : column.Values[i]) * times;
                 string factor = times == 1 ? "" : FormattableString.Invariant($" and multiplied by {times:R}"); // exact: a constant of the list
-                string agrees = reference is not null && Disagreement(column.Values, column.Unit.Factor, reference) is { } degrees
+                string agrees = reference() is { } course && Disagreement(column.Values, column.Unit.Factor, course) is { } degrees
                     ? FormattableString.Invariant($"; it then differs from the course of the positions by {degrees:F1} deg in the median") : "";
                 Say("angle_ran_over", FormattableString.Invariant(
                     $"column \"{column.Name}\" is a 16-bit number that ran over: its negative numbers are raised by {2 * limit:R}{factor}, so that it runs over one full turn{agrees}."));
@@ -332,9 +343,9 @@ internal sealed class CsvUnits
         {
             if (Of(role) is not { Unit: null } column)
                 continue;
-            if (_headingRate is not null && Scale(column.Values, _headingRate) is { } scale && Nearest(Math.Abs(scale), RateScaleRoom, "rad/s", "deg/s") is { } unit)
+            if (HeadingRate() is { } turning && Scale(column.Values, turning) is { } scale && Nearest(Math.Abs(scale), RateScaleRoom, "rad/s", "deg/s") is { } unit)
                 Infer(column, unit.Name, FormattableString.Invariant($"the turn rate of the ground course is {scale:G3} rad/s for each of its numbers"));
-            else if (Share(column.Values, 0.99) > OnlyDegrees)
+            else if (Order.Finite(column.Values).Length >= EnoughValues && Share(column.Values, 0.99) > OnlyDegrees)
                 Infer(column, "deg/s", "its numbers are too large for radians per second");
         }
         // The three axes of one gyro share a unit.

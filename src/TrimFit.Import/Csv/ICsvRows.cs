@@ -11,6 +11,8 @@ internal interface ICsvRows
     double[] TimeSec { get; }
     /// <summary>The clock's reading at <c>TimeSec = 0</c>, s.</summary>
     long ZeroSec { get; }
+    /// <summary>What the coarser clock of the file shows at <c>TimeSec = 0</c>, s since 1970 or midnight; null without one.</summary>
+    double? AnchorSec { get; }
     /// <summary>Whether a stamp carried its zone.</summary>
     bool SawZone { get; }
     /// <summary>Rows left out.</summary>

@@ -50,7 +50,7 @@ public static class FlightJoiner
         Dictionary<ChannelRole, PlacedTable> owners = Owners(placed, warnings);
         (double[] time, Dictionary<ChannelRole, double[]> columns) = Unite(placed, owners);
         (DateTimeOffset? start, TimeSpan? timeOfDay) = reference.StartAt(zero);
-        var flight = FlightLog.Create(time, columns, new()
+        var flight = FlightLog.TakeOver(time, columns, new()
         {
             StartUtc = start,
             StartTimeOfDay = timeOfDay,

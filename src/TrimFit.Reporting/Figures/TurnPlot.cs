@@ -38,8 +38,7 @@ internal static class TurnPlot
         var plot = new Plot();
         PlotFont.Use(plot);
         SvgFigure.Ticks(plot, numbers);
-        HorizontalLine zero = plot.Add.HorizontalLine(0, 1, Palette.Of(Palette.Grey));
-        zero.LinePattern = LinePattern.Dotted;
+        plot.Add.HorizontalLine(0, 1, Palette.Of(Palette.Grey)); // solid: of a dashed line the SVG backend complains on standard error
         if (line.Count > 0)
         {
             FillY fill = plot.Add.FillY([.. line.Select(p => p.X)], [.. line.Select(p => p.Low)], [.. line.Select(p => p.High)]);

@@ -61,8 +61,8 @@ public static partial class LogWriters
             CsvTime.ElapsedSeconds => [("time_s", "Time", "s")],
             CsvTime.ElapsedMilliseconds => [("time_ms", "Time", "ms")],
             CsvTime.Iso8601 => [("time_utc", "Time UTC", "")],
-            CsvTime.EpochSeconds => [("time_epoch_s", "Time epoch", "s")],
-            CsvTime.EpochMilliseconds => [("time_epoch_ms", "Time epoch", "ms")],
+            CsvTime.EpochSeconds => [("unix_time_s", "Unix time", "s")],
+            CsvTime.EpochMilliseconds => [("unix_time_ms", "Unix time", "ms")],
             _ => [("date", "Date", ""), ("time_utc", "Time UTC", "")],
         };
         if (dialect.LongFormat)

@@ -41,8 +41,8 @@ public class LogWriterTests
     [Theory]
     [InlineData("semicolon", "\uFEFFTime [s];Engine speed [rpm];Yaw rate [°/s];Brake left [mm]\r\n0,00;2400;1,00;50,0\r\n0,50;2370;-2,00;0,0\r\n1,00;;0,00;12,3\r\n")]
     [InlineData("tab", "time_utc\trpm\tgyro_z_dps\tbrake_left_mm\n2025-05-17T23:59:58.000Z\t2400\t1.00\t50.0\n2025-05-17T23:59:58.500Z\t2370\t-2.00\t0.0\n2025-05-17T23:59:59.000Z\tn/a\t0.00\t12.3\n")]
-    [InlineData("pipe", "time_epoch_ms|rpm|gyro_z_dps|brake_left_mm|\n1747526398000|2400|1.00|50.0|\n1747526398500|2370|-2.00|0.0|\n1747526399000||0.00|12.3|\n")]
-    [InlineData("units_row", "Time epoch,Engine speed,Yaw rate,Brake left\rs,rpm,°/s,mm\r1747526398.00,2400,1.00,50.0\r1747526398.50,2370,-2.00,0.0\r1747526399.00,NaN,0.00,12.3\r")]
+    [InlineData("pipe", "unix_time_ms|rpm|gyro_z_dps|brake_left_mm|\n1747526398000|2400|1.00|50.0|\n1747526398500|2370|-2.00|0.0|\n1747526399000||0.00|12.3|\n")]
+    [InlineData("units_row", "Unix time,Engine speed,Yaw rate,Brake left\rs,rpm,°/s,mm\r1747526398.00,2400,1.00,50.0\r1747526398.50,2370,-2.00,0.0\r1747526399.00,NaN,0.00,12.3\r")]
     [InlineData("preamble", "# flight log, made up\n# firmware: 0.0\nsample interval;0.1 s\n\ntime_s,rpm,gyro_z_dps,brake_left_mm\n0.00,2400,1.00,50.0\n0.50,2370,-2.00,0.0\n1.00,-,0.00,12.3\n")]
     [InlineData("long", "time_utc,channel,value\n2025-05-17T23:59:58.000Z,rpm,2400\n2025-05-17T23:59:58.000Z,gyro_z_dps,1.00\n2025-05-17T23:59:58.000Z,brake_left_mm,50.0\n2025-05-17T23:59:58.500Z,rpm,2370\n2025-05-17T23:59:58.500Z,gyro_z_dps,-2.00\n2025-05-17T23:59:58.500Z,brake_left_mm,0.0\n2025-05-17T23:59:59.000Z,gyro_z_dps,0.00\n2025-05-17T23:59:59.000Z,brake_left_mm,12.3\n")]
     public void Dialects_write_what_their_names_say(string name, string text) =>
