@@ -42,8 +42,8 @@ internal sealed record MadeUpFlight
             int leg = (int)(time[i] / LegSec);
             double intoLeg = time[i] - (leg * LegSec);
             double power = Powers[leg];
-            // The last quarter of every leg is a turn by brake, to left and right in turn, so that wind and brake effect can be found.
-            double brake = intoLeg > 0.75 * LegSec ? (leg % 2 == 0 ? 0.2 : -0.2) : 0;
+            // The last quarter of every leg is a turn by brake, twice right for once left, so that the flight goes round and wind and brake effect can be found.
+            double brake = intoLeg > 0.75 * LegSec ? (leg % 3 == 1 ? -0.2 : 0.2) : 0;
             double wanted = (ConstantDegPerSec + (PowerDegPerSec * power) + (BrakeDegPerSec * brake)) * toRad;
             noise += (-noise / NoiseTauSec * Step) + (NoiseDegPerSec * toRad * Math.Sqrt(2 * Step / NoiseTauSec) * random.NextNormal());
             turn += (wanted + noise - turn) / LagSec * Step;
