@@ -14,8 +14,8 @@ internal static class GyroCheck
     /// <summary>A scale is mended when it is off by three standard errors.</summary>
     private const double ScaleErrors = 3;
 
-    /// <summary>What a slowly changing wind (0.3 m/s) leaves in the scale of a flight with a dozen turns, beside the regression's own error: over
-    /// made-up flights the scale scattered by 1.4 % where the regression said 0.8 %.</summary>
+    /// <summary>What a slowly changing wind (0.3 m/s) leaves in the scale of a flight with a dozen turns, beside the regression's own error. With it
+    /// the error stated was 1.2 to 1.7 times the scatter over made-up flights in calm and rough air (DEVELOPERS.md); without, it was too small.</summary>
     private const double SlowWindScaleError = 0.012;
 
     /// <summary>A delay is mended beyond three standard errors and 0.05 s, what brakes and gyro must be aligned to (model page section 2).</summary>
