@@ -24,7 +24,6 @@ internal static class GyroCheck
     /// <summary>A slope counts beyond five standard errors; a scale of no known unit calibrates the gyro when it is known to 3 %.</summary>
     private const double ClearErrors = 5, CalibrationError = 0.03;
 
-
     /// <summary>What came of it.</summary>
     /// <param name="Report">Numbers for people.</param>
     /// <param name="Gyro">The mended rate; empty when the gyro is set aside.</param>
