@@ -14,13 +14,15 @@ internal static class BuiltProgram
     /// <summary>A bundled flight's file.</summary>
     public static string Sample(string name) => Path.Combine(Root, "sample-logs", name);
 
-    /// <summary>Runs the program to its end.</summary>
-    /// <param name="locale">Locale of the person's shell; null leaves the machine's.</param>
+    /// <summary>Runs the program to its end, in a shell with the locale; null leaves the machine's.</summary>
     public static Outcome Run(string? locale, params ReadOnlySpan<string> args)
     {
         var start = new ProcessStartInfo(Executable)
         {
-            RedirectStandardOutput = true, RedirectStandardError = true, StandardOutputEncoding = Encoding.UTF8, StandardErrorEncoding = Encoding.UTF8,
+            RedirectStandardOutput = true,
+            RedirectStandardError = true,
+            StandardOutputEncoding = Encoding.UTF8,
+            StandardErrorEncoding = Encoding.UTF8,
         };
         foreach (string arg in args)
             start.ArgumentList.Add(arg);

@@ -3,6 +3,7 @@ using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 
 namespace TrimFit.Core.Analysis;
 
@@ -19,7 +20,7 @@ public sealed partial record TrimAnalysis
         ArgumentNullException.ThrowIfNull(rig);
         ArgumentNullException.ThrowIfNull(options);
         TurnSignals signals = TurnSignals.From(flight, rig);
-        return Run(signals, new SteadyWindowEstimator().Estimate(signals), rig, options);
+        return Run(signals, new FilterErrorEstimator().Estimate(signals), rig, options, new SteadyWindowEstimator().Estimate(signals));
     }
 
     /// <summary>The same from signals and a fit that are already there.</summary>

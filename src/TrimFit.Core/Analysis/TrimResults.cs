@@ -319,4 +319,8 @@ public enum FindingCode
     ThrustScaleByClimb,
     /// <summary>No full thrust in the rig; this flight's climb gives one in flight: N, its standard error.</summary>
     FullThrustByClimb,
+    /// <summary>The search over the turn's time constants and noise levels did not settle: steps taken.</summary>
+    TurnSearchNotSettled,
+    /// <summary>Measurements of the turn that were out of line with the rest and count less: how many, of how many.</summary>
+    TurnOutliers,
 }

@@ -13,7 +13,7 @@ public readonly record struct StaticState
     public double RiserLoadN { get; init; }
     /// <summary>N: moment about the riser axis, nose right positive.</summary>
     public double YawMomentNm { get; init; }
-    /// <summary>N/k_chi, the sine of the riser twist; beyond ±1 there is no equilibrium.</summary>
+    /// <summary>N over the stiffness k_chi R/W under the riser load R, the sine of the riser twist; beyond ±1 there is no equilibrium.</summary>
     public double TwistSine { get; init; }
     /// <summary>M: roll moment about the CG of the whole, right positive: what turns the wing.</summary>
     public double RollMomentNm { get; init; }
@@ -60,11 +60,14 @@ public static class RigStatics
         double cgOffset = rig.CgOffsetM, signedTorque = rig.RotationSign * torque;
         // y_T is where the thrust line passes the carabiners' station, so a canted axis needs no term of its own about the riser axis.
         double yawMoment = (-thrustN * cos * (rig.ThrustLineOffsetM - cgOffset)) + (signedTorque * sin);
-        double twistSine = yawMoment / rig.TwistStiffness;
+        double twistSine = yawMoment / (rig.TwistStiffness * riserLoad / weight); // a bifilar's stiffness goes with the load it carries
         double sinTwist = Math.Clamp(twistSine, -1, 1);
         double sideways = sinTwist + Math.Sin(rig.CantRad); // the thrust points sideways by twist and cant alike
-        double roll = (weight * cgOffset) - (signedTorque * cos) - ((rig.ThrustDepthM - rig.WholeCgDepthM) * thrustN * sideways);
-        double rollAtCarabiners = (weight * cgOffset) - (signedTorque * cos) + (rig.ThrustAboveCgM * thrustN * sideways);
+        // Square to the risers the weight counts with the riser load; swung back under power, its CG is carried sideways by the twist.
+        double swing = rig.CgDepthM * Math.Sin(hangBack - rig.HangBackRad);
+        double roll = (riserLoad * (cgOffset + (swing * sinTwist))) - (signedTorque * cos);
+        double rollAtCarabiners = roll + (rig.ThrustAboveCgM * thrustN * sideways);
+        roll -= (rig.ThrustDepthM - rig.WholeCgDepthM) * thrustN * sideways;
         return new StaticState
         {
             ThrustN = thrustN,
@@ -90,8 +93,9 @@ public static class RigStatics
         return (state.RollMomentNm + (yawRatio * state.YawMomentNm)) / rig.WeightN;
     }
 
-    /// <summary>The CG offset that balances a torque at hang-back <paramref name="hangBackRad"/>: e = Q cos(th)/W.</summary>
-    /// <remarks>Torque's roll and weight's roll about the carabiners' mid-point cancel. Static; yaw is left out (DEVELOPERS.md, "Torque is a CG offset").</remarks>
+    /// <summary>The CG offset that balances a torque at hang-back <paramref name="hangBackRad"/>: e = Q cos(th)/W, the trade's rule of thumb.</summary>
+    /// <remarks>Torque's roll and weight's roll about the carabiners' mid-point cancel. Yaw and the risers' lean under power are left out:
+    /// <see cref="Solve"/> has both (DEVELOPERS.md, "Torque is a CG offset").</remarks>
     /// <param name="signedTorqueNm">rot Q: positive for a propeller that turns clockwise seen from behind, N·m.</param>
     /// <param name="suspendedKg">Suspended mass, above 0 kg.</param>
     /// <param name="hangBackRad">Hang-back of the thrust axis, rad.</param>

@@ -25,6 +25,9 @@ public sealed record TurnFit
     /// <summary>Lag of the turn behind its cause, s; null when not estimated.</summary>
     public double? LagSec { get; init; }
 
+    /// <summary>Whether the wing was taken to answer with second order (it can swing) rather than first; null when not estimated.</summary>
+    public bool? ResponseIsSecondOrder { get; init; }
+
     /// <summary>Root mean square of the slow disturbance, rad/s; null when not estimated.</summary>
     public double? DisturbanceRmsRadPerSec { get; init; }
 

@@ -12,6 +12,8 @@ public static class WindFit
 
     private const double SampleStepSec = 1;
     private const int FewestFixes = 30, TrimRounds = 3, ArcBins = 36;
+    private const int FewestTurningFixes = 120;
+    private const double RounderShare = 0.7, FullArcRad = 1.8 * Math.PI, TurningRadPerSec = 6 * Math.PI / 180;
     private const double SlowestAirspeed = 3; // m/s: nothing that flies under a wing is slower
 
     /// <summary>Fits the circle.</summary>
@@ -24,6 +26,7 @@ public static class WindFit
     public static Wind? Fit(ReadOnlySpan<double> timeSec, ReadOnlySpan<double> north, ReadOnlySpan<double> east, ReadOnlySpan<bool> use, out double arcRad)
     {
         arcRad = 0;
+        var t = new List<double>();
         var y = new List<double>();
         var x = new List<double>();
         double last = double.NegativeInfinity;
@@ -33,6 +36,7 @@ public static class WindFit
             {
                 y.Add(north[i]);
                 x.Add(east[i]);
+                t.Add(timeSec[i]);
                 last = timeSec[i];
             }
         }
@@ -40,23 +44,16 @@ public static class WindFit
             return null;
 
         double[] xs = [.. x], ys = [.. y];
-        Circle? fitted = null;
-        for (int round = 0; round <= TrimRounds; round++)
+        if (Trimmed(ref xs, ref ys) is not Circle best)
+            return null;
+        // Glides flown faster than the turns pull the circle out of shape: where the turns alone are clearly rounder, they are the circle.
+        bool[] turning = Turning([.. t], [.. x], [.. y], best);
+        double[] turnX = [.. x.Where((_, i) => turning[i])], turnY = [.. y.Where((_, i) => turning[i])];
+        if (turnX.Length >= FewestTurningFixes && Trimmed(ref turnX, ref turnY) is Circle turns && Arc(turnX, turnY, turns) > FullArcRad
+            && NormalConsistentMad.Of(Residuals(turnX, turnY, turns)) < RounderShare * NormalConsistentMad.Of(Residuals(xs, ys, best)))
         {
-            fitted = CircleFit.Taubin(xs, ys);
-            if (fitted is not Circle circle || !(circle.Radius > SlowestAirspeed))
-                return null;
-            double[] residuals = Residuals(xs, ys, circle);
-            double cut = 3 * NormalConsistentMad.Of(residuals);
-            if (round == TrimRounds || !(cut > 0))
-                break;
-            bool[] keep = [.. residuals.Select(r => Math.Abs(r) <= cut)];
-            if (keep.Count(k => k) < FewestFixes)
-                break;
-            xs = [.. xs.Where((_, i) => keep[i])];
-            ys = [.. ys.Where((_, i) => keep[i])];
+            (best, xs, ys) = (turns, turnX, turnY);
         }
-        Circle best = fitted!.Value;
         arcRad = Arc(xs, ys, best);
         if (arcRad < SmallestArcRad)
             return null;
@@ -71,6 +68,33 @@ public static class WindFit
             AirspeedStdError = sdR,
             ArcRad = arcRad,
         };
+    }
+
+    /// <summary>Taubin's circle, refitted without the fixes far from it; null without a circle of a wing's airspeed.</summary>
+    private static Circle? Trimmed(ref double[] x, ref double[] y)
+    {
+        for (int round = 0; ; round++)
+        {
+            if (CircleFit.Taubin(x, y) is not Circle circle || !(circle.Radius > SlowestAirspeed))
+                return null;
+            double[] residuals = Residuals(x, y, circle);
+            double cut = 3 * NormalConsistentMad.Of(residuals);
+            bool[] keep = [.. residuals.Select(r => Math.Abs(r) <= cut)];
+            if (round == TrimRounds || !(cut > 0) || keep.Count(k => k) < FewestFixes)
+                return circle;
+            x = [.. x.Where((_, i) => keep[i])];
+            y = [.. y.Where((_, i) => keep[i])];
+        }
+    }
+
+    /// <summary>Fixes in a turn: the air heading changes by more than <see cref="TurningRadPerSec"/> over the fixes around them.</summary>
+    private static bool[] Turning(double[] time, double[] x, double[] y, Circle c)
+    {
+        double[] heading = Angles.Unwrap([.. x.Select((east, i) => Math.Atan2(east - c.CenterX, y[i] - c.CenterY))]);
+        var turning = new bool[time.Length];
+        for (int i = 3; i + 3 < time.Length; i++)
+            turning[i] = Math.Abs(heading[i + 3] - heading[i - 3]) > TurningRadPerSec * (time[i + 3] - time[i - 3]);
+        return turning;
     }
 
     private static double[] Residuals(double[] x, double[] y, Circle c)

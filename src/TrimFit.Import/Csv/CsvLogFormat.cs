@@ -19,11 +19,11 @@ public sealed class CsvLogFormat : ILogFormat
         CsvHead head = CsvHead.Read(source);
         if (CsvLongRows.Layout(head) is { } layout)
             return ReadLong(source, options, head, layout);
-        CsvPlan plan = CsvPlan.Create(source.Name, head, options);
+        CsvPlan plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
         var rows = new CsvRows(source.Name, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
         {
-            plan = CsvPlan.Create(source.Name, head, options);
+            plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
             rows = new CsvRows(source.Name, head, plan, options.Strict);
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }

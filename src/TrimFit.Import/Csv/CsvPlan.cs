@@ -26,13 +26,18 @@ internal sealed class CsvPlan
     public IReadOnlyList<Notice> Notices => _notices;
 
     /// <summary>Makes the plan.</summary>
+    /// <param name="file">Name of the file, for messages.</param>
+    /// <param name="head">Its head.</param>
+    /// <param name="options">The person's word on columns.</param>
+    /// <param name="isPartOfRecording">Whether the file is one of several of a recording.</param>
     /// <exception cref="LogFormatException">A told column is not there, no column gives the time, or none but the time is known.</exception>
-    public static CsvPlan Create(string file, CsvHead head, ImportOptions options)
+    public static CsvPlan Create(string file, CsvHead head, ImportOptions options, bool isPartOfRecording)
     {
         var plan = new CsvPlan(file, head);
         plan.ApplyRules(options.Columns, options.ColumnsMayBeElsewhere);
         plan.FindByName();
-        plan.FindAxesByFileName();
+        if (!isPartOfRecording) // whoever joins the files of a recording says what their axes are
+            plan.FindAxesByFileName();
         plan.KeepOnePerRole();
         plan.FindTime();
         plan.CheckSample();
@@ -168,6 +173,8 @@ internal sealed class CsvPlan
     private void FindAxesByFileName()
     {
         string key = ColumnNames.Key(Path.GetFileNameWithoutExtension(_file));
+        if (key.Contains("uncalibrated", StringComparison.Ordinal) || key.Contains("linear", StringComparison.Ordinal) || key.Contains("user", StringComparison.Ordinal))
+            return; // raw counts, or acceleration without gravity: not what the roles mean
         ChannelRole? x = key.Contains("gyro", StringComparison.Ordinal) || key.Contains("rotationrate", StringComparison.Ordinal) ? ChannelRole.GyroX
             : key.Contains("accel", StringComparison.Ordinal) ? ChannelRole.AccelerationX : null;
         if (x is null || _head.Names.Length > 12 || Columns.Any(c => c.Role >= ChannelRole.GyroX && c.Role <= ChannelRole.AccelerationZ))

@@ -47,7 +47,7 @@ internal sealed record HeaderName(string Name, LogUnit? Unit, string? UnknownUni
             string name = text[..start].TrimEnd(' ', '_', '-', ':', ',', '/', '.');
             if (name.EndsWith(" in", StringComparison.OrdinalIgnoreCase))
                 name = name[..^3];
-            string unitText = text[start..].TrimStart(' ', '_', '-', ':', ',').Replace(' ', '/').Replace('_', '/');
+            string unitText = UnitWords(text[start..].TrimStart(' ', '_', '-', ':', ','));
             if (LogUnits.TryParse(unitText, out LogUnit unit) && (ColumnNames.TryFind(name, out ColumnName found, out _)
                 ? LogUnits.Fits(found.Role, unit) || OtherRole(found.Role, unit) is not null
                 : unit.Quantity == Quantity.Time && ColumnNames.IsWeekTime(name)))
@@ -57,6 +57,19 @@ internal sealed record HeaderName(string Name, LogUnit? Unit, string? UnknownUni
             end = start;
         }
         return null;
+    }
+
+    // "m s", "rad_s", "RadS": the words of a unit are its quotient.
+    private static string UnitWords(string text)
+    {
+        var unit = new System.Text.StringBuilder(text.Length + 2);
+        for (int i = 0; i < text.Length; i++)
+        {
+            if (i > 0 && char.IsUpper(text[i]) && char.IsLower(text[i - 1]))
+                unit.Append('/');
+            unit.Append(text[i] is ' ' or '_' ? '/' : text[i]);
+        }
+        return unit.ToString();
     }
 
     /// <summary>The role a name has when its unit is of another kind: a "yaw" in deg/s is a yaw rate.</summary>

@@ -306,35 +306,37 @@ internal sealed record EnglishWords : Words
             FindingCode.FullPowerSpeedAssumed => $"Propeller speed at full power is not in the rig file; the largest in the log stands in: {Value(0, n => numbers.Plain(n * 60, 0))} rpm. Give full_power_rpm.",
             FindingCode.ThrottleTakenAsThrust => "There is no throttle table in the rig file, so thrust is taken as proportional to throttle. Give throttle_thrust_percent, or log the rpm.",
             FindingCode.GyroUnitCorrected => $"The gyro's unit did not fit the GPS turns and was corrected by a factor of {Value(0, g => numbers.Significant(g, 3))}. Name the unit: --column yaw_rate=NAME:deg/s.",
-            FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Plain(s, 2))} times the turn of the GPS track and no known unit explains it; "
-                + (Sign(1) != 0 ? "it was calibrated by the GPS. " : "it was set aside. ") + "Check how the logger is mounted and the unit of its yaw rate.",
-            FindingCode.GyroScaleCorrected => $"The gyro reads {Value(0, s => numbers.Plain(s, 2))} ± {Value(1, e => numbers.Plain(1.96 * e, 2))} of the turn of the GPS track and was divided by it"
-                + (Sign(2) > 0 ? $"; a mounting tilted by {Value(2, numbers.Angle)} would explain it." : "."),
-            FindingCode.GyroDelayed => $"The gyro is {Value(0, d => numbers.Plain(d, 2))} ± {Value(1, e => numbers.Plain(1.96 * e, 2))} s behind the GPS and was moved.",
-            FindingCode.GpsDelayed => $"The GPS is {Value(0, d => numbers.Plain(d, 2))} ± {Value(1, e => numbers.Plain(1.96 * e, 2))} s behind the gyro and was moved.",
-            FindingCode.GyroLevelled => $"The gyro's three axes were levelled by gravity; the sensor's z axis is tilted by {Value(0, numbers.Angle)}.",
-            FindingCode.GyroAxisFromGps => $"The gyro's three axes were levelled by the GPS turns; the axis is known to within {Value(0, a => numbers.Angle(1.96 * a))}.",
-            FindingCode.GyroAxisAssumed => $"Nothing shows how the gyro is mounted: its {(Sign(0) switch { 0 => "x", 1 => "y", _ => "z" })} axis is taken to point {(Sign(1) < 0 ? "up" : "down")}. Give the orientation in the rig file's [log].",
-            FindingCode.GyroSlipped => $"The logger moved in its place by {Value(1, numbers.Angle)} at {Value(0, t => numbers.Plain(t, 0))} s; "
-                + (Sign(2) != 0 ? "the gyro was levelled anew." : "the part on one side of it was left out.") + " Fix it better.",
-            FindingCode.GyroLoose => $"The logger was loose ({Value(0, n => numbers.Plain(n, 0))} moves, typically {Value(1, numbers.Angle)}), so its gyro was set aside. Fix it to the frame.",
-            FindingCode.GyroBiasFromStandstill => $"The gyro's zero, {Value(0, b => numbers.Plain(double.RadiansToDegrees(b), 2))} ± {Value(1, e => numbers.Significant(double.RadiansToDegrees(1.96 * e), 1))} deg/s, is taken from {Value(2, numbers.Duration)} of standing still.",
-            FindingCode.BrakesAgainstTurn => $"In {Value(1, numbers.Percent)} of {Value(0, numbers.Duration)} of clear turns the machine turns against the brakes: the brake columns may be swapped, or the wing reverses. Check which column is which.",
-            FindingCode.GpsOutliers => $"GPS fixes that no flight could have flown were left out: {Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))}.",
-            FindingCode.GpsFrozen => $"The GPS repeated its last fix {Value(0, n => numbers.Plain(n, 0))} times, {Value(1, numbers.Duration)} together; the repeats were left out.",
-            FindingCode.ThrottleAgainstRpm => $"Throttle and rpm do not rise together (rank correlation {Value(0, c => numbers.Plain(c, 2))}). Check which column is which, and the sense of the throttle.",
-            FindingCode.TimeJitter => $"The time stamps are uneven: {Value(1, numbers.Percent)} of the steps are off by more than half of the usual {Value(0, t => numbers.Significant(t, 2))} s.",
-            FindingCode.ThrustFromPower => $"Thrust is taken from the motor's power, with {Value(0, w => numbers.Plain(w / 1000, 1))} kW as full power, "
-                + (Sign(1) != 0 ? "the largest in the log." : "as the rig file says."),
-            FindingCode.CurrentTakenAsPower => $"There is a current but no voltage: the current is taken for power, with {Value(0, a => numbers.Plain(a, 0))} A as full. Log the voltage.",
-            FindingCode.ThrustFromMotorCurrent => $"Thrust is taken as proportional to the motor's current, with {Value(0, a => numbers.Plain(a, 0))} A as full.",
-            FindingCode.ClutchEngageAssumed => $"The speed at which the clutch engages is not in the rig file; {Value(0, n => numbers.Plain(n * 60, 0))} rpm is taken from the log's idle. Give clutch_engage_rpm.",
-            FindingCode.ThrustFromClimb => $"Thrust is taken from the climb, good to {Value(0, e => numbers.Force(1.96 * e))} a reading. Log rpm or throttle for a better one.",
-            FindingCode.ThrustScaleByClimb => $"The climb says {Value(0, r => numbers.Plain(r, 2))} ± {Value(1, e => numbers.Plain(1.96 * e, 2))} times the thrust of the rig file"
-                + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is to be expected in flight" : "")
-                + (Sign(3) != 0 ? ": they agree." : ": they do not agree. Check static_thrust_n, masses and the wing's glide sink."),
-            FindingCode.FullThrustByClimb => $"Full thrust is not in the rig file; the climb gives {Value(0, numbers.Force)} ± {Value(1, e => numbers.Force(1.96 * e))} in flight. Give static_thrust_n.",
+            FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Significant(s, 3))} times the turn of the GPS track, which is no unit of a turn rate. "
+                + (Sign(1) > 0 ? "It was calibrated by the GPS." : "The gyro was set aside and the turn taken from the GPS.") + " Check the unit of its yaw rate.",
+            FindingCode.TurnSearchNotSettled => $"The search for the wing's and the air's time constants did not settle in {Value(0, n => numbers.Plain(n, 0))} steps; take the intervals as too narrow.",
+            FindingCode.TurnOutliers => $"{Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))} measurements of the turn are out of line with the rest and count less.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
+            FindingCode.GyroScaleCorrected => $"The gyro shows {Value(0, numbers.Percent)} (± {Value(1, e => numbers.PercentNumber(1.96 * e))}) of the turn of the GPS track"
+                + (Sign(2) > 0 ? $", as one mounted {Value(2, numbers.Angle)} off the vertical would" : "") + "; its readings were divided by that.",
+            FindingCode.GyroDelayed => $"The gyro is {Value(0, d => numbers.Plain(d, 2))} s (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) behind the GPS; it was moved by that.",
+            FindingCode.GpsDelayed => $"The GPS is {Value(0, d => numbers.Plain(d, 2))} s (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) behind the gyro; it was moved by that.",
+            FindingCode.GyroLevelled => $"The gyro's three axes were levelled by gravity; its z axis stands {Value(0, numbers.Angle)} from the vertical on average.",
+            FindingCode.GyroAxisFromGps => $"The log has no gravity to level the gyro's three axes; the axis of the turn was found from the GPS track, to within {Value(0, e => numbers.Angle(1.96 * e))}.",
+            FindingCode.GyroAxisAssumed => $"Neither gravity nor GPS nor compass show how the gyro lies; its {(Sign(0) switch { 0 => "x", 1 => "y", _ => "z" })} axis is taken to point {(Sign(1) < 0 ? "up" : "down")}. Give gyro_orientation in the rig file, or log the accelerometer.",
+            FindingCode.GyroSlipped => $"The logger moved by {Value(1, numbers.Angle)} at {Value(0, t => numbers.Plain(t, 0))} s; "
+                + (Sign(2) > 0 ? "the gyro was levelled anew from there." : "only the longest stretch without a move was used. Log GPS positions, or let it rest for 30 s before the start."),
+            FindingCode.GyroLoose => $"The logger was loose: {(Sign(0) == 1 ? "1 move" : Value(0, n => numbers.Plain(n, 0)) + " moves")} in flight, and its attitude strays by {Value(1, numbers.Angle)}. Its gyro was set aside; strap it to the frame.",
+            FindingCode.GyroBiasFromStandstill => $"The gyro's zero was read while standing still for {Value(2, numbers.Duration)}: {Value(0, b => numbers.Plain(double.RadiansToDegrees(b), 2))} deg/s (± {Value(1, e => numbers.Plain(double.RadiansToDegrees(1.96 * e), 2))}).",
+            FindingCode.BrakesAgainstTurn => $"In {Value(1, numbers.Percent)} of {Value(0, numbers.Duration)} of clear turns the wing turns away from the pulled brake: the brake columns may be swapped, or the wing reverses. Check which column is which.",
+            FindingCode.GpsOutliers => $"GPS fixes that jump as no wing can fly were left out: {Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))}.",
+            FindingCode.GpsFrozen => $"The GPS repeated its last fix {(Sign(0) == 1 ? "once" : Value(0, n => numbers.Plain(n, 0)) + " times")} in flight, for {Value(1, numbers.Duration)} in all; the repeats were left out.",
+            FindingCode.ThrottleAgainstRpm => $"Throttle and rpm do not rise together (rank correlation {Value(0, r => numbers.Plain(r, 2))}); thrust was taken from the rpm. Check the throttle column.",
+            FindingCode.TimeJitter => $"Time stamps are uneven: {Value(1, numbers.Percent)} of the gyro's steps are off by more than half of the usual {Value(0, t => numbers.Plain(1000 * t, 0))} ms. They were used as logged.",
+            FindingCode.ThrustFromPower => $"Thrust was taken from power to the two-thirds, with full power at {Value(0, w => numbers.Plain(w / 1000, 1))} kW, "
+                + (Sign(1) > 0 ? "the largest in the log." : "which follows from the rig file, since the log stays below it."),
+            FindingCode.CurrentTakenAsPower => $"The log has a current without a voltage; it was taken as power at constant voltage, with full power at {Value(0, a => numbers.Plain(a, 0))} A. Log the voltage too.",
+            FindingCode.ThrustFromMotorCurrent => $"Thrust was taken as proportional to motor current, with full power at {Value(0, a => numbers.Plain(a, 0))} A, the largest in the log.",
+            FindingCode.ClutchEngageAssumed => $"The speed at which the clutch engages is not in the rig file; {Value(0, n => numbers.Plain(n * 60, 0))} rpm stands in, a quarter above the idle of the log. Give clutch_engage_rpm.",
+            FindingCode.ThrustFromClimb => $"The log says nothing about the engine, so thrust was taken from climb and glide sink, each reading good to {Value(0, n => numbers.Force(1.96 * n))}. Log rpm or throttle.",
+            FindingCode.ThrustScaleByClimb => $"By its climb the machine has {Value(0, r => numbers.Plain(r, 2))} (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) times the thrust of the rig file"
+                + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is what momentum theory leaves of a static thrust in flight" : "")
+                + (Sign(3) > 0 ? ". The rig file's thrust was used." : ". The rig file's thrust was used, but check it with masses and speeds."),
+            FindingCode.FullThrustByClimb => $"The rig file gives no thrust; by its climb the machine has {Value(0, numbers.Force)} (± {Value(1, e => numbers.Force(1.96 * e))}) in flight at full power. Pull it on a scale and give static_thrust_n.",
             FindingCode.FirstStepTooSmall => $"The first step would be smaller than the {Value(0, m => numbers.Travel(m, unit))} in which this part moves.",
         };
     }

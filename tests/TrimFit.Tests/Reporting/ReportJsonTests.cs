@@ -113,8 +113,13 @@ public class ReportJsonTests
         {
             Sensitivity = new()
             {
-                RadPerSecPerM = double.NaN, Interval95 = new ConfidenceInterval(double.NegativeInfinity, double.PositiveInfinity, 0.95), Conflict = false,
-                EffectiveSamples = double.NaN, YawRatio = double.NaN, YawRatioInterval95 = new(double.NaN, double.NaN, 0.95), Sources = [],
+                RadPerSecPerM = double.NaN,
+                Interval95 = new ConfidenceInterval(double.NegativeInfinity, double.PositiveInfinity, 0.95),
+                Conflict = false,
+                EffectiveSamples = double.NaN,
+                YawRatio = double.NaN,
+                YawRatioInterval95 = new(double.NaN, double.NaN, 0.95),
+                Sources = [],
             },
         };
         string json = ReportJson.Fit(ReportFixture.Report(analysis));

@@ -101,8 +101,16 @@ public partial class ReportPageTests
             Fit = empty,
             Signals = new()
             {
-                TimeSec = [], Thrust = [], ThrustBasis = ThrustBasis.Relative, FullThrust = 1, HasThrust = false, BrakeDifference = [], HasBrakes = false,
-                RotationRatioSquared = [], Use = [], HandsOff = [],
+                TimeSec = [],
+                Thrust = [],
+                ThrustBasis = ThrustBasis.Relative,
+                FullThrust = 1,
+                HasThrust = false,
+                BrakeDifference = [],
+                HasBrakes = false,
+                RotationRatioSquared = [],
+                Use = [],
+                HandsOff = [],
             },
         };
         string page = ReportPage.Fit(ReportFixture.Report(analysis), new());

@@ -10,6 +10,24 @@ namespace TrimFit.Tests.Turns;
 /// <summary>One ordinary made-up flight of about 17 minutes and ways to spoil its sensors.</summary>
 internal static class SensorFlights
 {
+    private static readonly Lazy<SimulatedFlight> _plain = new(() => FlightSimulator.Fly(Ordinary(new SensorSuite { ElectricHz = 5 })));
+    private static readonly Lazy<FlightLog> _truth =
+        new(() => FlightSimulator.Fly(Ordinary(new SensorSuite { GyroNoiseRadPerSec = 0, GyroBiasRadPerSec = 0 })).Log);
+    private static readonly Lazy<FlightLog> _phone =
+        new(() => FlightSimulator.Fly(Ordinary(new SensorSuite { GyroHz = 0, InertialHz = 10, GyroBiasRadPerSec = 0 })).Log);
+
+    /// <summary>The flight with sensors that are right; bias of the gyro 0.6 deg/s.</summary>
+    public static SimulatedFlight Plain => _plain.Value;
+
+    /// <summary>The same motion with a gyro without noise and bias.</summary>
+    public static FlightLog Truth => _truth.Value;
+
+    /// <summary>The same motion with a phone whose axes are those of the frame: three axes of gyro, without bias, and accelerometer.</summary>
+    public static FlightLog Phone => _phone.Value;
+
+    /// <summary>The rig of all of them.</summary>
+    public static Rig Rig { get; } = RigOf(Ordinary(new SensorSuite()));
+
     /// <summary>Standing, take-off, then legs at changing power: hands off, course held, turns both ways.</summary>
     public static Scenario Ordinary(SensorSuite sensors, ulong seed = 11, Func<Scenario, Scenario>? change = null)
     {

@@ -26,8 +26,11 @@ internal static class GyroLevelling
     /// <summary>Such a change is put down to the frame pitching with the power when the power changed then and the angle is no more than this.</summary>
     private static readonly double _powerPitchRad = double.DegreesToRadians(35);
 
+    /// <summary>A change in flight by this much while the power stayed is a slip; less is a new seat, trimmer or accelerator.</summary>
+    private static readonly double _slipRad = double.DegreesToRadians(20);
+
     /// <summary>Without a reading of the power, a change of this much is a slip.</summary>
-    private static readonly double _slipRad = double.DegreesToRadians(35);
+    private static readonly double _slipWithoutPowerRad = double.DegreesToRadians(35);
 
     /// <summary>A sensor whose attitude wanders by this much about its own mean is loose.</summary>
     private static readonly double _looseRad = double.DegreesToRadians(25);
@@ -327,8 +330,8 @@ internal static class GyroLevelling
                     taken[j] = true;
                 cuts.Add(k);
                 (bool flying, double? change) = Around(time, power, inFlight, TimeOf(k));
-                bool byPower = change is double c ? c > PowerChange && angle[k] <= _powerPitchRad : angle[k] <= _slipRad;
-                if (flying && !byPower)
+                double allowed = change is not double c ? _slipWithoutPowerRad : c > PowerChange ? _powerPitchRad : _slipRad;
+                if (flying && angle[k] > allowed)
                     slips.Add((k, angle[k]));
             }
             cuts.Sort();

@@ -1,0 +1,86 @@
+namespace TrimFit.Core.Turns.FilterError;
+
+/// <summary>What a column of the linear part stands for.</summary>
+internal enum ColumnKind
+{
+    Constant,
+    Thrust,
+    ThrustSquared,
+    Brake,
+    Trimmer,
+    GyroBias,
+    GyroRotation,
+    GyroTwist,
+    WindNorth,
+    WindEast,
+    CompassOffset,
+    CompassSine,
+    CompassCosine,
+}
+
+/// <summary>One flight as the filter reads it: steps, held inputs, and one row of numbers for each measurement.</summary>
+/// <remarks>A row has the measurement first and then, for each coefficient, minus what the coefficient adds to the measurement; inputs act
+/// through <see cref="InputRows"/>. Rows are padded with zeros to <see cref="Stride"/>, a multiple of four, so that a kernel can take them
+/// four at a time.</remarks>
+internal sealed class FlightColumns
+{
+    public const byte Gyro = 1, Heading = 2, Compass = 4, Reset = 8;
+
+    public required int Count { get; init; }
+    public required int Stride { get; init; }
+    public required double[] TimeSec { get; init; }
+
+    /// <summary>Index into <see cref="Steps"/> of the step from a row to the next.</summary>
+    public required int[] StepIndex { get; init; }
+
+    /// <summary>The distinct lengths of steps, s.</summary>
+    public required double[] Steps { get; init; }
+
+    public required byte[] Flags { get; init; }
+    public required double[] InputRows { get; init; }
+    public required double[] GyroRows { get; init; }
+    public required double[] HeadingRows { get; init; }
+    public required double[] CompassRows { get; init; }
+
+    /// <summary>Heading given to the state at a reset, rad.</summary>
+    public required double[] StartHeading { get; init; }
+
+    /// <summary>Block of the sandwich a row belongs to.</summary>
+    public required int[] Block { get; init; }
+    public required int Blocks { get; init; }
+
+    public required ColumnKind[] Kinds { get; init; }
+
+    /// <summary>What one unit of the column is in the unit of the result: coefficient = β / scale.</summary>
+    public required double[] Scale { get; init; }
+
+    /// <summary>Standard deviation of the normal prior on each β, mean 0.</summary>
+    public required double[] PriorSd { get; init; }
+
+    public required bool HasGyro { get; init; }
+    public required bool HasHeading { get; init; }
+    public required bool HasCompass { get; init; }
+
+    /// <summary>Bias already taken off the gyro because it was measured standing still, rad/s.</summary>
+    public required double GyroBiasTaken { get; init; }
+
+    /// <summary>Mean number of gyro samples behind one gyro row.</summary>
+    public required double GyroSamplesPerRow { get; init; }
+
+    /// <summary>Mean number of fixes behind one heading row.</summary>
+    public required double HeadingSamplesPerRow { get; init; }
+
+    /// <summary>Measurements in all.</summary>
+    public required int Measurements { get; init; }
+
+    /// <summary>Seconds of flight the rows cover.</summary>
+    public required double UsedSec { get; init; }
+
+    public required bool[] HandsOff { get; init; }
+
+    /// <summary>Number of coefficients.</summary>
+    public int Coefficients => Kinds.Length;
+
+    /// <summary>Position of a column, or -1.</summary>
+    public int IndexOf(ColumnKind kind) => Array.IndexOf(Kinds, kind);
+}

@@ -1,0 +1,126 @@
+using System.Globalization;
+using TrimFit.Core.Statistics;
+using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
+
+namespace TrimFit.SimulationTests;
+
+/// <summary>Estimates over many flights against their truth.</summary>
+internal sealed record CoverageRow
+{
+    public required string Name { get; init; }
+    public required int Flights { get; init; }
+    public required int Missing { get; init; }
+    public required int NotConverged { get; init; }
+    public required QuantityCoverage Level { get; init; }
+    public required QuantityCoverage Slope { get; init; }
+    public required QuantityCoverage Brake { get; init; }
+    public required double SecondOrderRight { get; init; }
+}
+
+/// <summary>How one quantity came out.</summary>
+/// <param name="Covered">Share of flights whose 95 % interval held the truth.</param>
+/// <param name="BiasInErrors">Mean of (estimate − truth)/standard error.</param>
+/// <param name="Rmse">Root mean square error, in the unit of the table.</param>
+/// <param name="RmseKnown">The same with true noise parameters; NaN when not run.</param>
+/// <param name="MedianHalfWidth">Median half-width of the 95 % interval.</param>
+internal sealed record QuantityCoverage(double Covered, double BiasInErrors, double Rmse, double RmseKnown, double MedianHalfWidth);
+
+internal static class CoverageStudy
+{
+
+    /// <summary>Flies and fits; half the flights have a first-order wing, half a second-order one.</summary>
+    public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Func<int, bool>? goOn = null)
+    {
+        var all = new FlightResult?[flights];
+        int done = 0;
+        Parallel.For(0, flights, new ParallelOptions { MaxDegreeOfParallelism = threads }, (i, loop) =>
+        {
+            all[i] = One(sensors, hardship, unchecked((seed * 1_000_003) + i), i % 2 == 1, withKnown);
+            int now = Interlocked.Increment(ref done);
+            if (goOn is not null && !goOn(now))
+                loop.Stop();
+        });
+        FlightResult[] results = [.. all.OfType<FlightResult>()];
+        return new CoverageRow
+        {
+            Name = name,
+            Flights = results.Length,
+            Missing = results.Count(f => f.Level is null || f.Slope is null),
+            NotConverged = results.Count(f => !f.Converged),
+            Level = Summarise(results, f => f.Level, double.RadiansToDegrees(1)),
+            Slope = Summarise(results, f => f.Slope, double.RadiansToDegrees(1)),
+            Brake = Summarise(results, f => f.Brake, double.RadiansToDegrees(1)),
+            SecondOrderRight = results.Average(f => f.OrderRight ? 1.0 : 0.0),
+        };
+    }
+
+    internal sealed record Outcome(double Truth, double Value, double StdError, double HalfWidth, double Known);
+
+    internal sealed record FlightResult(Outcome? Level, Outcome? Slope, Outcome? Brake, bool Converged, bool OrderRight);
+
+    internal static FlightResult One(Sensors sensors, Hardship hardship, int seed, bool secondOrder, bool withKnown)
+    {
+        var random = new Gauss(seed);
+        TurnScenario scenario = TurnScenario.Random(random, secondOrder, sensors, hardship);
+        TurnSignals signals = MadeUpFlight.Fly(scenario, random);
+        var estimator = new FilterErrorEstimator();
+        TurnFit fit = estimator.Estimate(signals);
+        TurnFit? known = withKnown ? estimator.EstimateWith(signals, TrueNoise(scenario)) : null;
+        double t = StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom);
+        return new FlightResult(
+            Of(scenario.PullAt(scenario.LevelShare), fit.PullAt(scenario.LevelThrust), known?.PullAt(scenario.LevelThrust), 1),
+            Of(scenario.SlopePerFull, fit[TurnCoefficient.Thrust], known?[TurnCoefficient.Thrust], scenario.FullThrust),
+            Of(scenario.Brake, fit[TurnCoefficient.BrakeDifference], known?[TurnCoefficient.BrakeDifference], 1),
+            fit.Convergence?.Converged ?? false,
+            fit.ResponseIsSecondOrder == secondOrder);
+
+        Outcome? Of(double truth, Estimate? estimate, Estimate? yardstick, double scale) => estimate is Estimate e
+            ? new(truth, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, yardstick is Estimate y ? y.Value * scale : double.NaN)
+            : null;
+    }
+
+    internal static NoiseParameters TrueNoise(TurnScenario c) => new()
+    {
+        Order = c.SecondOrder ? ResponseOrder.Second : ResponseOrder.First,
+        LagSec = c.LagSec,
+        NaturalFrequency = c.NaturalFrequency,
+        Damping = c.Damping,
+        DisturbanceRms = c.DisturbanceRms,
+        DisturbanceTauSec = c.DisturbanceTau,
+        GyroNoise = c.GyroNoise,
+        HeadingNoise = c.VelocityNoise / c.Airspeed,
+        GustRms = c.GustRms,
+        GustTauSec = c.GustTau,
+    };
+
+    private static QuantityCoverage Summarise(FlightResult[] results, Func<FlightResult, Outcome?> pick, double unit)
+    {
+        Outcome[] all = [.. results.Select(pick).OfType<Outcome>()];
+        if (all.Length == 0)
+            return new(double.NaN, double.NaN, double.NaN, double.NaN, double.NaN);
+        double[] widths = [.. all.Select(o => o.HalfWidth).Order()];
+        return new(
+            all.Average(o => Math.Abs(o.Value - o.Truth) <= o.HalfWidth ? 1.0 : 0.0),
+            all.Average(o => (o.Value - o.Truth) / o.StdError),
+            Math.Sqrt(all.Average(o => (o.Value - o.Truth) * (o.Value - o.Truth))) * unit,
+            Math.Sqrt(all.Average(o => (o.Known - o.Truth) * (o.Known - o.Truth))) * unit,
+            widths[widths.Length / 2] * unit);
+    }
+
+    public const string Header =
+        "| flights | n | level: cover | bias/se | RMSE °/s | vs known | ± °/s | slope: cover | bias/se | RMSE °/s | vs known | ± °/s | brake: cover | bias/se | RMSE °/s | vs known | order right | not settled |\n" +
+        "|---|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|--:|";
+
+    public static string Line(CoverageRow row) => string.Create(CultureInfo.InvariantCulture,
+        $"| {row.Name} | {row.Flights - row.Missing} | {Cells(row.Level, true)} | {Cells(row.Slope, true)} | {Cells(row.Brake, false)} | {100 * row.SecondOrderRight:F0} % | {row.NotConverged} |");
+
+    private static string Cells(QuantityCoverage q, bool width)
+    {
+        if (double.IsNaN(q.Covered))
+            return width ? "– | – | – | – | –" : "– | – | – | –";
+        string known = double.IsNaN(q.RmseKnown) ? "–" : (q.Rmse / q.RmseKnown).ToString("F3", CultureInfo.InvariantCulture);
+        string cells = string.Create(CultureInfo.InvariantCulture, $"{100 * q.Covered:F1} % | {q.BiasInErrors:F3} | {q.Rmse:F3} | {known}");
+        return width ? string.Create(CultureInfo.InvariantCulture, $"{cells} | {q.MedianHalfWidth:F2}") : cells;
+    }
+}

@@ -1,0 +1,70 @@
+using System.Diagnostics;
+using System.Globalization;
+using Xunit.Runner.InProc.SystemConsole;
+
+namespace TrimFit.SimulationTests;
+
+/// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
+/// --minutes for each row); anything else goes to the test runner.</summary>
+internal static class Program
+{
+    public static int Main(string[] args)
+    {
+        if (args.Length > 0 && args[0] == "coverage")
+            return Coverage(args);
+        return args.Any(a => a is "--server" or "--internal-msbuild-node")
+            ? Xunit.MicrosoftTestingPlatform.TestPlatformTestFramework.RunAsync(args, SelfRegisteredExtensions.AddSelfRegisteredExtensions).GetAwaiter().GetResult()
+            : ConsoleRunner.Run(args).GetAwaiter().GetResult();
+    }
+
+    private static int Coverage(string[] args)
+    {
+        int flights = Number("--flights", 2000), threads = Number("--threads", 1), seed = Number("--seed", 1);
+        int hard = Number("--hard", Math.Max(1, flights / 4));
+        double minutes = Number("--minutes", 24 * 60);
+        string only = Text("--only");
+        var rows = new List<(string Name, Sensors Sensors, Hardship Hardship, int Flights)>
+        {
+            ("gyro + GPS", Sensors.GyroAndGps, Hardship.None, flights),
+            ("GPS only, 5 Hz", Sensors.Gps5Hz, Hardship.None, flights),
+            ("GPS only, 1 Hz", Sensors.Gps1Hz, Hardship.None, flights),
+            ("GPS and sheet, no brakes logged", Sensors.Gps5HzAndSheet, Hardship.None, flights),
+            ("telephone: noisy gyro, GPS 1 Hz", Sensors.PhoneGyro, Hardship.None, flights),
+            ("*disturbance on two time scales*", Sensors.GyroAndGps, Hardship.TwoTimeScales, hard),
+            ("*thermals*", Sensors.GyroAndGps, Hardship.Thermals, hard),
+            ("*8 % brake dead band*", Sensors.GyroAndGps, Hardship.BrakeDeadBand, hard),
+            ("*gyro offset 0.8 deg/s with rpm squared*", Sensors.GyroAndGps, Hardship.RotationOffset, hard),
+            ("*frame twist on throttle steps*", Sensors.GyroAndGps, Hardship.FrameTwist, hard),
+            ("*legs held by the pilot*", Sensors.GyroAndGps, Hardship.HeldLegs, hard),
+        };
+        Console.WriteLine(CoverageStudy.Header);
+        foreach ((string name, Sensors sensors, Hardship hardship, int count) in rows)
+        {
+            if (!name.Contains(only, StringComparison.OrdinalIgnoreCase))
+                continue;
+            var clock = Stopwatch.StartNew();
+            bool known = hardship == Hardship.None && sensors != Sensors.PhoneGyro;
+            CoverageRow row = CoverageStudy.Run(name, sensors, hardship, count, seed, known, threads, done =>
+            {
+                if (done % 50 == 0 || done == count)
+                    Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\r{name}: {done}/{count}, {clock.Elapsed.TotalSeconds:F0} s "));
+                return clock.Elapsed.TotalMinutes < minutes;
+            });
+            Console.Error.WriteLine();
+            Console.WriteLine(CoverageStudy.Line(row));
+        }
+        return 0;
+
+        int Number(string option, int otherwise)
+        {
+            string text = Text(option);
+            return text.Length == 0 ? otherwise : int.Parse(text, CultureInfo.InvariantCulture);
+        }
+
+        string Text(string option)
+        {
+            int at = Array.IndexOf(args, option);
+            return at >= 0 && at + 1 < args.Length ? args[at + 1] : "";
+        }
+    }
+}
