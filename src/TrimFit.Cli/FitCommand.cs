@@ -15,7 +15,12 @@ internal static class FitCommand
         if (sheet is (FlightSheet Sheet, SourceFile) given)
         {
             SheetedFlight sheeted = SheetLegs.Apply(import.Flight, given.Sheet);
-            import = new(sheeted.Flight, import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] });
+            import = import with
+            {
+                Flight = sheeted.Flight,
+                Legs = sheeted.Legs,
+                Diagnostics = import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] },
+            };
         }
         TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions);
         var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
