@@ -206,6 +206,29 @@ public class FilterErrorEstimatorTests
     }
 
     [Fact]
+    public void A_dead_band_of_the_brakes_is_found_only_where_there_is_one()
+    {
+        TurnScenario machine = Machine(30) with { DurationSec = 600 };
+        TurnFit without = _estimator.Estimate(MadeUpFlight.Fly(machine, new Gauss(77)));
+        TurnFit with = _estimator.Estimate(MadeUpFlight.Fly(machine with { Hardship = Hardship.BrakeDeadBand }, new Gauss(77)));
+        Assert.Null(without.BrakeDeadBand);
+        Assert.InRange(with.BrakeDeadBand!.Value, 0.05, 0.11); // made with 0.08
+        Holds(machine.Brake, with[TurnCoefficient.BrakeDifference], 4);
+    }
+
+    [Fact]
+    public void A_held_course_shows_as_feedback_and_lone_brake_steps_do_not()
+    {
+        TurnScenario machine = Machine(31) with { DurationSec = 600 };
+        TurnSignals held = MadeUpFlight.Fly(machine with { Hardship = Hardship.HeldLegs }, new Gauss(78));
+        double[] steps = [.. held.TimeSec.Select(t => (t % 40) is > 20 and < 26 ? (t % 80 > 40 ? 0.15 : -0.15) : 0)];
+        double share = _estimator.Estimate(held).BrakeFeedbackShare!.Value;
+        double lone = _estimator.Estimate(Change(held, brakes: steps)).BrakeFeedbackShare!.Value;
+        Assert.True(share > lone + 0.2, FormattableString.Invariant($"held {share:F2}, steps {lone:F2}"));
+        Assert.InRange(lone, 0, 0.35);
+    }
+
+    [Fact]
     public void Nothing_usable_gives_reasons_and_no_numbers()
     {
         TurnSignals s = Flight(16);
