@@ -309,7 +309,7 @@ internal sealed record EnglishWords : Words
             FindingCode.GyroScaleOff => $"The gyro shows {Value(0, s => numbers.Significant(s, 3))} times the turn of the GPS track, which is no unit of a turn rate. "
                 + (Sign(1) > 0 ? "It was calibrated by the GPS." : "The gyro was set aside and the turn taken from the GPS.") + " Check the unit of its yaw rate.",
             FindingCode.TurnSearchNotSettled => $"The search for the wing's and the air's time constants did not settle in {Value(0, n => numbers.Plain(n, 0))} steps; take the intervals as too narrow.",
-            FindingCode.TurnOutliers => $"{Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))} measurements of the turn are out of line with the rest and count less.",
+            FindingCode.TurnOutliers => $"Measurements of the turn that are out of line with the rest count less: {Value(0, n => numbers.Plain(n, 0))} of {Value(1, n => numbers.Plain(n, 0))}.",
             FindingCode.YawSignUnconfirmed => "Neither GPS nor compass confirm which way the yaw rate turns: that right is positive is taken on trust.",
             FindingCode.GyroScaleCorrected => $"The gyro shows {Value(0, numbers.Percent)} (± {Value(1, e => numbers.PercentNumber(1.96 * e))}) of the turn of the GPS track"
                 + (Sign(2) > 0 ? $", as one mounted {Value(2, numbers.Angle)} off the vertical would" : "") + "; its readings were divided by that.",

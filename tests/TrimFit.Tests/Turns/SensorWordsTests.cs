@@ -19,7 +19,7 @@ public class SensorWordsTests
     [InlineData(FindingCode.GyroSlipped, "The logger moved by 57.3 deg at 430 s; only the longest stretch without a move was used. Log GPS positions, or let it rest for 30 s before the start.", 430.0, 1.0, 0.0)]
     [InlineData(FindingCode.GyroLoose, "The logger was loose: 12 moves in flight, and its attitude strays by 28.6 deg. Its gyro was set aside; strap it to the frame.", 12.0, 0.5)]
     [InlineData(FindingCode.BrakesAgainstTurn, "In 97 % of 44 s of clear turns the wing turns away from the pulled brake: the brake columns may be swapped, or the wing reverses. Check which column is which.", 44.0, 0.97)]
-    [InlineData(FindingCode.GpsOutliers, "12 of 3000 GPS fixes jump as no wing can fly; they were left out.", 12.0, 3000.0)]
+    [InlineData(FindingCode.GpsOutliers, "GPS fixes that jump as no wing can fly were left out: 12 of 3000.", 12.0, 3000.0)]
     [InlineData(FindingCode.GpsFrozen, "The GPS repeated its last fix 2 times in flight, for 14 s in all; the repeats were left out.", 2.0, 14.0)]
     [InlineData(FindingCode.ThrottleAgainstRpm, "Throttle and rpm do not rise together (rank correlation -0.91); thrust was taken from the rpm. Check the throttle column.", -0.91)]
     [InlineData(FindingCode.TimeJitter, "Time stamps are uneven: 25 % of the gyro's steps are off by more than half of the usual 100 ms. They were used as logged.", 0.1, 0.25)]

