@@ -19,7 +19,7 @@ internal static class InputFiles
             MustExist(path);
         // The command line speaks before the rig file: a role named there is not looked up again.
         ImmutableArray<ColumnRule> fromRig = machine is null ? [] : [.. machine.Columns.Where(r => !choices.Columns.Any(c => c.Role == r.Role))];
-        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict };
+        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict, Progress = choices.Quiet ? null : ReadingProgress.ForTerminal() };
         return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => FlightReader.Read(LogSources.From(paths), options));
     }
 
