@@ -101,6 +101,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
                         LagSec = lag,
                         DisturbanceTauSec = tau,
                         DisturbanceRms = double.DegreesToRadians(level),
+                        QuickDisturbance = double.DegreesToRadians(0.3 * level),
                         GyroNoise = double.DegreesToRadians(0.4 * level),
                     });
                     double value = first.Evaluate(theta);
@@ -114,7 +115,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             }
         }
         if (best.Length == 0)
-            best = firstLayout.ToVector(new() { Order = ResponseOrder.First, DisturbanceRms = 0.03, DisturbanceTauSec = 8 });
+            best = firstLayout.ToVector(new() { Order = ResponseOrder.First, DisturbanceRms = 0.03, DisturbanceTauSec = 8, QuickDisturbance = 0.005 });
 
         // Gross errors (a gyro spike of 100 deg/s) would otherwise set the noise level of the first search.
         first.Evaluate(best);
@@ -214,7 +215,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         double[] covariance = filter.ConditionalCovariance();
         double variance = covariance[(slope * flight.Coefficients) + slope];
         double size = Math.Sqrt((filter.Coefficients[slope] * filter.Coefficients[slope]) + variance);
-        filter.SetPriorSd(curvature, Math.Max(_options.CurvatureShare * size, 1e-5));
+        filter.SetPriorSd(curvature, double.Hypot(_options.CurvatureShare * size, _options.CurvatureFloorRadPerSec));
     }
 
     private static bool ThrustMoves(TurnSignals s, out double low, out double high)

@@ -11,6 +11,10 @@ public sealed record FilterErrorOptions
     /// <summary>Standard deviation of the curvature's prior, as a share of the slope per full thrust. Default 0.25.</summary>
     public double CurvatureShare { get; init => field = Guard.Positive(value); } = 0.25;
 
+    /// <summary>Curvature that is possible whatever the slope, rad/s at full thrust, added in squares to the share. Default 1.5 deg/s: riser twist
+    /// bends the pull of a machine whose slope is small.</summary>
+    public double CurvatureFloorRadPerSec { get; init => field = Guard.Positive(value); } = double.DegreesToRadians(1.5);
+
     /// <summary>Standardised innovation beyond which a measurement's noise is raised (Chang 2014). Default 3.5: one in 2,000 of clean normal ones.</summary>
     public double OutlierLimit { get; init => field = Guard.Positive(value); } = 3.5;
 

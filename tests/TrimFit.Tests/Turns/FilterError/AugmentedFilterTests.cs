@@ -14,6 +14,7 @@ public class AugmentedFilterTests
         LagSec = 1.3,
         DisturbanceRms = 0.03,
         DisturbanceTauSec = 6,
+        QuickDisturbance = 0.004,
         GyroNoise = 0.012,
         HeadingNoise = 0.03,
         GustRms = 0.05,
@@ -107,6 +108,7 @@ public class AugmentedFilterTests
             a[10] = -1.0 / 6;
             a[12] = 1;
             density[10] = 2 * 0.03 * 0.03 / 6;
+            density[noise.Order == ResponseOrder.First ? 0 : 5] = Math.Pow(0.004 * (noise.Order == ResponseOrder.First ? 1 / 1.3 : 1.44), 2);
             new VanLoan(4).Discretize(a, density, dt, phi, q);
             TurnDynamics d = TurnDynamics.Over(dt, noise);
             double[] expected = [phi[0], phi[1], phi[2], phi[4], phi[5], phi[6], phi[10], phi[12], phi[13], phi[14]];
