@@ -27,6 +27,7 @@ internal static class FitFacts
         (TurnCoefficient.ThrustSquared, ThrustBasis.Newton) => "deg/s per N^2",
         (TurnCoefficient.ThrustSquared, _) => "deg/s per full thrust^2",
         (TurnCoefficient.BrakeDifference, _) => "deg/s per " + ControlUnits.Name(brake),
+        (TurnCoefficient.CgShift, _) => "deg/s per mm",
         (TurnCoefficient.TrimmerDifference, _) => "deg/s per " + ControlUnits.Name(trimmer),
         _ => "deg/s",
     };

@@ -221,6 +221,7 @@ public static class ReportJson
         {
             TurnCoefficient.BrakeDifference => ControlUnits.ShownPerSi(brake),
             TurnCoefficient.TrimmerDifference => ControlUnits.ShownPerSi(trimmer),
+            TurnCoefficient.CgShift => MmPerM,
             _ => 1,
         }))];
 
@@ -230,6 +231,7 @@ public static class ReportJson
         {
             TurnCoefficient.BrakeDifference => ControlUnits.ShownPerSi(brake),
             TurnCoefficient.TrimmerDifference => ControlUnits.ShownPerSi(trimmer),
+            TurnCoefficient.CgShift => MmPerM,
             _ => 1,
         });
         ConfidenceInterval? interval = c.Estimate is Estimate e ? fit.Interval95(e) : null;

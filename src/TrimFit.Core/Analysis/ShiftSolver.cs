@@ -9,13 +9,13 @@ namespace TrimFit.Core.Analysis;
 internal static class ShiftSolver
 {
     /// <summary>First step of a change that nothing has confirmed yet, m (cautions page).</summary>
-    private const double LargestFirstStepM = 0.015;
+    private const double LargestFirstStepM = SafetyFigures.FirstStepMaxM;
 
     /// <summary>A step after which the chance of the wrong side passes this is not advised (model page section 3).</summary>
     private const double LargestWrongSide = 0.10;
 
     /// <summary>Screens of the upper end of |N|/k_chi at full thrust (model page section 1).</summary>
-    private const double TwistCaution = 0.35, TwistWarning = 0.7, TwistRefused = 1;
+    private const double TwistCaution = SafetyFigures.TwistCautionRatio, TwistWarning = SafetyFigures.TwistWarningRatio, TwistRefused = SafetyFigures.TwistRefusedRatio;
 
     /// <summary>Share of draws in which a millimetre may work the other way before the adjustment is not offered (model page section 1).</summary>
     private const double LargestSignShare = 0.025;
@@ -39,7 +39,7 @@ internal static class ShiftSolver
         var powerPart = new double[count];
         for (int k = 0; k < count; k++)
         {
-            shift[k] = -posterior.RateAt(k, levels.Balance) / posterior.Sensitivity[k];
+            shift[k] = -posterior.RateAt(k, posterior.BalanceOf(k, levels)) / posterior.Sensitivity[k];
             constantPart[k] = -posterior.Constant[k] / posterior.Sensitivity[k];
             powerPart[k] = shift[k] - constantPart[k];
         }
@@ -57,10 +57,11 @@ internal static class ShiftSolver
     }
 
     public static ImmutableArray<AdjustmentReport> Adjustments(
-        Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit, bool constantFirst)
+        Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit, bool constantFirst,
+        ImmutableArray<AdjustmentKind> only = default)
     {
         var reports = new List<AdjustmentReport>();
-        foreach (Adjustment adjustment in Adjustment.All.Where(a => a.AppliesTo(rig)))
+        foreach (Adjustment adjustment in Adjustment.All.Where(a => a.AppliesTo(rig) && (only.IsDefault || only.Contains(a.Kind))))
         {
             // No harness hang-point travel for a large constant pull before trimmers, lines and brakes are checked (model page section 2).
             if (constantFirst && adjustment.Kind is (AdjustmentKind.HarnessFront or AdjustmentKind.HarnessFrontRear))
@@ -90,7 +91,8 @@ internal static class ShiftSolver
         {
             if (!(posterior.Weight[k] > 0))
                 continue;
-            (travel[k], double gain) = effect.Null(k, levels.Balance, posterior.RateAt(k, levels.Balance));
+            double balance = posterior.BalanceOf(k, levels);
+            (travel[k], double gain) = effect.Null(k, balance, posterior.RateAt(k, balance));
             total += posterior.Weight[k];
             positive += gain > 0 ? posterior.Weight[k] : 0;
         }
@@ -104,7 +106,7 @@ internal static class ShiftSolver
         double sign = Math.Sign(median);
         // The step after which the chance of having gone past the null is 10 %.
         double safe = WeightedQuantile.Of([.. travel.Select(d => d * sign)], posterior.Weight, LargestWrongSide);
-        double first = Math.Min(Math.Abs(median) / 2, Math.Max(0, safe));
+        double first = Math.Min(SafetyFigures.FirstStepShare * Math.Abs(median), Math.Max(0, safe));
         if (adjustment.Unit == TravelUnit.Meter)
             first = Math.Min(first, LargestFirstStepM);
         first = sign * Math.Floor((first / step) + 1e-9) * step;

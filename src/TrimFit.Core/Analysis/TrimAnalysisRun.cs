@@ -14,12 +14,13 @@ public sealed partial record TrimAnalysis
     /// <param name="flight">The flight.</param>
     /// <param name="rig">The rig.</param>
     /// <param name="options">Balance thrust, tolerance, seed.</param>
-    public static TrimAnalysis Run(FlightLog flight, Rig rig, TrimOptions options)
+    /// <param name="legs">Legs of the pilot's sheet with their places in the flight; none without a sheet.</param>
+    public static TrimAnalysis Run(FlightLog flight, Rig rig, TrimOptions options, params ReadOnlySpan<FoundLeg> legs)
     {
         ArgumentNullException.ThrowIfNull(flight);
         ArgumentNullException.ThrowIfNull(rig);
         ArgumentNullException.ThrowIfNull(options);
-        TurnSignals signals = TurnSignals.From(flight, rig);
+        TurnSignals signals = TurnSignals.From(flight, rig, legs);
         return Run(signals, new FilterErrorEstimator().Estimate(signals), rig, options, new SteadyWindowEstimator().Estimate(signals));
     }
 
@@ -37,7 +38,7 @@ public sealed partial record TrimAnalysis
         if (signals.HasThrust && levels.CruiseBasis == CruiseBasis.Assumed)
             warnings.Add(Finding.Of(FindingCode.CruiseAssumed, levels.Cruise));
         PullReport pull = PullOf(signals, fit, levels);
-        TrimPosterior posterior = TrimPosterior.Draw(rig, spread, fit, signals.FullThrust, options);
+        TrimPosterior posterior = TrimPosterior.Draw(rig, spread, fit, signals, options);
         warnings.AddRange(posterior.Findings);
         warnings.AddRange(spread.Propulsion.Findings(rig));
         if (ClimbThrust.Check(signals, rig, spread.Propulsion) is Finding climb)

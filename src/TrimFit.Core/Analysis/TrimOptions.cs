@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using TrimFit.Core.Units;
 
 namespace TrimFit.Core.Analysis;
@@ -10,6 +11,9 @@ public sealed record TrimOptions
 
     /// <summary>Turn rate that counts as no pull; default 1 deg/s.</summary>
     public AngularRate Tolerance { get; init => field = AngularRate.FromRadPerSec(Guard.Positive(value.RadPerSec)); } = AngularRate.FromDegPerSec(1);
+
+    /// <summary>Other flights of the same machine with a part moved by a known amount; none by default.</summary>
+    public ImmutableArray<KnownChange> KnownChanges { get; init => field = value.IsDefault ? [] : value; } = [];
 
     /// <summary>Seed of the posterior's draws; the same seed gives the same result.</summary>
     public ulong Seed { get; init; } = 1;

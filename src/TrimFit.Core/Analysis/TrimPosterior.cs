@@ -5,10 +5,11 @@ using TrimFit.Core.Turns;
 
 namespace TrimFit.Core.Analysis;
 
-/// <summary>Draws of everything the answer depends on, weighted by how well each explains the flight's growth of turn with thrust.</summary>
-/// <remarks>Importance sampling of model page section 3: each draw has a rig, a yaw ratio and a sensitivity from their priors; its weight is
-/// the likelihood of the fitted (thrust, thrust_squared). Sensitivity enters through a = S · model error, drawn from half its prior, half the
-/// likelihood's own normal in a, and weighted by prior × likelihood over that mixture. Then the constant comes from its conditional.</remarks>
+/// <summary>Draws of everything the answer depends on, weighted by how well each explains what the flight shows.</summary>
+/// <remarks>Importance sampling (DEVELOPERS.md, "Sensitivity"): each draw has a rig, a yaw ratio and turn coefficients. Each source j of the
+/// sensitivity (torque through the fitted growth, a ballast leg, another flight) sees a_j = S times its own model error; a_j is drawn half from
+/// its prior and half from the likelihood's own normal, and weighted by prior × likelihood over that mixture. The a's together are log-normal
+/// around S, so S comes from its exact conditional. With torque the constant comes from its conditional on slope and curvature.</remarks>
 internal sealed class TrimPosterior
 {
     /// <summary>Prior of the sensitivity: 0.09 deg/s per mm, times or over 3 at 95 % (model page section 3).</summary>
@@ -25,6 +26,9 @@ internal sealed class TrimPosterior
     /// <summary>Gates of the torque source (model page section 3).</summary>
     private const double SameSignShare = 0.975, PositiveShare = 0.995, LargestLogSd = 0.5;
 
+    /// <summary>Fewer effective draws than this make no interval.</summary>
+    private const double FewestEffective = 50;
+
     /// <summary>A prior-predictive p below this is a conflict (model page section 3).</summary>
     private const double ConflictP = 0.05;
 
@@ -37,6 +41,7 @@ internal sealed class TrimPosterior
         Slope = new double[count];
         Curvature = new double[count];
         Weight = new double[count];
+        BalanceError = new double[count];
     }
 
     public RigValues[] Rigs { get; }
@@ -47,21 +52,37 @@ internal sealed class TrimPosterior
     public double[] Slope { get; }
     public double[] Curvature { get; }
     public double[] Weight { get; }
+    /// <summary>Standard normal of each draw for the thrust of level flight.</summary>
+    public double[] BalanceError { get; }
     public required SensitivityReport Report { get; init; }
     public required ImmutableArray<Finding> Findings { get; init; }
     /// <summary>Share of draws in which the rig predicts a slope to the right.</summary>
     public required double PredictsRightShare { get; init; }
     public required bool TorqueUsed { get; init; }
+    /// <summary>Whether a ballast leg or another flight took part.</summary>
+    public required bool DirectUsed { get; init; }
     public int Count => Weight.Length;
+
+    /// <summary>The balance thrust of a draw, fraction of full: level flight is known to its standard error only.</summary>
+    public double BalanceOf(int draw, PowerLevels levels) => Math.Max(0, levels.Balance + (levels.BalanceStdError * BalanceError[draw]));
 
     /// <summary>Turn rate of a draw at a fraction of full thrust, brakes even, rad/s.</summary>
     public double RateAt(int draw, double fraction) => Constant[draw] + (Slope[draw] * fraction) + (Curvature[draw] * fraction * fraction);
 
-    public static TrimPosterior Draw(Rig rig, RigSpread spread, TurnFit fit, double fullThrust, TrimOptions options)
+    /// <summary>Draws the posterior.</summary>
+    /// <param name="rig">The rig.</param>
+    /// <param name="spread">Its spreads.</param>
+    /// <param name="fit">The turn model of the flight.</param>
+    /// <param name="signals">The flight: full thrust, and the thrust of ballast legs.</param>
+    /// <param name="options">Draws, seed, other flights.</param>
+    /// <param name="allowed">Sources that may enter.</param>
+    public static TrimPosterior Draw(
+        Rig rig, RigSpread spread, TurnFit fit, TurnSignals signals, TrimOptions options, SensitivitySources allowed = SensitivitySources.All)
     {
         int count = options.Draws;
         var random = new SeededRandom(options.Seed);
-        Coefficients c = Coefficients.From(fit, fullThrust);
+        var c = new FitDraws(fit, signals.FullThrust);
+        List<SensitivityEvidence> direct = SensitivityEvidence.Of(c, signals, options, allowed);
         double userLogSd = 0, userMedian = 0;
         if (rig.Wing.SensitivityRadPerSecPerM is Reading user)
         {
@@ -83,7 +104,7 @@ internal sealed class TrimPosterior
         }
         double right = g1.Count(g => g > 0) / (double)count;
 
-        // Torque by itself: S = slope / growth, both drawn.
+        // Each source by itself: S = what was measured / what a unit of S would do, both drawn.
         var alone = new double[count];
         int sameSlope = 0, positive = 0;
         double slopeSign = Math.Sign(c.Slope);
@@ -97,87 +118,138 @@ internal sealed class TrimPosterior
                 positive++;
         }
         double sameGrowth = Math.Max(right, 1 - right);
-        double[] logs = [.. alone.Where(s => s > 0).Select(s => Math.Log(s))];
-        double torqueLogSd = logs.Length > 1 ? (QuantileType7.Of(logs, 0.975) - QuantileType7.Of(logs, 0.025)) / (2 * 1.96) : double.PositiveInfinity;
+        SourceAlone torqueAlone = SourceAlone.Of("torque", alone);
         bool plausible = spread.Propulsion.Plausible && rig.Propeller.RotationSign != 0;
         int gate = !c.SlopeKnown || !plausible ? 0
             : sameSlope < SameSignShare * count || sameGrowth < SameSignShare ? 1
             : positive < PositiveShare * count ? 2
-            : !(torqueLogSd < LargestLogSd) ? 3 : 4;
-        bool torque = gate == 4;
+            : !(torqueAlone.LogSd < LargestLogSd) ? 3 : 4;
+        bool torque = gate == 4 && allowed.HasFlag(SensitivitySources.Torque);
+        var directAlone = new List<SourceAlone>();
+        foreach (SensitivityEvidence evidence in direct)
+        {
+            var values = new double[count];
+            for (int k = 0; k < count; k++)
+            {
+                (double constant, double slope, double curvature) = c.Draw(random);
+                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature);
+                values[k] = (best + (double.IsFinite(sd) ? sd * random.NextNormal() : 0)) * Math.Exp(ModelErrorLogSd * random.NextNormal());
+            }
+            directAlone.Add(SourceAlone.Of(evidence.Kind, values));
+        }
 
-        var weight = new double[count];
+        var logWeight = new double[count];
         var sensitivity = new double[count];
         var slopes = new double[count];
         var curvatures = new double[count];
         var constants = new double[count];
+        var balanceError = new double[count];
         double combinedSd = Math.Sqrt((logSd * logSd) + (ModelErrorLogSd * ModelErrorLogSd));
-        double shrink = logSd * logSd / (combinedSd * combinedSd);
-        double predictiveBelow = 0;
-        double curvatureBelow = 0;
+        double predictiveBelow = 0, curvatureBelow = 0;
+        Span<double> logs = stackalloc double[direct.Count + 1];
         for (int k = 0; k < count; k++)
         {
+            int used = 0;
+            logWeight[k] = 0;
             if (torque)
             {
                 (double best, double sd) = c.BestFactor(g1[k], g2[k]);
-                double wide = 1.2 * sd; // heavier than the likelihood, so that weights stay bounded
-                bool mix = best > 0;
-                double a = mix && random.NextDouble() < 0.5 ? best + (wide * random.NextNormal()) : Math.Exp(logMedian + (combinedSd * random.NextNormal()));
-                if (!(a > 0))
-                {
-                    weight[k] = 0;
-                    sensitivity[k] = Math.Exp(logMedian);
-                    slopes[k] = c.Slope;
-                    curvatures[k] = c.Curvature;
-                    constants[k] = c.Constant;
-                    continue;
-                }
-                double prior = LogNormalDensity(a, logMedian, combinedSd);
-                double proposal = mix ? (0.5 * prior) + (0.5 * NormalDensity(a, best, wide)) : prior;
-                weight[k] = prior * c.Likelihood(a * g1[k], a * g2[k]) / proposal;
-                // a = S times the model error: S given a, both log-normal.
-                double logS = logMedian + (shrink * (Math.Log(a) - logMedian)) + (logSd * Math.Sqrt(1 - shrink) * random.NextNormal());
-                sensitivity[k] = Math.Exp(logS);
+                double a = DrawFactor(best, sd, out double logProposal);
                 slopes[k] = a * g1[k];
                 curvatures[k] = a * g2[k];
                 constants[k] = c.ConstantGiven(slopes[k], curvatures[k], random.NextNormal());
+                if (a > 0)
+                {
+                    logWeight[k] += c.LogLikelihood(slopes[k], curvatures[k]) - logProposal;
+                    logs[used++] = Math.Log(a);
+                }
+                else
+                {
+                    logWeight[k] = double.NegativeInfinity;
+                }
             }
             else
             {
-                weight[k] = 1;
-                sensitivity[k] = Math.Exp(logMedian + (logSd * random.NextNormal()));
                 (constants[k], slopes[k], curvatures[k]) = c.Draw(random);
             }
+            foreach (SensitivityEvidence evidence in direct)
+            {
+                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k]);
+                double a = DrawFactor(best, sd, out double logProposal);
+                if (a > 0 && double.IsFinite(logWeight[k]))
+                {
+                    double z = double.IsFinite(sd) ? (a - best) / sd : 0;
+                    logWeight[k] += peak - (0.5 * z * z) - logProposal;
+                    logs[used++] = Math.Log(a);
+                }
+                else
+                {
+                    logWeight[k] = double.NegativeInfinity;
+                }
+            }
+            if (!double.IsFinite(logWeight[k]))
+                used = 0;
+            logWeight[k] += LogPriorOf(logs[..used], logMedian, logSd);
+            // S given the a's: precisions add.
+            double precision = (1 / (logSd * logSd)) + (used / (ModelErrorLogSd * ModelErrorLogSd));
+            double mean = logMedian / (logSd * logSd);
+            for (int i = 0; i < used; i++)
+                mean += logs[i] / (ModelErrorLogSd * ModelErrorLogSd);
+            sensitivity[k] = Math.Exp((mean / precision) + (random.NextNormal() / Math.Sqrt(precision)));
+            balanceError[k] = random.NextNormal();
+
             double predicted = Math.Exp(logMedian + (combinedSd * random.NextNormal()));
             (double noiseSlope, double noiseCurvature) = c.Noise(random);
             if ((predicted * g1[k]) + noiseSlope <= c.Slope)
                 predictiveBelow++;
-            if ((predicted * g2[k]) + noiseCurvature <= c.Curvature)
+            if ((predicted * g2[k] * c.CurvatureShrink) + noiseCurvature <= c.Curvature)
                 curvatureBelow++;
+
+            // Half from the prior, half from the likelihood's own normal; wider than it, so that weights stay bounded.
+            double DrawFactor(double best, double sd, out double logProposal)
+            {
+                double wide = 1.2 * sd;
+                bool mix = best > 0 && double.IsFinite(wide);
+                double a = mix && random.NextDouble() < 0.5 ? best + (wide * random.NextNormal()) : Math.Exp(logMedian + (combinedSd * random.NextNormal()));
+                logProposal = 0;
+                if (a > 0)
+                {
+                    double prior = LogNormalDensity(a, logMedian, combinedSd);
+                    logProposal = Math.Log(mix ? (0.5 * prior) + (0.5 * NormalDensity(a, best, wide)) : prior);
+                }
+                return a;
+            }
         }
+        double[] weight = Normalised(logWeight);
         double p = Math.Min(1, 2 * Math.Min(TwoSided(predictiveBelow / count), TwoSided(curvatureBelow / count))); // two looks: Bonferroni
         double effective = EffectiveSamples.Kish(weight);
-        bool enough = !torque || effective > 50;
+        bool enough = (!torque && direct.Count == 0) || effective > FewestEffective;
         var findings = ImmutableArray.CreateBuilder<Finding>();
-        if (c.SlopeKnown && plausible && !torque)
+        if (c.SlopeKnown && plausible && !torque && allowed.HasFlag(SensitivitySources.Torque))
             findings.Add(Finding.Of(FindingCode.TorqueNotUsed, gate));
         bool conflict = torque && p < ConflictP;
         if (conflict)
-            findings.Add(Finding.Of(FindingCode.SensitivityConflict, p));
+            findings.Add(Finding.Of(FindingCode.SensitivityConflict, p, c.Slope / (Math.Exp(logMedian) * QuantileType7.Of(g1, 0.5))));
+        var settled = new SourceAlone("prior", Math.Exp(logMedian), logSd, 1, new ConfidenceInterval());
+        SourceAlone[] together = [settled, .. torque ? [torqueAlone] : Array.Empty<SourceAlone>(), .. directAlone];
+        foreach ((SourceAlone first, SourceAlone second, double clash) in SourceAlone.Clashes(together, ConflictP))
+        {
+            conflict = true;
+            findings.Add(Finding.Of(FindingCode.SourcesConflict, SourceAlone.IndexOf(first.Kind), SourceAlone.IndexOf(second.Kind), second.Median / first.Median, clash));
+        }
 
         var sources = ImmutableArray.CreateBuilder<SensitivitySource>();
         sources.Add(LogNormalSource("prior", Math.Log(PriorMedian), PriorLogSd, used: true));
         if (userMedian > 0)
             sources.Add(LogNormalSource("user", Math.Log(userMedian), userLogSd, used: true));
-        if (c.SlopeKnown && plausible && logs.Length > count / 2)
-        {
-            sources.Add(new("torque", QuantileType7.Of(alone, 0.5),
-                new ConfidenceInterval(QuantileType7.Of(alone, 0.025), QuantileType7.Of(alone, 0.975), 0.95), torque));
-        }
+        if (c.SlopeKnown && plausible && positive > count / 2)
+            sources.Add(new("torque", torqueAlone.Median, torqueAlone.Interval95, torque));
+        sources.AddRange(directAlone.Select(d => new SensitivitySource(d.Kind, d.Median, d.Interval95, true)));
         var posterior = new TrimPosterior(count)
         {
             PredictsRightShare = right,
             TorqueUsed = torque,
+            DirectUsed = direct.Count > 0,
             Findings = findings.ToImmutable(),
             Report = new SensitivityReport
             {
@@ -198,7 +270,29 @@ internal sealed class TrimPosterior
         slopes.CopyTo(posterior.Slope, 0);
         curvatures.CopyTo(posterior.Curvature, 0);
         weight.CopyTo(posterior.Weight, 0);
+        balanceError.CopyTo(posterior.BalanceError, 0);
         return posterior;
+    }
+
+    /// <summary>Logarithm of the joint prior density of the a's: log a_j = log S + its model error, S log-normal.</summary>
+    private static double LogPriorOf(ReadOnlySpan<double> logs, double logMedian, double logSd)
+    {
+        double sum = 0, squares = 0, jacobian = 0, tau = ModelErrorLogSd * ModelErrorLogSd;
+        foreach (double log in logs)
+        {
+            double d = log - logMedian;
+            sum += d;
+            squares += d * d;
+            jacobian += log;
+        }
+        return (-0.5 * (squares - (sum * sum / (logs.Length + (tau / (logSd * logSd))))) / tau) - jacobian;
+    }
+
+    /// <summary>Weights from their logarithms, the largest 1; all alike when none is finite.</summary>
+    private static double[] Normalised(double[] logWeight)
+    {
+        double largest = logWeight.Max();
+        return double.IsFinite(largest) ? [.. logWeight.Select(w => Math.Exp(w - largest))] : [.. logWeight.Select(_ => 1.0)];
     }
 
     /// <summary>95 % interval of a weighted sample.</summary>
@@ -236,90 +330,4 @@ internal sealed class TrimPosterior
     }
 
     private static double TwoSided(double below) => 2 * Math.Min(below, 1 - below);
-
-    /// <summary>The fit's coefficients over x = T/T_full, with a covariance widened so that a normal has the t interval's width.</summary>
-    private sealed class Coefficients
-    {
-        private double _c00, _c01, _c02, _c11, _c12, _c22;
-        private double _i11, _i12, _i22;
-
-        private Coefficients()
-        {
-        }
-
-        public double Constant { get; private init; }
-        /// <summary>Per full thrust.</summary>
-        public double Slope { get; private init; }
-        public double Curvature { get; private init; }
-        public bool SlopeKnown { get; private init; }
-        public double SlopeSd => Math.Sqrt(_c11);
-
-        public static Coefficients From(TurnFit fit, double fullThrust)
-        {
-            bool known = fit[TurnCoefficient.Constant] is not null && fit[TurnCoefficient.Thrust] is not null;
-            int n = fit.Coefficients.Length;
-            double unit = fullThrust, square = fullThrust * fullThrust;
-            double widen = StudentT.Quantile(0.975, fit.DegreesOfFreedom) / 1.959963984540054;
-            widen *= widen;
-            var c = new Coefficients
-            {
-                Constant = fit[TurnCoefficient.Constant]?.Value ?? 0,
-                Slope = (fit[TurnCoefficient.Thrust]?.Value ?? 0) * unit,
-                Curvature = (fit[TurnCoefficient.ThrustSquared]?.Value ?? 0) * square,
-                SlopeKnown = known,
-                _c00 = fit.Covariance[0] * widen,
-                _c01 = fit.Covariance[1] * unit * widen,
-                _c02 = fit.Covariance[2] * square * widen,
-                _c11 = fit.Covariance[n + 1] * unit * unit * widen,
-                _c12 = fit.Covariance[n + 2] * unit * square * widen,
-                _c22 = fit.Covariance[(2 * n) + 2] * square * square * widen,
-            };
-            double tiny = 1e-12 + (1e-9 * c._c11); // a curvature that was not fitted has no variance; keep the inverse finite
-            double a = c._c11 + tiny, b = c._c12, d = c._c22 + tiny, determinant = (a * d) - (b * b);
-            if (!(determinant > 1e-12 * a * d))
-            {
-                b *= 0.999;
-                determinant = (a * d) - (b * b);
-            }
-            (c._i11, c._i12, c._i22) = (d / determinant, -b / determinant, a / determinant);
-            return c;
-        }
-
-        /// <summary>Best factor a for (slope, curvature) = a (g1, g2), and its standard deviation.</summary>
-        public (double Best, double Sd) BestFactor(double g1, double g2)
-        {
-            double information = (g1 * g1 * _i11) + (2 * g1 * g2 * _i12) + (g2 * g2 * _i22);
-            double score = (g1 * ((_i11 * Slope) + (_i12 * Curvature))) + (g2 * ((_i12 * Slope) + (_i22 * Curvature)));
-            return information > 0 ? (score / information, 1 / Math.Sqrt(information)) : (0, double.PositiveInfinity);
-        }
-
-        public double Likelihood(double slope, double curvature)
-        {
-            double d1 = Slope - slope, d2 = Curvature - curvature;
-            return Math.Exp(-0.5 * ((d1 * d1 * _i11) + (2 * d1 * d2 * _i12) + (d2 * d2 * _i22)));
-        }
-
-        /// <summary>The constant from its conditional given slope and curvature per full thrust.</summary>
-        public double ConstantGiven(double slope, double curvature, double standardNormal)
-        {
-            double w1 = (_c01 * _i11) + (_c02 * _i12), w2 = (_c01 * _i12) + (_c02 * _i22);
-            double variance = Math.Max(0, _c00 - ((w1 * _c01) + (w2 * _c02)));
-            return Constant + (w1 * (slope - Slope)) + (w2 * (curvature - Curvature)) + (Math.Sqrt(variance) * standardNormal);
-        }
-
-        public (double Slope, double Curvature) Noise(SeededRandom random)
-        {
-            double sd1 = Math.Sqrt(_c11), z1 = random.NextNormal(), z2 = random.NextNormal();
-            double b = sd1 > 0 ? _c12 / sd1 : 0;
-            return (sd1 * z1, (b * z1) + (Math.Sqrt(Math.Max(0, _c22 - (b * b))) * z2));
-        }
-
-        public (double Constant, double Slope, double Curvature) Draw(SeededRandom random)
-        {
-            (double slope, double curvature) = Noise(random);
-            slope += Slope;
-            curvature += Curvature;
-            return (ConstantGiven(slope, curvature, random.NextNormal()), slope, curvature);
-        }
-    }
 }

@@ -215,8 +215,10 @@ public enum FindingCode
     BalanceThrustNotFlown,
     /// <summary>Slope against the rig's prediction: slope sign, share of draws predicting the other sign.</summary>
     RotationConflict,
-    /// <summary>The torque source does not fit the slope: prior-predictive p.</summary>
+    /// <summary>The torque source does not fit the slope: prior-predictive p, slope over what the torque explains.</summary>
     SensitivityConflict,
+    /// <summary>Two sources of the sensitivity contradict each other: their numbers (0 prior, 1 torque, 2 ballast, 3 pair, 4 user), second over first, p.</summary>
+    SourcesConflict,
     /// <summary>No steering logged and no hands-off spans declared.</summary>
     NoSteeringNoHandsOff,
     /// <summary>Brakes seem swapped or the wing reverses: brake coefficient, rad/s per unit.</summary>

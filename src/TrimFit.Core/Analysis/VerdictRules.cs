@@ -9,10 +9,10 @@ namespace TrimFit.Core.Analysis;
 internal static class VerdictRules
 {
     /// <summary>A constant pull that answers to more than this is looked for in trimmers, lines and brakes first, m (model page section 2).</summary>
-    public const double LargestConstantPartM = 0.015;
+    public const double LargestConstantPartM = SafetyFigures.ConstantPartFirstM;
 
     /// <summary>A pull beyond this is not for another test flight, rad/s (cautions page).</summary>
-    public static readonly double StrongPullRadPerSec = double.DegreesToRadians(6);
+    public static readonly double StrongPullRadPerSec = SafetyFigures.StrongPull.RadPerSec;
 
     private const double DirectionShare = 0.975, PredictionShare = 0.95, FairHalfWidth = 0.5, DeclaredOffsetShare = 0.5;
 
@@ -65,7 +65,7 @@ internal static class VerdictRules
             return new(VerdictCode.Balanced, reasons.ToImmutable(), ShiftAllowed: true, TravelAllowed: false);
         if (posterior.Report.Conflict)
         {
-            reasons.Add(Finding.Of(FindingCode.SensitivityConflict, posterior.Report.PriorPredictiveP ?? 0));
+            reasons.AddRange(posterior.Findings.Where(f => f.Code is FindingCode.SensitivityConflict or FindingCode.SourcesConflict));
             return Insufficient(reasons);
         }
 

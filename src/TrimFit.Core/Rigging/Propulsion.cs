@@ -56,7 +56,7 @@ public sealed record Propulsion
         double area = Math.PI * diameter * diameter / 4;
         double figureOfMerit = propeller.FigureOfMerit.Value;
         double figureOfMeritRelativeSd = propeller.FigureOfMerit.StandardDeviation / figureOfMerit;
-        double weight = Masses(rig) * PhysicalConstants.StandardGravity;
+        double weight = RigSpread.SuspendedKg(rig) * PhysicalConstants.StandardGravity;
 
         double thrust, thrustRelativeSd;
         bool thrustKnown = true;
@@ -126,7 +126,4 @@ public sealed record Propulsion
         if (!TorqueGiven && rig.Propeller.RotationSign != 0)
             yield return Of("torque_at_full_power_nm", FullTorqueNm, TorqueArmRelativeSd, "N m");
     }
-
-    private static double Masses(Rig rig) => rig.Mass.PilotKg.Value + rig.Mass.PassengerKg.Value + rig.Mass.PowerUnitKg.Value
-        + rig.Mass.FuelKg.Value + rig.Mass.WheelsKg.Value;
 }

@@ -38,6 +38,10 @@ public sealed class RigSpread
         return Build(reading => reading.Value + (reading.StandardDeviation * random.NextNormal()), thrust, torque / thrust, stiffnessFactor, hangCheckError);
     }
 
+    /// <summary>Everything suspended, kg.</summary>
+    internal static double SuspendedKg(Rig rig) => rig.Mass.PilotKg.Value + rig.Mass.PassengerKg.Value + rig.Mass.PowerUnitKg.Value
+        + rig.Mass.FuelKg.Value + rig.Mass.WheelsKg.Value;
+
     private double StiffnessLogSd => _rig.Wing.YawStiffnessNmPerRad is Reading k
         ? Math.Max(k.StandardDeviation / k.Value, 0.05)
         : _rig.Wing.LineSpreadM is null ? Math.Log(UsualStiffnessFactor95) / 1.96 : 0.15;

@@ -20,7 +20,7 @@ internal static class SteadyWindows
     /// <summary>A pause between samples longer than this ends a window, s.</summary>
     private const double LongestPauseSec = 2;
 
-    /// <summary>Windows in time order; <see cref="SteadyWindow.Segment"/> changes wherever two windows do not follow each other closely.</summary>
+    /// <summary>Windows in time order, legs of a shifted CG left out; <see cref="SteadyWindow.Segment"/> changes wherever two windows do not follow each other closely.</summary>
     /// <param name="signals">The flight.</param>
     /// <param name="turnRate">Turn angle source: <c>(first, last) → mean turn rate, NaN when it cannot be told</c>.</param>
     public static List<SteadyWindow> Cut(TurnSignals signals, Func<int, int, double> turnRate)
@@ -36,7 +36,7 @@ internal static class SteadyWindows
         bool startHandsOff = false;
         for (; i <= time.Length; i++)
         {
-            bool usable = i < time.Length && signals.Use[i] && (i == 0 || time[i] - time[i - 1] <= LongestPauseSec);
+            bool usable = i < time.Length && signals.Use[i] && (signals.CgShiftM.Length == 0 || signals.CgShiftM[i] == 0) && (i == 0 || time[i] - time[i - 1] <= LongestPauseSec);
             bool moved = usable && signals.HasThrust && Math.Abs(signals.Thrust[i] - reference) > band; // false for the first reference, NaN
             bool switched = usable && start >= 0 && signals.HandsOff[i] != startHandsOff;
             bool full = usable && start >= 0 && time[i] - time[start] >= WindowSec;

@@ -124,6 +124,8 @@ public sealed record TurnCoefficient(string Name, Estimate? Estimate, string Rea
     public const string BrakeDifference = "brake_difference";
     /// <summary>Turn rate per right-minus-left trimmer.</summary>
     public const string TrimmerDifference = "trimmer_difference";
+    /// <summary>Turn rate per known shift of the suspended CG on ballast and weight-shift legs, (rad/s)/m.</summary>
+    public const string CgShift = "cg_shift";
 }
 
 /// <summary>Unit of thrust in a fit.</summary>

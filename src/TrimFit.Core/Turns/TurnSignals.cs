@@ -31,6 +31,10 @@ public sealed partial class TurnSignals
     /// <summary>Right minus left trimmer as logged; empty when not logged.</summary>
     public double[] TrimmerDifference { get; init; } = [];
 
+    /// <summary>Known shift of the suspended CG on ballast and weight-shift legs of the flight sheet, m, right positive, 0 elsewhere; empty
+    /// when there is no such leg.</summary>
+    public double[] CgShiftM { get; init; } = [];
+
     /// <summary>Measured yaw rate, rad/s, already right positive; NaN where missing; empty without a gyro.</summary>
     public double[] GyroRadPerSec { get; init; } = [];
 

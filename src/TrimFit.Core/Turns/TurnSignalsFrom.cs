@@ -17,7 +17,8 @@ public sealed partial class TurnSignals
     /// <summary>Makes a flight ready for an estimator.</summary>
     /// <param name="log">The flight.</param>
     /// <param name="rig">The rig: full thrust, throttle table, what the rpm counts.</param>
-    public static TurnSignals From(FlightLog log, Rig rig)
+    /// <param name="legs">Legs of the pilot's sheet with their places in the flight; none without a sheet.</param>
+    public static TurnSignals From(FlightLog log, Rig rig, params ReadOnlySpan<FoundLeg> legs)
     {
         ArgumentNullException.ThrowIfNull(log);
         ArgumentNullException.ThrowIfNull(rig);
@@ -48,6 +49,8 @@ public sealed partial class TurnSignals
         (double[] trimmers, bool hasTrimmers) = Difference(log, ChannelRole.TrimmerLeft, ChannelRole.TrimmerRight, null);
         if (hasTrimmers && trimmers.Where(double.IsFinite).Distinct().Take(2).Count() < 2)
             hasTrimmers = false; // never moved: nothing to learn
+
+        double[] shift = CgShifts(time, rig, legs, LeaveOut);
 
         double[] rate = sensors.TurnRate;
         if (rate.Length > 0)
@@ -82,6 +85,7 @@ public sealed partial class TurnSignals
             BrakeDifference = brakes,
             HasBrakes = hasBrakes,
             TrimmerDifference = hasTrimmers ? trimmers : [],
+            CgShiftM = shift,
             GyroRadPerSec = sensors.Gyro,
             RotationRatioSquared = thrust.RotationRatioSquared,
             HeadingRad = sensors.Compass,
@@ -98,6 +102,39 @@ public sealed partial class TurnSignals
             YawSignConfirmed = sensors.Report.YawSignConfirmed,
             Findings = [.. findings],
         };
+    }
+
+    /// <summary>How much of a leg is left out at an edge that no control shows: the sheet's own tolerance.</summary>
+    private const double UnseenEdgeSec = SheetLegs.EdgeToleranceSec;
+
+    /// <summary>CG shift over time from the sheet's ballast and weight-shift legs; a leg of unknown size is left out of the flight, since it
+    /// cannot be told from a pull.</summary>
+    private static double[] CgShifts(double[] time, Rig rig, ReadOnlySpan<FoundLeg> legs, Action<Func<int, bool>, string> leaveOut)
+    {
+        double[] shift = [];
+        double suspendedKg = RigSpread.SuspendedKg(rig);
+        foreach (FoundLeg leg in legs)
+        {
+            if (leg.Leg.Kind is not (SheetLegKind.Ballast or SheetLegKind.WeightShift))
+                continue;
+            if (leg.Leg.BallastKg is not double kg || leg.Leg.BallastArmM is not double arm)
+            {
+                leaveOut(i => time[i] >= leg.StartSec - UnseenEdgeSec && time[i] <= leg.EndSec + UnseenEdgeSec, "weight shift of unknown size");
+                continue;
+            }
+            if (shift.Length == 0)
+                shift = new double[time.Length];
+            for (int i = 0; i < time.Length; i++)
+            {
+                if (time[i] >= leg.StartSec && time[i] <= leg.EndSec)
+                    shift[i] = kg * arm / suspendedKg; // carried all flight, so it counts in the pilot's mass and only its place changes
+            }
+            if (leg.StartFoundIn is null)
+                leaveOut(i => Math.Abs(time[i] - leg.StartSec) <= UnseenEdgeSec, "edge of a ballast or weight-shift leg");
+            if (leg.EndFoundIn is null)
+                leaveOut(i => Math.Abs(time[i] - leg.EndSec) <= UnseenEdgeSec, "edge of a ballast or weight-shift leg");
+        }
+        return shift;
     }
 
     /// <summary>Direction of the air velocity, rad, NaN where there is no fix; over ground when the wind is unknown.</summary>

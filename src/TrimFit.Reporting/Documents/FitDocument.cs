@@ -155,6 +155,7 @@ internal static class FitDocument
                 {
                     TurnCoefficient.BrakeDifference => 1 / ControlUnits.ShownPerSi(brake),
                     TurnCoefficient.TrimmerDifference => 1 / ControlUnits.ShownPerSi(trimmer),
+                    TurnCoefficient.CgShift => 1 / ControlUnits.ShownPerSi(ControlUnit.Meter),
                     _ => 1,
                 };
                 string Show(double? rad) => rad is double v && double.IsFinite(v) ? numbers.Significant(double.RadiansToDegrees(v) * scale, 3) : "-";

@@ -389,6 +389,7 @@ internal sealed record EnglishWords : Words
         TurnCoefficient.ThrustSquared => "curve over thrust",
         TurnCoefficient.BrakeDifference => "right minus left brake",
         TurnCoefficient.TrimmerDifference => "right minus left trimmer",
+        TurnCoefficient.CgShift => "known shift of the CG",
         _ => name.Replace('_', ' '),
     };
 

@@ -275,6 +275,11 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         };
         if (signals.TrimmerDifference.Length > 0)
             names.Add((TurnCoefficient.TrimmerDifference, trimmer, trimmer >= 0 ? "" : "the trimmers were not moved against each other"));
+        if (signals.CgShiftM.Length > 0)
+        {
+            int shift = flight.IndexOf(ColumnKind.CgShift);
+            names.Add((TurnCoefficient.CgShift, shift, shift >= 0 ? "" : "nothing of the ballast or weight-shift legs is usable"));
+        }
 
         int count = names.Count;
         var coefficients = ImmutableArray.CreateBuilder<TurnCoefficient>(count);
@@ -356,6 +361,8 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         var names = new List<string> { TurnCoefficient.Constant, TurnCoefficient.Thrust, TurnCoefficient.ThrustSquared, TurnCoefficient.BrakeDifference };
         if (signals.TrimmerDifference.Length > 0)
             names.Add(TurnCoefficient.TrimmerDifference);
+        if (signals.CgShiftM.Length > 0)
+            names.Add(TurnCoefficient.CgShift);
         return new TurnFit
         {
             Method = MethodName,

@@ -67,7 +67,7 @@ internal sealed class FitCovariance
         int turnColumns = 0;
         foreach (ColumnKind kind in flight.Kinds)
         {
-            if (kind is ColumnKind.Constant or ColumnKind.Thrust or ColumnKind.Brake or ColumnKind.Trimmer)
+            if (kind is ColumnKind.Constant or ColumnKind.Thrust or ColumnKind.Brake or ColumnKind.Trimmer or ColumnKind.CgShift)
                 turnColumns++;
         }
         double pullVariance = likelihoodContrast[(constant * k) + constant];
@@ -166,7 +166,7 @@ internal sealed class FitCovariance
     private static double ConditionOf(FlightColumns flight, double[] conditional)
     {
         int k = flight.Coefficients;
-        int[] turn = [.. Enumerable.Range(0, k).Where(j => flight.Kinds[j] is ColumnKind.Constant or ColumnKind.Thrust or ColumnKind.Brake or ColumnKind.Trimmer)];
+        int[] turn = [.. Enumerable.Range(0, k).Where(j => flight.Kinds[j] is ColumnKind.Constant or ColumnKind.Thrust or ColumnKind.Brake or ColumnKind.Trimmer or ColumnKind.CgShift)];
         var correlation = MathNet.Numerics.LinearAlgebra.Matrix<double>.Build.Dense(turn.Length, turn.Length, (i, j) =>
             conditional[(turn[i] * k) + turn[j]] / Math.Sqrt(conditional[(turn[i] * k) + turn[i]] * conditional[(turn[j] * k) + turn[j]]));
         double[] values = [.. correlation.Evd(MathNet.Numerics.LinearAlgebra.Symmetricity.Symmetric).EigenValues.Select(v => v.Real).Order()];

@@ -8,6 +8,7 @@ internal enum ColumnKind
     ThrustSquared,
     Brake,
     Trimmer,
+    CgShift,
     GyroBias,
     GyroRotation,
     GyroTwist,

@@ -41,6 +41,9 @@ internal static class FlightPreparation
         double trimmerScale = s.TrimmerDifference.Length > 0 ? SpreadOf(s.TrimmerDifference, use) : 0;
         if (trimmerScale > 0)
             kinds.Add(ColumnKind.Trimmer);
+        double shiftScale = s.CgShiftM.Length > 0 ? SpreadOf(s.CgShiftM, use) : 0;
+        if (shiftScale > 0)
+            kinds.Add(ColumnKind.CgShift);
         bool hasGyro = s.HasGyro && groups.Any(g => g.Gyro > 0);
         hasHeading = hasHeading && groups.Any(g => g.Air > 0);
         hasCompass = hasCompass && groups.Any(g => g.Compass > 0);
@@ -79,6 +82,7 @@ internal static class FlightPreparation
                 ColumnKind.ThrustSquared => (full * full, quarterTurn),
                 ColumnKind.Brake => (brakeScale, quarterTurn),
                 ColumnKind.Trimmer => (trimmerScale, quarterTurn),
+                ColumnKind.CgShift => (shiftScale, quarterTurn),
                 ColumnKind.GyroBias => (1, still is Estimate e ? Math.Max(e.StandardError, 1e-5) : double.DegreesToRadians(20)),
                 ColumnKind.GyroRotation => (1, double.DegreesToRadians(0.5)),
                 ColumnKind.GyroTwist => (1, double.DegreesToRadians(10)),
@@ -115,7 +119,7 @@ internal static class FlightPreparation
             steps.Add(1);
 
         double[] inputs = new double[n * stride];
-        FillInputs(s, time, inputs, stride, kinds, full, brakeScale, trimmerScale);
+        FillInputs(s, time, inputs, stride, kinds, full, brakeScale, trimmerScale, shiftScale);
 
         // Gyro, twist and rotation columns.
         double[] gyroRows = hasGyro ? new double[n * stride] : [];
@@ -459,7 +463,7 @@ internal static class FlightPreparation
     }
 
     /// <summary>Mean of each held input between the rows' times.</summary>
-    private static void FillInputs(TurnSignals s, double[] time, double[] inputs, int stride, List<ColumnKind> kinds, double full, double brakeScale, double trimmerScale)
+    private static void FillInputs(TurnSignals s, double[] time, double[] inputs, int stride, List<ColumnKind> kinds, double full, double brakeScale, double trimmerScale, double shiftScale)
     {
         int n = time.Length;
         for (int c = 0; c < kinds.Count; c++)
@@ -471,7 +475,7 @@ internal static class FlightPreparation
                     inputs[(i * stride) + at] = 1;
                 continue;
             }
-            if (kinds[c] is not (ColumnKind.Thrust or ColumnKind.ThrustSquared or ColumnKind.Brake or ColumnKind.Trimmer))
+            if (kinds[c] is not (ColumnKind.Thrust or ColumnKind.ThrustSquared or ColumnKind.Brake or ColumnKind.Trimmer or ColumnKind.CgShift))
                 continue;
             int j = 0;
             for (int i = 0; i < n; i++)
@@ -496,6 +500,7 @@ internal static class FlightPreparation
                 ColumnKind.Thrust => s.Thrust[l] / full,
                 ColumnKind.ThrustSquared => s.Thrust[l] / full * (s.Thrust[l] / full),
                 ColumnKind.Brake => s.BrakeDifference[l] / brakeScale,
+                ColumnKind.CgShift => s.CgShiftM[l] / shiftScale,
                 _ => s.TrimmerDifference[l] / trimmerScale,
             };
         }

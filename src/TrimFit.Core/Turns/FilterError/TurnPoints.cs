@@ -37,7 +37,7 @@ internal static class TurnPoints
                 thrust += slope >= 0 ? input[slope + 1] : 0;
                 for (int j = 0; j < k; j++)
                 {
-                    if (flight.Kinds[j] is ColumnKind.Brake or ColumnKind.Trimmer)
+                    if (flight.Kinds[j] is ColumnKind.Brake or ColumnKind.Trimmer or ColumnKind.CgShift)
                         controls += input[j + 1] * filter.Coefficients[j];
                 }
                 if ((flight.Flags[i] & FlightColumns.Gyro) != 0)
