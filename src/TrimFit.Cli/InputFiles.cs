@@ -3,6 +3,7 @@ using System.Security.Cryptography;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Import;
+using TrimFit.Import.Joining;
 using TrimFit.Import.Rigs;
 using TrimFit.Import.Sheets;
 using TrimFit.Reporting;
@@ -14,12 +15,12 @@ internal static class InputFiles
 {
     public static FlightImport Flight(IReadOnlyList<string> paths, CommonChoices choices, LogSettings? machine = null)
     {
-        foreach (string path in paths)
+        foreach (string path in paths.Where(path => !Directory.Exists(path))) // a folder is one recording
             MustExist(path);
         // The command line speaks before the rig file: a role named there is not looked up again.
         ImmutableArray<ColumnRule> fromRig = machine is null ? [] : [.. machine.Columns.Where(r => !choices.Columns.Any(c => c.Role == r.Role))];
-        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict };
-        return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => FlightReader.Read([.. paths.Select(LogSource.FromFile)], options));
+        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict, Progress = choices.Quiet ? null : ReadingProgress.ForTerminal() };
+        return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => FlightReader.Read(LogSources.From(paths), options));
     }
 
     public static (Rig Rig, SourceFile File) Rig(string path)

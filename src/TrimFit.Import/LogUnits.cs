@@ -56,7 +56,7 @@ public static class LogUnits
         (new("ft", Quantity.Length, Foot), "feet foot fuss piedi"),
         (new("in", Quantity.Length, 0.0254), "inch inches \" zoll"),
         (new("km", Quantity.Length, 1000), ""),
-        (new("m/s2", Quantity.Acceleration, 1), "m/s/s mps2 ms-2 m*s-2 m/sec2 mss м/с2 m_s2"),
+        (new("m/s2", Quantity.Acceleration, 1), "m/s/s mps2 ms2 ms-2 m*s-2 m/sec2 mss м/с2 m_s2"),
         (new("g", Quantity.Acceleration, StandardGravity), "gs g0 gee"),
         (new("mg", Quantity.Acceleration, StandardGravity / 1000), ""),
         (new("Pa", Quantity.Pressure, 1), "pascal pascals"),

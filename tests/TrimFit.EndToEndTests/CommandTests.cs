@@ -4,15 +4,17 @@ namespace TrimFit.EndToEndTests;
 
 public class CommandTests
 {
-    [Fact]
-    public void The_main_job_answers_on_the_bundled_flight_with_the_truth_inside_its_intervals()
+    [Theory]
+    [InlineData("uncorrected")]
+    [InlineData("ordinary")]
+    public void The_main_job_answers_on_the_bundled_flights_with_the_truth_inside_its_intervals(string flight)
     {
         using var folder = new TemporaryFolder();
-        BuiltProgram.Outcome run = Fit("uncorrected", "--json", folder["r.json"]);
+        BuiltProgram.Outcome run = Fit(flight, "--json", folder["r.json"]);
         Assert.Equal(0, run.ExitCode);
         Assert.Equal("", run.Error);
         Assert.Matches(@"^In level flight it turns left at \d+\.\d deg/s; moving .* to\s+your (left|right) \(\d+ to \d+\) would null it\.", run.Output.Replace('\n', ' '));
-        using JsonDocument result = Json(folder["r.json"]), truth = Json(BuiltProgram.Sample("uncorrected-truth.json"));
+        using JsonDocument result = Json(folder["r.json"]), truth = Json(BuiltProgram.Sample(flight + "-truth.json"));
         JsonElement cruise = At(result.RootElement.GetProperty("pull").GetProperty("at"), "cruise");
         double trueRate = At(truth.RootElement.GetProperty("pull"), "cruise").GetProperty("rate_deg_s").GetDouble();
         Inside(trueRate, cruise);
@@ -28,7 +30,7 @@ public class CommandTests
     public void A_balanced_machine_is_called_balanced()
     {
         using var folder = new TemporaryFolder();
-        BuiltProgram.Outcome run = Fit("balanced", "--json", folder["r.json"], "--tolerance", "1.5");
+        BuiltProgram.Outcome run = Fit("balanced", "--json", folder["r.json"]);
         Assert.Equal(0, run.ExitCode);
         using JsonDocument result = Json(folder["r.json"]);
         Assert.Equal("balanced", result.RootElement.GetProperty("verdict").GetProperty("code").GetString());

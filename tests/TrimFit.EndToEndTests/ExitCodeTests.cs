@@ -69,12 +69,12 @@ public class ExitCodeTests
     }
 
     [Fact]
-    public void A_folder_in_place_of_a_log_ends_with_3()
+    public void A_folder_without_a_log_ends_with_3()
     {
         using var folder = new TemporaryFolder();
         BuiltProgram.Outcome run = BuiltProgram.Run(null, "inspect", folder["."]);
         Assert.Equal(3, run.ExitCode);
-        Assert.Equal($"{folder["."]}: found a folder, expected a file. Name the file in it.\n", run.Error);
+        Assert.Equal($"{Path.GetFileName(Path.TrimEndingDirectorySeparator(Path.GetFullPath(folder["."])))}: found a folder without a log, expected the files of a recording (CSV, IGC, GPX, NMEA). Check the folder.\n", run.Error);
     }
 
     [Fact]

@@ -1,7 +1,10 @@
 using System.Globalization;
+using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
 using TrimFit.Core.Turns.FilterError;
+using TrimFit.Import.Rigs;
+using TrimFit.Simulation;
 
 namespace TrimFit.SimulationTests;
 
@@ -61,6 +64,8 @@ internal static class CoverageStudy
 
     internal static FlightResult One(Sensors sensors, Hardship hardship, int seed, bool secondOrder, bool withKnown)
     {
+        if (hardship == Hardship.WholeMachine)
+            return WholeMachine(seed, secondOrder);
         var random = new Gauss(seed);
         TurnScenario scenario = TurnScenario.Random(random, secondOrder, sensors, hardship);
         TurnSignals signals = MadeUpFlight.Fly(scenario, random);
@@ -77,6 +82,26 @@ internal static class CoverageStudy
 
         Outcome? Of(double truth, Estimate? estimate, Estimate? yardstick, double scale) => estimate is Estimate e
             ? new(truth, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, yardstick is Estimate y ? y.Value * scale : double.NaN)
+            : null;
+    }
+
+    private static FlightResult WholeMachine(int seed, bool secondOrder)
+    {
+        Scenario scenario = RandomScenarios.Draw((ulong)(uint)seed, secondOrder ? TurnResponse.SecondOrder : TurnResponse.FirstOrder);
+        SimulatedFlight flight = FlightSimulator.Fly(scenario);
+        Rig rig = RigFileReader.Read("rig.toml", RigText.Write(scenario));
+        TurnFit fit = new FilterErrorEstimator().Estimate(TurnSignals.From(flight.Log, rig));
+        double t = StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom);
+        PullTruth level = flight.Truth.Pull.Single(p => p.Setting == "cruise");
+        return new FlightResult(
+            Of(level.RateRadPerSec, fit.PullAt(level.ThrustN), 1),
+            Of(flight.Truth.ThrustRadPerSecPerN, fit[TurnCoefficient.Thrust], flight.Truth.FullThrustN),
+            Of(flight.Truth.BrakeRadPerSecPerM, fit[TurnCoefficient.BrakeDifference], 0.1), // per 100 mm
+            fit.Convergence?.Converged ?? false,
+            fit.ResponseIsSecondOrder == secondOrder);
+
+        Outcome? Of(double truth, Estimate? estimate, double scale) => estimate is Estimate e
+            ? new(truth * scale, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, double.NaN)
             : null;
     }
 

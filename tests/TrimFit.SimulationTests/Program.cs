@@ -37,6 +37,7 @@ internal static class Program
             ("*8 % brake dead band*", Sensors.GyroAndGps, Hardship.BrakeDeadBand, hard),
             ("*gyro offset 0.8 deg/s with rpm squared*", Sensors.GyroAndGps, Hardship.RotationOffset, hard),
             ("*frame twist on throttle steps*", Sensors.GyroAndGps, Hardship.FrameTwist, hard),
+            ("*the whole machine, from its log*", Sensors.GyroAndGps, Hardship.WholeMachine, hard),
             ("*legs held by the pilot*", Sensors.GyroAndGps, Hardship.HeldLegs, hard),
         };
         Console.WriteLine(CoverageStudy.Header);

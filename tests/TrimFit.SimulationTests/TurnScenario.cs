@@ -31,6 +31,9 @@ internal enum Hardship
     FrameTwist,
     /// <summary>The pilot holds course with the brakes through every leg.</summary>
     HeldLegs,
+    /// <summary>Another simulator altogether: a frame that swings on its risers, curved pull, soft brakes, wind with shear, fixes with delay; the
+    /// signals are made from its log with a rig file that is a little wrong (see TrimFit.Simulation).</summary>
+    WholeMachine,
 }
 
 /// <summary>The numbers behind a made-up flight: the truth an interval should hold.</summary>

@@ -91,7 +91,9 @@ internal static class VerdictRules
             reasons.Add(Finding.Of(FindingCode.ConstantPullSource));
             return new(VerdictCode.ConstantPull, reasons.ToImmutable(), travel, travel);
         }
-        reasons.Add(Finding.Of(FindingCode.PullTooUncertain, p95.HalfWidth, 2 * tolerance));
+        // Neither a pull nor its absence: half the tolerance either way would decide.
+        if (steered)
+            reasons.Add(Finding.Of(FindingCode.PullTooUncertain, p95.HalfWidth, tolerance / 2));
         return Insufficient(reasons);
     }
 

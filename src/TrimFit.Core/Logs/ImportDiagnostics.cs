@@ -66,6 +66,9 @@ public sealed record SamplingSummary
     /// <summary>Absolute time of the first sample; null when no logger knew the date.</summary>
     public DateTimeOffset? Start { get; init; }
 
+    /// <summary>Whether <see cref="Start"/> is known to be UTC; else its zone is the logger's own.</summary>
+    public bool StartIsUtc { get; init; }
+
     /// <summary>From first to last sample, s.</summary>
     public required double DurationSec { get; init; }
 

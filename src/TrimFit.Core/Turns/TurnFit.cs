@@ -28,6 +28,14 @@ public sealed record TurnFit
     /// <summary>Whether the wing was taken to answer with second order (it can swing) rather than first; null when not estimated.</summary>
     public bool? ResponseIsSecondOrder { get; init; }
 
+    /// <summary>Brake difference below which nothing happens, in the unit of the brakes as logged; <c>brake_difference</c> then holds beyond it.
+    /// Null when the flight shows none.</summary>
+    public double? BrakeDeadBand { get; init; }
+
+    /// <summary>Share of the brake's variance, hands on, that answers to the turn just before it (a pilot holding course): 0 to 1. Near 1 the
+    /// brake coefficient leans on the disturbance model. Null without brakes.</summary>
+    public double? BrakeFeedbackShare { get; init; }
+
     /// <summary>Root mean square of the slow disturbance, rad/s; null when not estimated.</summary>
     public double? DisturbanceRmsRadPerSec { get; init; }
 

@@ -297,6 +297,7 @@ internal static class ColumnNames
         new("偏航角速度", ChannelRole.YawRate),
         new("ヨーレート", ChannelRole.YawRate),
         new("gyro x", ChannelRole.GyroX),
+        new("gyro x rads", ChannelRole.GyroX, "rad/s"), // "rads" alone could be angles
         new("gyr x", ChannelRole.GyroX),
         new("x gyro", ChannelRole.GyroX),
         new("gx", ChannelRole.GyroX),
@@ -313,6 +314,7 @@ internal static class ColumnNames
         new("gyroscope axe x", ChannelRole.GyroX),
         new("giroscopio x", ChannelRole.GyroX),
         new("gyro y", ChannelRole.GyroY),
+        new("gyro y rads", ChannelRole.GyroY, "rad/s"), // "rads" alone could be angles
         new("gyr y", ChannelRole.GyroY),
         new("y gyro", ChannelRole.GyroY),
         new("gy", ChannelRole.GyroY),
@@ -329,6 +331,7 @@ internal static class ColumnNames
         new("gyroscope axe y", ChannelRole.GyroY),
         new("giroscopio y", ChannelRole.GyroY),
         new("gyro z", ChannelRole.GyroZ),
+        new("gyro z rads", ChannelRole.GyroZ, "rad/s"), // "rads" alone could be angles
         new("gyr z", ChannelRole.GyroZ),
         new("z gyro", ChannelRole.GyroZ),
         new("gz", ChannelRole.GyroZ),

@@ -37,5 +37,5 @@ internal sealed class CsvColumn
         Values = SecondValues = [];
     }
 
-    public ColumnUse ToUse() => new(Name, Role, Role is null ? "" : Unit?.Name ?? "", UnitBasis.Length == 0 ? RoleBasis : $"{RoleBasis}; unit {UnitBasis}", Missing);
+    public ColumnUse ToUse() => new(Name, Role, Role is null ? "" : Unit?.Name ?? "", UnitBasis.Length == 0 ? RoleBasis : RoleBasis.Length == 0 ? "" : $"{RoleBasis}; unit {UnitBasis}", Missing);
 }

@@ -19,6 +19,9 @@ internal sealed record ClockMatch(double OffsetSec, double StdErrorSec, double C
     /// <summary>Climb answers the engine, but late: what the offset from them may be wrong by, s (one standard deviation; judged from the response times of paragliders, no source).</summary>
     private const double ClimbLagSd = 1.0;
 
+    /// <summary>Delays of sensors and of the climb account for less than this between two kinds of signal, s.</summary>
+    private const double LeastContradictionSec = 3;
+
     private const int MostGridPoints = 12_000;
     private const double FineStep = 0.5, FineReach = 3, FineTrial = 0.1;
 
@@ -29,19 +32,24 @@ internal sealed record ClockMatch(double OffsetSec, double StdErrorSec, double C
     /// <param name="highest">Largest offset considered, s.</param>
     public static ClockMatch? Best(IReadOnlyList<TrackSignal> first, IReadOnlyList<TrackSignal> second, double lowest = double.NegativeInfinity, double highest = double.PositiveInfinity)
     {
-        ClockMatch? best = null;
+        var ofPair = new Dictionary<(SignalKind, SignalKind), ClockMatch>();
         foreach (TrackSignal a in first)
         {
             foreach (TrackSignal b in second)
             {
                 if (Comparison(a.Kind, b.Kind) is (double half, bool eitherSign, double lagSd, string words)
                     && Find(a, b, half, eitherSign, lagSd, words, lowest, highest) is ClockMatch match
-                    && (best is null || Worth(match).CompareTo(Worth(best)) > 0))
-                    best = match;
+                    && (!ofPair.TryGetValue((a.Kind, b.Kind), out ClockMatch? other) || Worth(match).CompareTo(Worth(other)) > 0))
+                    ofPair[(a.Kind, b.Kind)] = match;
             }
         }
-        return best;
+        ClockMatch? best = ofPair.Values.MaxBy(Worth);
+        return best is not null && ofPair.Values.Any(match => match.IsFirm && match.Contradicts(best)) ? best with { IsFirm = false } : best;
     }
+
+    /// <summary>Whether two kinds of signal ask for different offsets: then one of them has found a repetition, and none is believed.</summary>
+    private bool Contradicts(ClockMatch other) => Math.Abs(OffsetSec - other.OffsetSec) > LeastContradictionSec
+        + (3 * Math.Sqrt((StdErrorSec * StdErrorSec) + (other.StdErrorSec * other.StdErrorSec)));
 
     /// <summary>Firm before not, the same quantity before engine against climb, then by correlation.</summary>
     private static (bool, bool, double) Worth(ClockMatch match) => (match.IsFirm, match.StdErrorSec < ClimbLagSd, match.Correlation);

@@ -60,7 +60,7 @@ public static class FlightJoiner
         return new(flight, new()
         {
             Files = [.. placed.Select(p => FileOf(p, owners))],
-            Sampling = FlightAssembler.Summarise(time, columns.Values, start),
+            Sampling = FlightAssembler.Summarise(time, columns.Values, start) with { StartIsUtc = reference.IsUtc },
             Warnings = [.. warnings],
         });
     }

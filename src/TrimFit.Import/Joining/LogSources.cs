@@ -22,7 +22,7 @@ public static class LogSources
         var sources = new List<LogSource>();
         foreach (string path in paths)
         {
-            string name = Path.GetFileName(Path.TrimEndingDirectorySeparator(path));
+            string name = Path.GetFileName(Path.TrimEndingDirectorySeparator(Path.GetFullPath(path)));
             try
             {
                 if (Directory.Exists(path))

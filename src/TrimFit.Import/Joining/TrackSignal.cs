@@ -10,6 +10,12 @@ internal sealed class TrackSignal
 {
     private const double LongestPauseSec = 5;
 
+    /// <summary>Below this speed a course is noise, and nothing flies, m/s.</summary>
+    private const double SlowestMPerSec = 3;
+
+    /// <summary>No wing turns faster than this over some seconds, rad/s; what does is a fault of a fix or a hand on the sensor.</summary>
+    private const double FastestTurn = 1.2;
+
     private readonly double[] _time, _integral;
 
     private TrackSignal(SignalKind kind, double[] time, double[] integral) => (Kind, _time, _integral) = (kind, time, integral);
@@ -53,7 +59,11 @@ internal sealed class TrackSignal
     {
         double[] upper = Integrals(first + half, step, count), lower = Integrals(first - half, step, count);
         for (int i = 0; i < count; i++)
+        {
             upper[i] = (upper[i] - lower[i]) / (2 * half);
+            if (Kind == SignalKind.Turn && Math.Abs(upper[i]) > FastestTurn)
+                upper[i] = double.NaN;
+        }
         // A window across a pause would compare a mean with nothing behind it.
         int pause = 1;
         for (int i = 0; i < count; i++)
@@ -173,10 +183,10 @@ internal sealed class TrackSignal
     private static (double[] Time, double[] Course)? Course(LogTable table)
     {
         if (table.Columns.TryGetValue(ChannelRole.VelocityNorth, out double[]? north) && table.Columns.TryGetValue(ChannelRole.VelocityEast, out double[]? east))
-            return (table.TimeSec, [.. north.Zip(east, (n, e) => Math.Sqrt((n * n) + (e * e)) > 2 ? Math.Atan2(e, n) : double.NaN)]);
+            return (table.TimeSec, [.. north.Zip(east, (n, e) => Math.Sqrt((n * n) + (e * e)) > SlowestMPerSec ? Math.Atan2(e, n) : double.NaN)]);
         if (table.Columns.TryGetValue(ChannelRole.GroundCourse, out double[]? course))
-            return (table.TimeSec, course);
-        return Steps(table) is { } steps ? (steps.Time, [.. steps.North.Zip(steps.East, (n, e) => Math.Sqrt((n * n) + (e * e)) > 2 ? Math.Atan2(e, n) : double.NaN)]) : null;
+            return (table.TimeSec, table.Columns.TryGetValue(ChannelRole.GroundSpeed, out double[]? speed) ? [.. course.Zip(speed, (c, v) => v > SlowestMPerSec ? c : double.NaN)] : course);
+        return Steps(table) is { } steps ? (steps.Time, [.. steps.North.Zip(steps.East, (n, e) => Math.Sqrt((n * n) + (e * e)) > SlowestMPerSec ? Math.Atan2(e, n) : double.NaN)]) : null;
     }
 
     private static (double[] Time, double[] Speed)? Speed(LogTable table)

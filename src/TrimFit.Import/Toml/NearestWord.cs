@@ -26,7 +26,7 @@ internal static class NearestWord
     private static bool Shares(string a, string b)
     {
         string[] first = a.Split('_'), second = b.Split('_');
-        return first.Length > 1 && second.Length > 1 && (first.All(second.Contains) || second.All(first.Contains));
+        return first.All(second.Contains) || second.All(first.Contains);
     }
 
     private static int Distance(string a, string b)

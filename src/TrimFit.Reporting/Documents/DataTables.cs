@@ -11,7 +11,10 @@ internal static class DataTables
     public static IEnumerable<string> Facts(ImportDiagnostics diagnostics, Wind? wind, GyroReport? gyro, Words words, Numbers numbers)
     {
         if (diagnostics.Sampling.Start is DateTimeOffset start)
-            yield return start.ToUniversalTime().ToString("yyyy-MM-dd HH:mm:ss 'UTC'", System.Globalization.CultureInfo.InvariantCulture);
+        {
+            string clock = start.ToUniversalTime().ToString("yyyy-MM-dd HH:mm:ss", System.Globalization.CultureInfo.InvariantCulture);
+            yield return diagnostics.Sampling.StartIsUtc ? clock + " UTC" : $"{clock} ({words.Labels.LoggersZone})";
+        }
         yield return words.Wind(wind, numbers);
         if (words.Gyro(gyro, numbers) is { Length: > 0 } g)
             yield return g;

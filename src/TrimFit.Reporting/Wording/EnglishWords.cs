@@ -118,6 +118,7 @@ internal sealed record EnglishWords : Words
         DrawingNote = "To scale sideways; places along the machine are only sketched.",
         CloseUp = "The middle, enlarged",
         CentreLine = "centre line",
+        LoggersZone = "time zone not in the log",
         Carabiner = "riser carabiner",
         CarabinerMiddle = "middle between the riser carabiners",
         FrontHangPoints = "front harness hang points",
@@ -184,7 +185,7 @@ internal sealed record EnglishWords : Words
         AdjustmentKind.EngineCant => "engine turned in plan",
         AdjustmentKind.Ballast => "ballast",
         AdjustmentKind.Trimmer => "trimmers",
-        AdjustmentKind.BrakeLine => "brake lines",
+        AdjustmentKind.BrakeLine => "brake line to shorten",
     };
 
     public override string Answer(FitAnswer answer, Numbers numbers)

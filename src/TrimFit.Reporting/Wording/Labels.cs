@@ -106,6 +106,7 @@ internal sealed record Labels
     public required string DrawingNote { get; init; }
     public required string CloseUp { get; init; }
     public required string CentreLine { get; init; }
+    public required string LoggersZone { get; init; }
     public required string Carabiner { get; init; }
     public required string CarabinerMiddle { get; init; }
     public required string FrontHangPoints { get; init; }

@@ -45,16 +45,22 @@ internal sealed record MadeUpFlight
             // The last quarter of every leg is a turn by brake, twice right for once left, so that the flight goes round and wind and brake effect can be found.
             double brake = intoLeg > 0.75 * LegSec ? (leg % 3 == 1 ? -0.2 : 0.2) : 0;
             double wanted = (ConstantDegPerSec + (PowerDegPerSec * power) + (BrakeDegPerSec * brake)) * toRad;
-            noise += (-noise / NoiseTauSec * Step) + (NoiseDegPerSec * toRad * Math.Sqrt(2 * Step / NoiseTauSec) * random.NextNormal());
-            turn += (wanted + noise - turn) / LagSec * Step;
-            heading += turn * Step;
-            height += 3 * (power - LevelFraction) * Step;
             rpm[i] = 40 * Math.Sqrt(power);
             gyro[i] = ((turn * GyroSign) + (GyroBiasDegPerSec * toRad) + (0.2 * toRad * random.NextNormal())) * GyroUnit;
             (left[i], right[i]) = BrakeSign > 0 ? (Math.Max(0, -brake), Math.Max(0, brake)) : (Math.Max(0, brake), Math.Max(0, -brake));
             north[i] = (Airspeed * Math.Cos(heading)) + WindNorth + (0.1 * random.NextNormal());
             east[i] = (Airspeed * Math.Sin(heading)) + (0.1 * random.NextNormal());
             altitude[i] = height + (0.3 * random.NextNormal());
+            const int Substeps = 10; // what is logged at a sample acts until the next one; the turn follows it finely enough to be continuous
+            const double Fine = Step / Substeps;
+            for (int k = 0; k < Substeps; k++)
+            {
+                noise += (-noise / NoiseTauSec * Fine) + (NoiseDegPerSec * toRad * Math.Sqrt(2 * Fine / NoiseTauSec) * random.NextNormal());
+                double before = turn;
+                turn += (wanted + noise - turn) / LagSec * Fine;
+                heading += (turn + before) / 2 * Fine;
+            }
+            height += 3 * (power - LevelFraction) * Step;
         }
         var columns = new Dictionary<ChannelRole, double[]> { [ChannelRole.Rpm] = rpm };
         if (Gyro)

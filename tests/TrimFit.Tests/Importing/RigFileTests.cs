@@ -294,7 +294,7 @@ public class RigFileTests
         { "[mass]", "[limits]\ncarabiner_pair = 40\n[mass]", "r.toml(2): found 40 for carabiner_pair, expected a table with min, max and step. Write carabiner_pair = { min = -20, max = 20, step = 5 }, in mm." },
         { "[mass]", "[limits]\nballast = { min = 4, max = 1 }\n[mass]", "r.toml(2): found min = 4 above max = 1 for ballast, expected min below max. Swap the two; right is positive." },
         { "[mass]", "[limits]\nballast = { max = 4, step = 0 }\n[mass]", "r.toml(2): found 0 for step, expected a number from 0.01 to 1000 kg. Leave step out when the part moves freely." },
-        { "[mass]", "[log]\nyaw = \"gz\"\n[mass]", "r.toml(2): unknown key \"yaw\" in [log]. Known here: acceleration_x, acceleration_y, acceleration_z, accelerator, airspeed, altitude, brake_difference, brake_left, brake_right, current, date, engine_noise, ground_course, ground_speed, gyro_orientation, gyro_x, gyro_y, gyro_z, hands_off, heading, latitude, longitude, marker, motor_current, position, power, pressure, roll, roll_rate, rpm, throttle, time, trimmer_left, trimmer_right, velocity_east, velocity_north, vertical_speed, voltage, yaw_rate." },
+        { "[mass]", "[log]\nyaw = \"gz\"\n[mass]", "r.toml(2): unknown key \"yaw\" in [log]; did you mean \"yaw_rate\"?" },
         { "[mass]", "[log]\ngyro_orientation = \"x right, y forward, z down\"\n[mass]", "r.toml(2): found \"x right, y forward, z down\" for gyro_orientation, expected a direction for each of x, y and z, square to each other. Write gyro_orientation = \"x forward, y right, z down\" with forward, back, right, left, up or down." },
     };
 

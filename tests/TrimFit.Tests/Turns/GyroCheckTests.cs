@@ -174,16 +174,12 @@ public class GyroCheckTests
     }
 
     [Fact]
-    public void A_column_moved_earlier_takes_the_value_between_two_samples_and_ends_with_them()
+    public void A_column_moved_earlier_goes_by_whole_samples_and_never_mixes_two()
     {
-        double[] time = [0, 0.1, 0.2, 0.3, 0.4, 5];
-        double[] moved = GyroCheck.Earlier(time, [0, 2, double.NaN, 6, 8, 100], 0.05);
-        Assert.Equal(1, moved[0], 12);
-        Assert.Equal(3, moved[1], 12);        // across the missing sample: 2 + (6 − 2) · 0.05/0.2
-        Assert.True(double.IsNaN(moved[2]));  // no sample of its own
-        Assert.Equal(7, moved[3], 12);
-        Assert.True(double.IsNaN(moved[4]));  // the next sample is 4.6 s on
-        Assert.True(double.IsNaN(moved[5]));
+        double[] time = [0, 0.1, 0.2, 0.3, 0.4, 0.5, 5, 5.1];
+        double[] moved = GyroCheck.Earlier(time, [0, 2, 4, 6, 8, 10, 100, 102], 0.21);
+        Assert.Equal([4, 6, 8, 10, double.NaN, double.NaN, double.NaN, double.NaN], moved); // nothing comes from across the pause
+        Assert.Equal([0, 2, 4], GyroCheck.Earlier([0, 0.1, 0.2], [0, 2, 4], 0.04)); // less than half a sample is left
     }
 
     [Fact]

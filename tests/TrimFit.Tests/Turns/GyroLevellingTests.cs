@@ -1,6 +1,7 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 using TrimFit.Simulation;
 
 namespace TrimFit.Tests.Turns;
@@ -107,6 +108,25 @@ public class GyroLevellingTests
     {
         double[] time = SensorFlights.Phone.TimeSec.ToArray();
         return SensorFlights.Phone[role].ToArray().Where((v, i) => double.IsFinite(v) && Math.Abs(time[i] - SlipSec) < 8).Average();
+    }
+
+    [Fact]
+    public void The_main_estimator_gives_the_true_pull_near_level_power_from_spoilt_sensors()
+    {
+        var random = new Random(12);
+        double[,] before = AnyRotation(random), after = AnyRotation(random);
+        FlightLog phone = Mounted(t => t < SlipSec ? before : after);
+        FlightLog spoilt = SensorFlights.With(
+            FlightSimulator.Fly(SensorFlights.Ordinary(new SensorSuite { GyroDelaySec = 0.8, GyroScale = -Math.Cos(double.DegreesToRadians(35)) })).Log,
+            (ChannelRole.YawRate, (_, v) => double.DegreesToRadians(v)));
+        double truth = SensorFlights.TruePullDegPerSec(SensorFlights.Plain.Truth, 0.4);
+        foreach (FlightLog log in (FlightLog[])[phone, spoilt])
+        {
+            TurnSignals signals = TurnSignals.From(log, SensorFlights.Rig);
+            Core.Statistics.Estimate pull = new FilterErrorEstimator().Estimate(signals).PullAt(0.4 * signals.FullThrust)!.Value;
+            Assert.InRange(double.RadiansToDegrees(pull.StandardError), 0.01, 0.4);
+            Assert.Equal(truth, double.RadiansToDegrees(pull.Value), 3 * double.RadiansToDegrees(pull.StandardError));
+        }
     }
 
     [Fact]

@@ -101,7 +101,11 @@ public class ThrustSourceTests
         {
             Propeller = Rig.Propeller with
             {
-                Drive = PropellerDrive.Clutch, RpmIs = RpmMeaning.Engine, ReductionRatio = 2.5, FullPowerRevPerSec = 2.5 * 39.8, ClutchEngageRevPerSec = null,
+                Drive = PropellerDrive.Clutch,
+                RpmIs = RpmMeaning.Engine,
+                ReductionRatio = 2.5,
+                FullPowerRevPerSec = 2.5 * 39.8,
+                ClutchEngageRevPerSec = null,
             },
         };
         FlightLog log = SensorFlights.With(Only(ChannelRole.Rpm), (ChannelRole.Rpm, (_, v) => 2.5 * v)); // engine turns, idling at 0.3 of full

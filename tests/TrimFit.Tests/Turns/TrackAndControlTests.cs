@@ -21,7 +21,8 @@ public class TrackAndControlTests
                 return v;
             spoilt++;
             return 45;
-        }));
+        }
+        ));
         SensorReport report = Report(log);
         Assert.Equal([spoilt, fix], SensorFlights.Single(report.Findings, FindingCode.GpsOutliers).Values.Select(v => (int)v));
         Wind clean = Report(Plain).Wind!;

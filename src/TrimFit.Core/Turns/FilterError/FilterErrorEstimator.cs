@@ -21,6 +21,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
 
     private const double LeastThrustRange = 0.05; // of full thrust, between the 5 % and 95 % quantiles: less shows no growth with power
     private const double NotableOutliers = 0.01; // share of measurements; clean ones give 0.0005
+    private const double DeadBandGain = 10; // of log-likelihood: far beyond what one more parameter gives by chance
     private const double DecidedBy = 8; // of log-likelihood: one order is e^8 times as likely as the other
     private const double CollinearInflation = 100; // variance inflation: the standard error is ten times what separate inputs would give
 
@@ -58,7 +59,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     }
 
     /// <summary>A fitted model: the search's result, or known noise without one.</summary>
-    private sealed record Chosen(NoiseParameters Noise, SearchResult? Result, int Evaluations, double AiccGain);
+    private sealed record Chosen(NoiseParameters Noise, SearchResult? Result, int Evaluations, double DeadBand);
 
     private Chosen Evaluate(FlightColumns flight, AugmentedFilter filter, NoiseParameters perSample)
     {
@@ -100,6 +101,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
                         LagSec = lag,
                         DisturbanceTauSec = tau,
                         DisturbanceRms = double.DegreesToRadians(level),
+                        QuickDisturbance = double.DegreesToRadians(0.3 * level),
                         GyroNoise = double.DegreesToRadians(0.4 * level),
                     });
                     double value = first.Evaluate(theta);
@@ -113,7 +115,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             }
         }
         if (best.Length == 0)
-            best = firstLayout.ToVector(new() { Order = ResponseOrder.First, DisturbanceRms = 0.03, DisturbanceTauSec = 8 });
+            best = firstLayout.ToVector(new() { Order = ResponseOrder.First, DisturbanceRms = 0.03, DisturbanceTauSec = 8, QuickDisturbance = 0.005 });
 
         // Gross errors (a gyro spike of 100 deg/s) would otherwise set the noise level of the first search.
         first.Evaluate(best);
@@ -152,10 +154,52 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         filter.Run(chosen.Noise);
         SetCurvaturePrior(flight, filter);
         filter.RunRobust(chosen.Noise, _options.OutlierLimit);
+        double deadBand = FindDeadBand(flight, search, chosen.Theta, ref evaluations);
         // Always searched last, so that the filter holds the chosen model's run.
         chosen = search.From(chosen.Theta, _options.MostIterations);
         evaluations += chosen.Evaluations + 2;
-        return new(chosen.Noise, chosen, evaluations, gain);
+        return new(chosen.Noise, chosen, evaluations, deadBand);
+    }
+
+    /// <summary>Looks for a dead band of the brakes and puts it into the inputs when the flight asks for it clearly.</summary>
+    /// <remarks>Published turn rates over brake are flat near zero (the slack of the brake lines). The width is profiled over shares of the
+    /// largest brake difference; the noise parameters are held meanwhile, and searched anew with the width that is taken.</remarks>
+    /// <returns>Half-width in the unit of the brakes as logged; 0 when there is none.</returns>
+    private static double FindDeadBand(FlightColumns flight, NoiseSearch search, double[] theta, ref int evaluations)
+    {
+        double[] brakes = flight.BrakeColumn();
+        if (brakes.Length == 0)
+            return 0;
+        double largest = brakes.Max(Math.Abs);
+        double without = search.Evaluate(theta), best = without, width = 0;
+        foreach (double coarse in (ReadOnlySpan<double>)[0.1, 0.2, 0.3, 0.4])
+            Try(coarse * largest, ref evaluations);
+        if (without - best > DeadBandGain)
+        {
+            for (double step = 0.05 * largest; step > 0.01 * largest; step /= 2)
+            {
+                double centre = width;
+                Try(centre - step, ref evaluations);
+                Try(centre + step, ref evaluations);
+            }
+        }
+        else
+        {
+            width = 0;
+        }
+        flight.SetBrakes(brakes, width);
+        search.Evaluate(theta);
+        evaluations++;
+        return width * flight.Scale[flight.IndexOf(ColumnKind.Brake)];
+
+        void Try(double candidate, ref int count)
+        {
+            flight.SetBrakes(brakes, candidate);
+            double value = search.Evaluate(theta);
+            count++;
+            if (value < best)
+                (best, width) = (value, candidate);
+        }
     }
 
     private static double Aicc(SearchResult result, int parameters, int measurements) =>
@@ -171,7 +215,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         double[] covariance = filter.ConditionalCovariance();
         double variance = covariance[(slope * flight.Coefficients) + slope];
         double size = Math.Sqrt((filter.Coefficients[slope] * filter.Coefficients[slope]) + variance);
-        filter.SetPriorSd(curvature, Math.Max(_options.CurvatureShare * size, 1e-5));
+        filter.SetPriorSd(curvature, double.Hypot(_options.CurvatureShare * size, _options.CurvatureFloorRadPerSec));
     }
 
     private static bool ThrustMoves(TurnSignals s, out double low, out double high)
@@ -287,6 +331,8 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             DegreesOfFreedom = covariance.DegreesOfFreedom,
             LagSec = noise.SteadyLagSec,
             ResponseIsSecondOrder = noise.Order == ResponseOrder.Second,
+            BrakeDeadBand = chosen.DeadBand > 0 ? chosen.DeadBand : null,
+            BrakeFeedbackShare = BrakeFeedback.Share(flight),
             DisturbanceRmsRadPerSec = noise.DisturbanceRms,
             DisturbanceTauSec = noise.DisturbanceTauSec,
             EffectiveSamples = covariance.EffectiveSamples,

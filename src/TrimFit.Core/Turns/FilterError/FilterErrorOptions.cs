@@ -13,6 +13,10 @@ public sealed record FilterErrorOptions
     /// interval that rules such a bend out does not hold the pull.</summary>
     public double CurvatureShare { get; init => field = Guard.Positive(value); } = 1;
 
+    /// <summary>Curvature that is possible whatever the slope, rad/s at full thrust, added in squares to the share. Default 1.5 deg/s: riser twist
+    /// bends the pull of a machine whose slope is small.</summary>
+    public double CurvatureFloorRadPerSec { get; init => field = Guard.Positive(value); } = double.DegreesToRadians(1.5);
+
     /// <summary>Standardised innovation beyond which a measurement's noise is raised (Chang 2014). Default 3.5: one in 2,000 of clean normal ones.</summary>
     public double OutlierLimit { get; init => field = Guard.Positive(value); } = 3.5;
 

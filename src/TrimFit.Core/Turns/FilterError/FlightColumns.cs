@@ -79,6 +79,28 @@ internal sealed class FlightColumns
 
     public required bool[] HandsOff { get; init; }
 
+    /// <summary>The scaled brake difference of each row, as an input column has it; empty without brakes.</summary>
+    public double[] BrakeColumn()
+    {
+        int brake = IndexOf(ColumnKind.Brake);
+        if (brake < 0)
+            return [];
+        double[] column = new double[Count];
+        for (int i = 0; i < Count; i++)
+            column[i] = InputRows[(i * Stride) + brake + 1];
+        return column;
+    }
+
+    /// <summary>Replaces the brake input by what is left of it beyond a dead band.</summary>
+    /// <param name="brakes">The brakes as they were, from <see cref="BrakeColumn"/>.</param>
+    /// <param name="width">Half-width of the dead band, in the unit of the column; 0 for none.</param>
+    public void SetBrakes(double[] brakes, double width)
+    {
+        int brake = IndexOf(ColumnKind.Brake);
+        for (int i = 0; i < brakes.Length; i++)
+            InputRows[(i * Stride) + brake + 1] = Math.CopySign(Math.Max(0, Math.Abs(brakes[i]) - width), brakes[i]);
+    }
+
     /// <summary>Number of coefficients.</summary>
     public int Coefficients => Kinds.Length;
 

@@ -29,6 +29,10 @@ internal sealed record NoiseParameters
     /// <summary>Correlation time of w, s.</summary>
     public required double DisturbanceTauSec { get; init; }
 
+    /// <summary>Quick part of the disturbance, white, acting through the wing's response beside w, rad/s·√s: small gusts and the frame's
+    /// swing. Without it w itself turns white on a machine whose frame swings, and slow air then goes uncounted.</summary>
+    public double QuickDisturbance { get; init; }
+
     /// <summary>White noise of one gyro measurement, rad/s.</summary>
     public double GyroNoise { get; init; } = 0.01;
 

@@ -6,7 +6,7 @@ namespace TrimFit.Core.Turns.FilterError;
 /// wing under a pilot (model of section "Turn model" in DEVELOPERS.md); none of them was measured on a pilot's own machine.</remarks>
 internal sealed class ParameterLayout
 {
-    private enum Slot { Lag, Frequency, Damping, DisturbanceRms, DisturbanceTau, Gyro, Heading, GustRms, GustTau, Compass }
+    private enum Slot { Lag, Frequency, Damping, DisturbanceRms, DisturbanceTau, Quick, Gyro, Heading, GustRms, GustTau, Compass }
 
     private readonly Slot[] _slots;
     private readonly double[] _centre;
@@ -32,7 +32,7 @@ internal sealed class ParameterLayout
         else
             slots.AddRange([Slot.Frequency, Slot.Damping]);
         if (known is null)
-            slots.AddRange([Slot.DisturbanceRms, Slot.DisturbanceTau]);
+            slots.AddRange([Slot.DisturbanceRms, Slot.DisturbanceTau, Slot.Quick]);
         if (hasGyro)
             slots.Add(Slot.Gyro);
         if (hasHeading)
@@ -54,7 +54,8 @@ internal sealed class ParameterLayout
         Slot.Frequency => (1.1, 0.6),
         Slot.Damping => (0.6, 0.5),
         Slot.DisturbanceRms => (double.DegreesToRadians(1.5), 1.2),
-        Slot.DisturbanceTau => (8, 0.9),
+        Slot.DisturbanceTau => (8, 0.5),
+        Slot.Quick => (double.DegreesToRadians(0.3), 1.2),
         Slot.Gyro => (double.DegreesToRadians(0.5), 1.5),
         Slot.Heading => (double.DegreesToRadians(1.5), 1.2),
         Slot.GustRms => (double.DegreesToRadians(2), 1.0),
@@ -70,6 +71,7 @@ internal sealed class ParameterLayout
         Slot.Damping => p.Damping,
         Slot.DisturbanceRms => p.DisturbanceRms,
         Slot.DisturbanceTau => p.DisturbanceTauSec,
+        Slot.Quick => Math.Max(p.QuickDisturbance, 1e-5),
         Slot.Gyro => p.GyroNoise,
         Slot.Heading => p.HeadingNoise,
         Slot.GustRms => p.GustRms,
@@ -80,7 +82,7 @@ internal sealed class ParameterLayout
     /// <summary>The parameters of a vector of logarithms.</summary>
     public NoiseParameters FromVector(ReadOnlySpan<double> theta)
     {
-        double lag = 1.5, frequency = 1.1, damping = 0.6, w = 0.02, tauW = 8, gyro = 0.01, heading = 0.03, gust = 0.03, tauG = 8, compass = 0.03;
+        double lag = 1.5, frequency = 1.1, damping = 0.6, w = 0.02, tauW = 8, quick = 0, gyro = 0.01, heading = 0.03, gust = 0.03, tauG = 8, compass = 0.03;
         for (int i = 0; i < _slots.Length; i++)
         {
             double value = Math.Exp(theta[i]);
@@ -91,6 +93,7 @@ internal sealed class ParameterLayout
                 case Slot.Damping: damping = value; break;
                 case Slot.DisturbanceRms: w = value; break;
                 case Slot.DisturbanceTau: tauW = value; break;
+                case Slot.Quick: quick = value; break;
                 case Slot.Gyro: gyro = value; break;
                 case Slot.Heading: heading = value; break;
                 case Slot.GustRms: gust = value; break;
@@ -108,6 +111,7 @@ internal sealed class ParameterLayout
             Damping = damping,
             DisturbanceRms = w,
             DisturbanceTauSec = tauW,
+            QuickDisturbance = quick,
             GyroNoise = gyro,
             HeadingNoise = heading,
             GustRms = gust,

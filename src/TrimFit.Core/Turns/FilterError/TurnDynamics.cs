@@ -37,6 +37,8 @@ internal struct TurnDynamics
         }
         a[10] = -1 / noise.DisturbanceTauSec;
         a[12] = 1;
+        double quick = noise.QuickDisturbance * (noise.Order == ResponseOrder.First ? b[0] : b[1]);
+        int driven = noise.Order == ResponseOrder.First ? 0 : 5;
         double d22 = 2 * noise.DisturbanceRms * noise.DisturbanceRms / noise.DisturbanceTauSec;
 
         double norm = 0;
@@ -61,6 +63,7 @@ internal struct TurnDynamics
         for (int i = 0; i < 4; i++)
             phi[5 * i] = power[5 * i] = 1;
         density[10] = d22 * h;
+        density[driven] = quick * quick * h;
         density.CopyTo(q);
         for (int i = 0; i < 4; i++)
             gamma[i] = h * b[i];

@@ -188,10 +188,11 @@ public class FilterErrorEstimatorTests
     }
 
     [Theory]
-    [InlineData(Sensors.Gps5Hz)]
-    [InlineData(Sensors.Gps1Hz)]
-    public void A_machine_that_hardly_turns_keeps_its_brakes_with_GPS_alone(Sensors sensors)
+    [InlineData(false)]
+    [InlineData(true)]
+    public void A_machine_that_hardly_turns_keeps_its_brakes_with_GPS_alone(bool slow)
     {
+        Sensors sensors = slow ? Sensors.Gps1Hz : Sensors.Gps5Hz;
         // With wind columns taken at the measured heading the brake coefficient of such a flight came out at a tenth of its size.
         for (int seed = 20; seed < 24; seed++)
         {
@@ -202,6 +203,29 @@ public class FilterErrorEstimatorTests
             TurnFit fit = _estimator.Estimate(MadeUpFlight.Fly(machine, new Gauss(seed + 1000)));
             Assert.InRange(fit[TurnCoefficient.BrakeDifference]!.Value.Value / machine.Brake, 0.5, 1.5);
         }
+    }
+
+    [Fact]
+    public void A_dead_band_of_the_brakes_is_found_only_where_there_is_one()
+    {
+        TurnScenario machine = Machine(30) with { DurationSec = 600 };
+        TurnFit without = _estimator.Estimate(MadeUpFlight.Fly(machine, new Gauss(77)));
+        TurnFit with = _estimator.Estimate(MadeUpFlight.Fly(machine with { Hardship = Hardship.BrakeDeadBand }, new Gauss(77)));
+        Assert.Null(without.BrakeDeadBand);
+        Assert.InRange(with.BrakeDeadBand!.Value, 0.05, 0.11); // made with 0.08
+        Holds(machine.Brake, with[TurnCoefficient.BrakeDifference], 4);
+    }
+
+    [Fact]
+    public void A_held_course_shows_as_feedback_and_lone_brake_steps_do_not()
+    {
+        TurnScenario machine = Machine(31) with { DurationSec = 600 };
+        TurnSignals held = MadeUpFlight.Fly(machine with { Hardship = Hardship.HeldLegs }, new Gauss(78));
+        double[] steps = [.. held.TimeSec.Select(t => (t % 40) is > 20 and < 26 ? (t % 80 > 40 ? 0.15 : -0.15) : 0)];
+        double share = _estimator.Estimate(held).BrakeFeedbackShare!.Value;
+        double lone = _estimator.Estimate(Change(held, brakes: steps)).BrakeFeedbackShare!.Value;
+        Assert.True(share > lone + 0.2, FormattableString.Invariant($"held {share:F2}, steps {lone:F2}"));
+        Assert.InRange(lone, 0, 0.35);
     }
 
     [Fact]

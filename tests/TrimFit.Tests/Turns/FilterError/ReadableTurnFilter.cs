@@ -30,6 +30,10 @@ internal sealed class ReadableTurnFilter
             _dynamics[6] = -2 * noise.Damping * noise.NaturalFrequency;
             _dynamics[7] = square;
         }
+        if (noise.Order == ResponseOrder.First)
+            _density[0] = Math.Pow(noise.QuickDisturbance / noise.LagSec, 2);
+        else
+            _density[6] = Math.Pow(noise.QuickDisturbance * noise.NaturalFrequency * noise.NaturalFrequency, 2);
         _dynamics[12] = -1 / noise.DisturbanceTauSec;
         _dynamics[15] = 1;
         _dynamics[24] = -1 / noise.GustTauSec;
