@@ -95,9 +95,9 @@ internal sealed class ShiftFlight
         double[] truth = [off, ((4 * half) - (3 * off) - most) / full, 2 * (most + off - (2 * half)) / (full * full)];
         // The second fit would shrink its curve as this one did: mean of the truth under the same information and prior.
         int n = Fit.Coefficients.Length;
-        double share = new FilterErrorOptions().CurvatureShare, slope = truth[1] * full, square = full * full;
-        double prior = share * share * ((slope * slope) + (Fit.Covariance[n + 1] * square)) / (square * square);
-        double pulled = Math.Min(1 / prior, 1 / Fit.Covariance[(2 * n) + 2]) * truth[2];
+        double square = full * full;
+        double priorSd = new FilterErrorOptions().CurvaturePriorSd(truth[1] * full, Fit.Covariance[n + 1] * square) / square;
+        double pulled = Math.Min(1 / (priorSd * priorSd), 1 / Fit.Covariance[(2 * n) + 2]) * truth[2];
         for (int i = 0; i < 3; i++)
             truth[i] -= Fit.Covariance[(i * n) + 2] * pulled;
         double[] error = CorrelatedNormals(random);

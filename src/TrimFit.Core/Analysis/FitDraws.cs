@@ -41,9 +41,8 @@ internal sealed class FitDraws
         if (SlopeKnown && fit.Method == FilterErrorEstimator.MethodName && fit[TurnCoefficient.ThrustSquared] is not null)
         {
             // The fit shrank the curvature by a prior; what the flight itself says is the fit without that prior.
-            double share = new FilterErrorOptions().CurvatureShare;
-            double priorVariance = share * share * ((Slope * Slope) + _c11);
-            _priorPrecision = Math.Min(1 / priorVariance, MostPriorShare / d);
+            double priorSd = new FilterErrorOptions().CurvaturePriorSd(Slope, _c11);
+            _priorPrecision = Math.Min(1 / (priorSd * priorSd), MostPriorShare / d);
         }
         CurvatureShrink = 1 - (_priorPrecision * _c22);
 

@@ -26,6 +26,28 @@ internal sealed record MadeUpFlight
     public double WindNorth { get; init; } = 3;
     public double LevelFraction { get; init; } = 0.6;
     public ulong Seed { get; init; } = 7;
+    /// <summary>Turn while the ballast is out to the right, deg/s; legs 3 and 8 have it right, 5 and 10 left.</summary>
+    public double BallastDegPerSec { get; init; }
+
+    /// <summary>Ballast of 5 kg at 0.472 m: 5 × 0.472/118 = 20 mm of CG shift.</summary>
+    public const double BallastKg = 5, BallastArmM = 0.472;
+    private static readonly (int Leg, int Side)[] _ballast = [(3, 1), (8, 1), (5, -1), (10, -1)];
+
+    /// <summary>The sheet's legs with the ballast out; without a size they are weight shifts of unknown size.</summary>
+    public FoundLeg[] Legs(bool sized = true, double armSign = 1) =>
+    [
+        .. _ballast.Select(b => new FoundLeg
+        {
+            Leg = new()
+            {
+                Start = SheetTime.FromSeconds(b.Leg * LegSec), End = SheetTime.FromSeconds((b.Leg + 1) * LegSec),
+                Kind = sized ? SheetLegKind.Ballast : SheetLegKind.WeightShift,
+                BallastKg = sized ? BallastKg : null, BallastArmM = sized ? armSign * b.Side * BallastArmM : null,
+            },
+            StatedStartSec = b.Leg * LegSec, StatedEndSec = (b.Leg + 1) * LegSec, StartSec = b.Leg * LegSec, EndSec = (b.Leg + 1) * LegSec,
+            StartFoundIn = ChannelRole.Rpm, EndFoundIn = ChannelRole.Rpm,
+        }),
+    ];
 
     public FlightLog Fly()
     {
@@ -44,7 +66,7 @@ internal sealed record MadeUpFlight
             double power = Powers[leg];
             // The last quarter of every leg is a turn by brake, twice right for once left, so that the flight goes round and wind and brake effect can be found.
             double brake = intoLeg > 0.75 * LegSec ? (leg % 3 == 1 ? -0.2 : 0.2) : 0;
-            double wanted = (ConstantDegPerSec + (PowerDegPerSec * power) + (BrakeDegPerSec * brake)) * toRad;
+            double wanted = (ConstantDegPerSec + (PowerDegPerSec * power) + (BrakeDegPerSec * brake) + (BallastDegPerSec * _ballast.FirstOrDefault(b => b.Leg == leg).Side)) * toRad;
             rpm[i] = 40 * Math.Sqrt(power);
             gyro[i] = ((turn * GyroSign) + (GyroBiasDegPerSec * toRad) + (0.2 * toRad * random.NextNormal())) * GyroUnit;
             (left[i], right[i]) = BrakeSign > 0 ? (Math.Max(0, -brake), Math.Max(0, brake)) : (Math.Max(0, brake), Math.Max(0, -brake));

@@ -205,17 +205,14 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     private static double Aicc(SearchResult result, int parameters, int measurements) =>
         (2 * result.Objective) + (2 * parameters) + (2.0 * parameters * (parameters + 1) / Math.Max(1, measurements - parameters - 1));
 
-    /// <summary>Sets the curvature's prior to a share of the slope; the slope's own error is counted in, or a slope that happens to come out
-    /// near zero would forbid all curvature.</summary>
+    /// <summary>Sets the curvature's prior by the slope found so far.</summary>
     private void SetCurvaturePrior(FlightColumns flight, AugmentedFilter filter)
     {
         int slope = flight.IndexOf(ColumnKind.Thrust), curvature = flight.IndexOf(ColumnKind.ThrustSquared);
         if (slope < 0 || curvature < 0)
             return;
         double[] covariance = filter.ConditionalCovariance();
-        double variance = covariance[(slope * flight.Coefficients) + slope];
-        double size = Math.Sqrt((filter.Coefficients[slope] * filter.Coefficients[slope]) + variance);
-        filter.SetPriorSd(curvature, double.Hypot(_options.CurvatureShare * size, _options.CurvatureFloorRadPerSec));
+        filter.SetPriorSd(curvature, _options.CurvaturePriorSd(filter.Coefficients[slope], covariance[(slope * flight.Coefficients) + slope]));
     }
 
     private static bool ThrustMoves(TurnSignals s, out double low, out double high)

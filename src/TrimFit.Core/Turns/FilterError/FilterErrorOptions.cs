@@ -17,6 +17,11 @@ public sealed record FilterErrorOptions
     /// bends the pull of a machine whose slope is small.</summary>
     public double CurvatureFloorRadPerSec { get; init => field = Guard.Positive(value); } = double.DegreesToRadians(1.5);
 
+    /// <summary>Standard deviation of the curvature's prior, per full thrust squared, for a slope per full thrust with its variance: the slope's
+    /// own error is counted in, or a slope that happens to come out near zero would forbid all curvature.</summary>
+    internal double CurvaturePriorSd(double slope, double slopeVariance) =>
+        double.Hypot(CurvatureShare * Math.Sqrt((slope * slope) + slopeVariance), CurvatureFloorRadPerSec);
+
     /// <summary>Standardised innovation beyond which a measurement's noise is raised (Chang 2014). Default 3.5: one in 2,000 of clean normal ones.</summary>
     public double OutlierLimit { get; init => field = Guard.Positive(value); } = 3.5;
 
