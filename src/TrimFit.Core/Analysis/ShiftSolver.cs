@@ -101,7 +101,7 @@ internal static class ShiftSolver
         if (carabiners?.TwistRatio is not double c || harness?.TwistRatio is not double h)
             return null;
         (double low, double high, double worst) = c > h ? (h, c, carabiners.TwistRatioHigh95 ?? 0) : (c, h, harness.TwistRatioHigh95 ?? 0);
-        if (!(high >= NotableTwistRatio * low) || worst < TwistCaution)
+        if (!(high >= NotableTwistRatio * low) || worst < TwistCaution / 2) // a ratio that is small either way needs no explaining
             return null;
         return Finding.Of(c > h ? FindingCode.TwistByCarabiners : FindingCode.TwistByHarness, c, h);
     }

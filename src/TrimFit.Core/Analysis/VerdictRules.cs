@@ -101,7 +101,7 @@ internal static class VerdictRules
     /// lies within one step of what is set.</summary>
     public static bool IsFirm(VerdictStrength soFar, TrimPosterior posterior, TurnSignals signals, TurnFit fit, ImmutableArray<AdjustmentReport> adjustments, Rig rig)
     {
-        if (soFar != VerdictStrength.Fair || !posterior.DirectUsed || !signals.HasBrakes || !signals.YawSignConfirmed
+        if (soFar == VerdictStrength.None || !posterior.DirectUsed || !signals.HasBrakes || !signals.YawSignConfirmed
             || fit[TurnCoefficient.BrakeDifference] is not Estimate brake
             || !(brake.Value > StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom) * brake.StandardError)
             || adjustments.FirstOrDefault(ShiftSolver.Recommendable) is not AdjustmentReport best)

@@ -26,12 +26,12 @@ internal sealed record MadeUpFlight
     public double WindNorth { get; init; } = 3;
     public double LevelFraction { get; init; } = 0.6;
     public ulong Seed { get; init; } = 7;
-    /// <summary>Turn while the ballast is out to the right, deg/s; legs 3 and 8 have it right, 5 and 10 left.</summary>
+    /// <summary>Turn while the ballast is out to the right, deg/s; leg 4 has it right, leg 10 left, both with the engine off.</summary>
     public double BallastDegPerSec { get; init; }
 
     /// <summary>Ballast of 5 kg at 0.472 m: 5 × 0.472/118 = 20 mm of CG shift.</summary>
     public const double BallastKg = 5, BallastArmM = 0.472;
-    private static readonly (int Leg, int Side)[] _ballast = [(3, 1), (8, 1), (5, -1), (10, -1)];
+    private static readonly (int Leg, int Side)[] _ballast = [(4, 1), (10, -1)];
 
     /// <summary>The sheet's legs with the ballast out; without a size they are weight shifts of unknown size.</summary>
     public FoundLeg[] Legs(bool sized = true, double armSign = 1) =>
