@@ -22,7 +22,7 @@ internal static class FitCommand
                 Diagnostics = import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] },
             };
         }
-        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions);
+        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions, import.Legs.AsSpan());
         var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),

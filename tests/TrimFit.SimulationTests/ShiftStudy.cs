@@ -15,8 +15,11 @@ internal static class ShiftStudy
     /// <summary>Depths of the thrust line below the carabiners that count as near the carabiners and near the CG, m.</summary>
     private const double NearCarabinersM = 0.13, NearCgM = 0.30;
 
-    /// <summary>Draws of a posterior: enough that the ends of an interval move by 2 % of its width.</summary>
-    private static readonly TrimOptions _options = new() { Draws = 3000 };
+    /// <summary>The simulator looks for a null within this travel, m.</summary>
+    private const double LargestTravelM = 0.25;
+
+    /// <summary>Draws of a posterior: enough that the ends of an interval move by 3 % of its width.</summary>
+    private static readonly TrimOptions _options = new() { Draws = 2000 };
 
     private static readonly (string Name, SensitivitySources Sources)[] _sources =
     [
@@ -57,7 +60,7 @@ internal static class ShiftStudy
         }
         TrimPosterior ordinary = flight.Posterior(SensitivitySources.Torque, _options);
         ImmutableArray<AdjustmentReport> adjustments = ShiftSolver.Adjustments(
-            flight.Rig, spread, ordinary, levels, flight.Signals, flight.Fit, constantFirst: false, only: Kinds);
+            flight.Rig, spread, ordinary, levels, flight.Signals, flight.Fit, constantFirst: false, out _, Kinds);
         TrimAnalysis answer = TrimAnalysis.Run(flight.Signals, flight.Fit, flight.Rig, _options with { Draws = 500 });
         var travels = new List<TravelOutcome>();
         double before = SteadyTurn.Rate(flight.Scenario, flight.Truth.LevelThrustN);
@@ -70,7 +73,9 @@ internal static class ShiftStudy
                 double after = TurnAfter(flight.Scenario, a.Kind, a.FirstStep, flight.Truth.LevelThrustN);
                 helps = Math.Abs(after) < Math.Abs(before) && Math.Sign(after) == Math.Sign(before);
             }
-            travels.Add(new(a.Kind, truth is double t && a.Interval95.Contains(t), a.Interval95.HalfWidth, helps, flight.Scenario.Propeller.ThrustLineDepthM,
+            // Where no travel within 0.25 m nulls the turn, an honest interval reaches beyond.
+            bool covers = truth is double t ? a.Interval95.Contains(t) : a.Interval95.Upper > LargestTravelM || a.Interval95.Lower < -LargestTravelM;
+            travels.Add(new(a.Kind, covers, a.Interval95.HalfWidth, helps, flight.Scenario.Propeller.ThrustLineDepthM,
                 answer.Verdict.TravelGiven, truth is double d && d * a.Rounded < 0));
         }
         return new(shifts, [.. travels], answer.Verdict.Code, answer.Verdict.Strength,

@@ -29,6 +29,9 @@ internal static class ShiftSolver
     /// <summary>Twist ratios that differ by less than this rank alike; then the order of <see cref="AdjustmentKind"/> decides.</summary>
     private const double RankingTwistStep = 0.1;
 
+    /// <summary>One way twists the risers this many times as much as another before the reason is given.</summary>
+    private const double NotableTwistRatio = 2;
+
     private static readonly PowerSetting[] _settings = [PowerSetting.Off, PowerSetting.Idle, PowerSetting.Cruise, PowerSetting.Full];
 
     public static ShiftReport Shift(TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit)
@@ -58,18 +61,23 @@ internal static class ShiftSolver
 
     public static ImmutableArray<AdjustmentReport> Adjustments(
         Rig rig, RigSpread spread, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, TurnFit fit, bool constantFirst,
-        ImmutableArray<AdjustmentKind> only = default)
+        out ImmutableArray<Finding> notOffered, ImmutableArray<AdjustmentKind> only = default)
     {
+        var unknown = ImmutableArray.CreateBuilder<Finding>();
         var reports = new List<AdjustmentReport>();
         foreach (Adjustment adjustment in Adjustment.All.Where(a => a.AppliesTo(rig) && (only.IsDefault || only.Contains(a.Kind))))
         {
             // No harness hang-point travel for a large constant pull before trimmers, lines and brakes are checked (model page section 2).
             if (constantFirst && adjustment.Kind is (AdjustmentKind.HarnessFront or AdjustmentKind.HarnessFrontRear))
                 continue;
-            if (TravelEffect.Of(adjustment, rig, posterior, signals, fit) is TravelEffect effect
-                && Solve(adjustment, effect, rig, spread, posterior, levels, signals) is AdjustmentReport report)
+            if (TravelEffect.Of(adjustment, rig, posterior, signals, fit) is not TravelEffect effect)
+                continue;
+            if (Solve(adjustment, effect, rig, spread, posterior, levels, signals) is AdjustmentReport report)
                 reports.Add(report);
+            else
+                unknown.Add(Finding.Of(FindingCode.EffectSignUnknown, (int)adjustment.Kind));
         }
+        notOffered = unknown.ToImmutable();
         return
         [
             .. reports.OrderBy(r => r.WithinLimits == false)
@@ -79,6 +87,23 @@ internal static class ShiftSolver
                 .ThenBy(r => Math.Round((r.TwistRatioHigh95 ?? 0) / RankingTwistStep))
                 .ThenBy(r => r.Kind),
         ];
+    }
+
+    /// <summary>Whether an adjustment may be named as the thing to do: not refused for riser twist, not beyond the rig's limits.</summary>
+    public static bool Recommendable(AdjustmentReport report) =>
+        report.WithinLimits != false && !report.Notes.Any(n => n.Code is FindingCode.TwistRefused or FindingCode.BeyondLimit);
+
+    /// <summary>Why riser carabiners and harness hang points differ in riser twist, when they do by much and it matters; null otherwise.</summary>
+    public static Finding? WhyTwist(ImmutableArray<AdjustmentReport> adjustments)
+    {
+        AdjustmentReport? carabiners = adjustments.FirstOrDefault(a => a.Kind == AdjustmentKind.CarabinerPair);
+        AdjustmentReport? harness = adjustments.FirstOrDefault(a => a.Kind == AdjustmentKind.HarnessFrontRear);
+        if (carabiners?.TwistRatio is not double c || harness?.TwistRatio is not double h)
+            return null;
+        (double low, double high, double worst) = c > h ? (h, c, carabiners.TwistRatioHigh95 ?? 0) : (c, h, harness.TwistRatioHigh95 ?? 0);
+        if (!(high >= NotableTwistRatio * low) || worst < TwistCaution)
+            return null;
+        return Finding.Of(c > h ? FindingCode.TwistByCarabiners : FindingCode.TwistByHarness, c, h);
     }
 
     private static AdjustmentReport? Solve(

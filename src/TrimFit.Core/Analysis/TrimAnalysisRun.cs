@@ -56,9 +56,22 @@ public sealed partial record TrimAnalysis
                 bool constantFirst = Math.Abs(shift.ConstantPartM) > VerdictRules.LargestConstantPartM;
                 if (constantFirst)
                     warnings.Add(Finding.Of(FindingCode.ConstantPartFirst, shift.ConstantPartM));
-                adjustments = ShiftSolver.Adjustments(rig, spread, posterior, levels, signals, fit, constantFirst);
+                adjustments = ShiftSolver.Adjustments(rig, spread, posterior, levels, signals, fit, constantFirst, out ImmutableArray<Finding> notOffered);
+                warnings.AddRange(notOffered);
+                if (ShiftSolver.WhyTwist(adjustments) is Finding why)
+                    warnings.Add(why);
+                if (VerdictRules.IsFirm(strength, posterior, signals, fit, adjustments, rig))
+                    strength = VerdictStrength.Firm;
             }
+            (string Source, FiellerSet Set)[] ratios = [.. RatioCheck.Of(signals, fit, levels, options)];
+            shift = shift with { Ratios = [.. ratios.Select(r => r.Set)] };
+            warnings.AddRange(ratios.Where(r => r.Set.Kind != FiellerKind.Interval)
+                .Select(r => Finding.Of(FindingCode.RatioUnbounded, SourceAlone.IndexOf(r.Source))));
         }
+        TravelEffect? first = adjustments.FirstOrDefault(ShiftSolver.Recommendable) is AdjustmentReport best
+            ? TravelEffect.Of(Adjustment.All.Single(a => a.Kind == best.Kind), rig, posterior, signals, fit) : null;
+        if (CheapestCheck.Of(outcome, rig, posterior, levels, first) is Finding check)
+            warnings.Add(check);
         if (pull.AtBalance.RateRadPerSec is double rate && Math.Abs(rate) > VerdictRules.StrongPullRadPerSec)
             warnings.Add(Finding.Of(FindingCode.StrongPull, rate));
 

@@ -29,6 +29,10 @@ internal sealed class TrimPosterior
     /// <summary>Fewer effective draws than this make no interval.</summary>
     private const double FewestEffective = 50;
 
+    /// <summary>Below this many effective draws the posterior is drawn again with more.</summary>
+    private const double WantedEffective = 200;
+    private const int MoreDraws = 5;
+
     /// <summary>A prior-predictive p below this is a conflict (model page section 3).</summary>
     private const double ConflictP = 0.05;
 
@@ -79,6 +83,15 @@ internal sealed class TrimPosterior
     public static TrimPosterior Draw(
         Rig rig, RigSpread spread, TurnFit fit, TurnSignals signals, TrimOptions options, SensitivitySources allowed = SensitivitySources.All)
     {
+        TrimPosterior posterior = Once(rig, spread, fit, signals, options, allowed);
+        // Sources that agree only in a corner of the priors leave few draws with weight; more of them cost time, too few cost the interval's ends.
+        return posterior.Report.EffectiveSamples < WantedEffective
+            ? Once(rig, spread, fit, signals, options with { Draws = MoreDraws * options.Draws }, allowed)
+            : posterior;
+    }
+
+    private static TrimPosterior Once(Rig rig, RigSpread spread, TurnFit fit, TurnSignals signals, TrimOptions options, SensitivitySources allowed)
+    {
         int count = options.Draws;
         var random = new SeededRandom(options.Seed);
         var c = new FitDraws(fit, signals.FullThrust);
@@ -92,6 +105,7 @@ internal sealed class TrimPosterior
         // The user's value and the prior are both log-normal: their product is too.
         (double logMedian, double logSd) = Combine(Math.Log(PriorMedian), PriorLogSd, userMedian, userLogSd);
 
+        var parabola = new FlownParabola(signals);
         var g1 = new double[count];
         var g2 = new double[count];
         var rigs = new RigValues[count];
@@ -100,7 +114,7 @@ internal sealed class TrimPosterior
         {
             rigs[k] = spread.Draw(random);
             yaw[k] = YawRatioMedian * Math.Exp(_yawRatioLogSd * random.NextNormal());
-            (g1[k], g2[k]) = Growth(rigs[k], yaw[k]);
+            (g1[k], g2[k]) = parabola.Of(rigs[k], yaw[k]);
         }
         double right = g1.Count(g => g > 0) / (double)count;
 
@@ -298,16 +312,6 @@ internal sealed class TrimPosterior
     /// <summary>95 % interval of a weighted sample.</summary>
     public static ConfidenceInterval Interval95(double[] values, double[] weights) =>
         new(WeightedQuantile.Of(values, weights, 0.025), WeightedQuantile.Of(values, weights, 0.975), 0.95);
-
-    /// <summary>Growth of the turning offset over x = T/T_full: linear and quadratic part of a parabola through 0, half and full thrust.</summary>
-    /// <remarks>x comes from rpm or throttle, so the draw's own full thrust belongs to x = 1 whatever the scale of the fit's newtons.</remarks>
-    private static (double Linear, double Quadratic) Growth(in RigValues rig, double yawRatio)
-    {
-        double at0 = RigStatics.TurningOffset(rig, 0, yawRatio);
-        double half = RigStatics.TurningOffset(rig, rig.FullThrustN / 2, yawRatio) - at0;
-        double full = RigStatics.TurningOffset(rig, rig.FullThrustN, yawRatio) - at0;
-        return ((4 * half) - full, (2 * full) - (4 * half));
-    }
 
     private static (double LogMedian, double LogSd) Combine(double logPrior, double priorSd, double userMedian, double userSd)
     {

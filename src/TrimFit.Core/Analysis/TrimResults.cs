@@ -88,6 +88,9 @@ public sealed record ShiftReport
     public required double ConstantPartM { get; init; }
     /// <summary>The part of the shift that answers the pull of power, m (median).</summary>
     public required double PowerPartM { get; init; }
+    /// <summary>Fieller's sets where the shift is a plain ratio of two estimates, one for each ballast or pair source: a check beside the posterior,
+    /// in m of the ballast's CG shift or in travels of the pair.</summary>
+    public ImmutableArray<FiellerSet> Ratios { get; init; } = [];
     /// <summary>Turn left at each power once the shift is made.</summary>
     public required ImmutableArray<PullAtSetting> TurnLeftAt { get; init; }
 }
@@ -257,7 +260,7 @@ public enum FindingCode
     TwistRefused,
     /// <summary>Changes the distance between the carabiners: new spacing, m.</summary>
     SpacingChanges,
-    /// <summary>The effect per millimetre changes sign inside the spread; not offered.</summary>
+    /// <summary>The effect per millimetre changes sign inside the spread; not offered: number of the <see cref="AdjustmentKind"/>.</summary>
     EffectSignUnknown,
     /// <summary>Rotation cancels: no power pull from torque can be claimed.</summary>
     ContraRotating,
@@ -323,6 +326,14 @@ public enum FindingCode
     FullThrustByClimb,
     /// <summary>The search over the turn's time constants and noise levels did not settle: steps taken.</summary>
     TurnSearchNotSettled,
+    /// <summary>The one cheapest check that could overturn the answer: number of the <see cref="Analysis.NextCheck"/>, share of the answer's variance it would take away.</summary>
+    NextCheck,
+    /// <summary>Moving the riser carabiners twists the risers far more than moving the harness hang points: twist ratios of the two.</summary>
+    TwistByCarabiners,
+    /// <summary>Moving the harness hang points twists the risers far more than moving the riser carabiners: twist ratios of the two.</summary>
+    TwistByHarness,
+    /// <summary>The shift by the ratio of pull and known shift has no bound: number of the source (2 ballast, 3 pair).</summary>
+    RatioUnbounded,
     /// <summary>Measurements of the turn that were out of line with the rest and count less: how many, of how many.</summary>
     TurnOutliers,
 }

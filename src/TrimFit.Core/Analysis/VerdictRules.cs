@@ -97,15 +97,28 @@ internal static class VerdictRules
         return Insufficient(reasons);
     }
 
-    /// <summary>Strength of a shift from one flight: fair needs torque and an interval within half the median either way, weak a certain direction.</summary>
+    /// <summary>Firm: a known shift was flown, brakes were logged and stepped, the yaw sign is confirmed, and the recommended travel's interval
+    /// lies within one step of what is set.</summary>
+    public static bool IsFirm(VerdictStrength soFar, TrimPosterior posterior, TurnSignals signals, TurnFit fit, ImmutableArray<AdjustmentReport> adjustments, Rig rig)
+    {
+        if (soFar != VerdictStrength.Fair || !posterior.DirectUsed || !signals.HasBrakes || !signals.YawSignConfirmed
+            || fit[TurnCoefficient.BrakeDifference] is not Estimate brake
+            || !(brake.Value > StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom) * brake.StandardError)
+            || adjustments.FirstOrDefault(ShiftSolver.Recommendable) is not AdjustmentReport best)
+            return false;
+        double step = rig.Limits.GetValueOrDefault(best.Kind)?.Step ?? Adjustment.All.Single(a => a.Kind == best.Kind).DefaultStep;
+        return best.Interval95.Upper - best.Rounded <= step && best.Rounded - best.Interval95.Lower <= step;
+    }
+
+    /// <summary>Strength of a shift from one flight: fair needs torque, a ballast leg or a pair, and an interval within half the median either way, weak a certain direction.</summary>
     public static VerdictStrength StrengthOf(TrimPosterior posterior, ShiftReport shift)
     {
         double median = shift.CgShiftM;
         ConfidenceInterval interval = shift.Interval95;
-        if (!interval.ExcludesZero)
+        if (!interval.ExcludesZero || posterior.Report.RadPerSecPerM is null) // without enough draws there is no interval to speak of
             return VerdictStrength.None;
         bool within = Math.Max(interval.Upper - median, median - interval.Lower) <= FairHalfWidth * Math.Abs(median);
-        return posterior.TorqueUsed && within ? VerdictStrength.Fair : VerdictStrength.Weak;
+        return (posterior.TorqueUsed || posterior.DirectUsed) && within ? VerdictStrength.Fair : VerdictStrength.Weak;
     }
 
     private static Outcome Insufficient(ImmutableArray<Finding>.Builder reasons) => new(VerdictCode.Insufficient, reasons.ToImmutable(), false, false);

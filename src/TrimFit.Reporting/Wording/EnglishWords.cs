@@ -265,6 +265,7 @@ internal sealed record EnglishWords : Words
         ImmutableArray<double> values = finding.Values.IsDefault ? [] : finding.Values;
         string Value(int i, Func<double, string> show) => i < values.Length && double.IsFinite(values[i]) ? show(values[i]) : "an unknown value";
         double Sign(int i) => i < values.Length ? values[i] : 0;
+        string Source(int i) => Sign(i) switch { 0 => "the prior", 1 => "the torque", 2 => "the ballast leg", 3 => "the pair of flights", _ => "the rig file" };
         return finding.Code switch
         {
             FindingCode.NoThrust => "The log says nothing about thrust: no throttle, rpm, power or current. Log one of them, or name its column, such as --column rpm=NAME.",
@@ -274,7 +275,24 @@ internal sealed record EnglishWords : Words
             FindingCode.PullTooUncertain => $"The pull is known to within {Value(0, numbers.RateNumber)} deg/s and must be known to within {Value(1, numbers.Rate)}. Fly more legs, in calmer air.",
             FindingCode.BalanceThrustNotFlown => $"The power at which it is to be nulled, {Value(0, numbers.Percent)} of full, was not flown: the flight has {Value(1, numbers.PercentNumber)} to {Value(2, numbers.Percent)}. Fly a leg there.",
             FindingCode.RotationConflict => $"The pull grows to the {Side(Sign(0))} with power, but the rig file predicts the other side in {Value(1, numbers.Percent)} of what is possible. Check first the propeller's rotation (stand behind, look the way it flies), then the signs of gyro and steering, then the thrust line.",
-            FindingCode.SensitivityConflict => $"What the torque should do and what the flight shows do not fit together (p = {Value(0, p => numbers.Plain(p, 3))}). Check power, propeller speed, masses and thrust line in the rig file.",
+            FindingCode.SensitivityConflict => $"The growth of the pull with power is {Value(1, r => numbers.Significant(r, 2))} times what the torque explains (p = {Value(0, p => numbers.Plain(p, 3))}): look at the thrust line before moving anything, then at power, propeller speed and masses in the rig file.",
+            FindingCode.SourcesConflict => $"Two sources of the sensitivity contradict each other: {Source(1)} gives {Value(2, r => numbers.Significant(r, 2))} times what {Source(0)} gives (p = {Value(3, p => numbers.Plain(p, 3))}). Check side and size of what was shifted before moving anything.",
+            FindingCode.RatioUnbounded => $"The turn by {Source(0)} cannot be told from no turn, so by itself it puts no bound on the shift. Shift more, or fly longer legs.",
+            FindingCode.TwistByCarabiners => $"At full power moving the riser carabiners brings the twist ratio to {Value(0, q => numbers.Plain(q, 2))}, moving the harness hang points to {Value(1, q => numbers.Plain(q, 2))}: the thrust line passes near the height of the riser carabiners, so what twists is how far beside their middle the thrust pulls. Moving the riser carabiners takes them away from the thrust line; moving the harness hang points leaves both where they are.",
+            FindingCode.TwistByHarness => $"At full power moving the harness hang points brings the twist ratio to {Value(1, q => numbers.Plain(q, 2))}, moving the riser carabiners to {Value(0, q => numbers.Plain(q, 2))}: the thrust line passes near the height of the CG, so what twists is how far beside the CG the thrust pulls. Moving the harness hang points takes the CG away from the thrust line; moving the riser carabiners leaves the two together.",
+            FindingCode.NextCheck => "The cheapest check that could overturn this answer: " + (NextCheck)Sign(0) switch
+            {
+                NextCheck.Rotation => "stand behind the machine and see which way the propeller turns, looking the way it flies.",
+                NextCheck.BrakeColumns => "see which brake column of the log moves when the right brake is pulled.",
+                NextCheck.HandsOffLegs => "fly again with a flight sheet that marks the hands-off legs, or log the brakes.",
+                NextCheck.HangCheck => "the hang check, two scales under the riser carabiners, which shows where the weight sits.",
+                NextCheck.ThrustLine => "measure how far beside the middle between the riser carabiners the thrust line passes.",
+                NextCheck.Depths => "measure how deep the thrust line and the CG hang below the riser carabiners.",
+                NextCheck.HangBack => "measure the hang-back of the thrust axis in the hang test.",
+                NextCheck.Torque => "find the engine's power and the propeller's speed at full power.",
+                NextCheck.MoreLegs => "fly more legs at idle, level flight and full power, in turn.",
+                NextCheck.KnownShift => "fly the first step and fit again, or fly a ballast leg to each side.",
+            },
             FindingCode.NoSteeringNoHandsOff => "Neither the brakes nor hands-off spans are in the log: intended turns look like a pull and a held course hides it. Log the brakes, or mark hands-off spans in a flight sheet.",
             FindingCode.BrakeSignReversed => "Pulling the right brake seems to turn it left: the brake columns may be swapped, or the wing reverses. The brakes were not used; check which column is which.",
             FindingCode.BrakesCollinear => $"Brakes and power moved together (correlation {Value(0, c => numbers.Plain(c, 2))}), so their effects cannot be told apart. Fly brake steps at constant power.",
@@ -299,7 +317,7 @@ internal sealed record EnglishWords : Words
             FindingCode.TwistWarning => $"A sudden throttle change can twist the risers: the twist ratio may reach {Value(0, q => numbers.Plain(q, 2))}.",
             FindingCode.TwistRefused => $"Refused: the twist ratio may reach {Value(0, q => numbers.Plain(q, 2))}; above 1 nothing holds the frame against riser twist.",
             FindingCode.SpacingChanges => $"The distance between the riser carabiners becomes {Value(0, numbers.Length)}.",
-            FindingCode.EffectSignUnknown => "Not offered: its effect may go either way.",
+            FindingCode.EffectSignUnknown => $"Not offered, because its effect may go either way: {PartShort((AdjustmentKind)Sign(0))}.",
             FindingCode.ContraRotating => "The propellers' torques cancel, so the torque cannot explain a pull that grows with power.",
             FindingCode.FewThrustLevels => "The flight has few different powers, so a curve in the pull over power would not show.",
             FindingCode.ConstantPullSource => "A constant pull can come from the wing, the lines, the harness, the way of sitting or a brake that rests pulled; one flight cannot tell which.",

@@ -32,14 +32,14 @@ internal sealed record FitAnswer
     public Finding? Reason { get; init; }
     public required VerdictStrength Strength { get; init; }
 
-    /// <summary>The adjustment to name first: the first in the result's order that was not refused.</summary>
+    /// <summary>The adjustment to name first: the first in the result's order that was neither refused nor lies beyond the rig's limits.</summary>
     public static AdjustmentReport? Best(TrimAnalysis analysis)
     {
         if (!analysis.Verdict.TravelGiven || analysis.Verdict.Strength == VerdictStrength.None)
             return null;
         foreach (AdjustmentReport a in analysis.Adjustments)
         {
-            if (!a.Notes.Any(n => n.Code is FindingCode.TwistRefused or FindingCode.EffectSignUnknown))
+            if (a.WithinLimits != false && !a.Notes.Any(n => n.Code is FindingCode.TwistRefused or FindingCode.BeyondLimit))
                 return a;
         }
         return null;
@@ -54,7 +54,7 @@ internal sealed record FitAnswer
         if (best is null && reason is null) // nothing offered although travel may be stated: the refusal is the reason
         {
             reason = analysis.Adjustments.SelectMany(a => a.Notes)
-                .FirstOrDefault(n => n.Code is FindingCode.TwistRefused or FindingCode.EffectSignUnknown);
+                .FirstOrDefault(n => n.Code is FindingCode.TwistRefused or FindingCode.BeyondLimit);
         }
         AnswerKind kind = (pull.RateRadPerSec, pull.Interval95, analysis.Verdict.Code) switch
         {

@@ -8,8 +8,10 @@ public sealed record FilterErrorOptions
     /// brake step. 0 switches averaging off.</summary>
     public double BlockSec { get; init => field = Guard.NotNegative(value); } = 0.2;
 
-    /// <summary>Standard deviation of the curvature's prior, as a share of the slope per full thrust. Default 0.25.</summary>
-    public double CurvatureShare { get; init => field = Guard.Positive(value); } = 0.25;
+    /// <summary>Standard deviation of the curvature's prior, as a share of the slope per full thrust. Default 1: riser twist bends the
+    /// pull of machines whose thrust line passes high or low by more than a quarter of the slope (DEVELOPERS.md, "Shift coverage"), and an
+    /// interval that rules such a bend out does not hold the pull.</summary>
+    public double CurvatureShare { get; init => field = Guard.Positive(value); } = 1;
 
     /// <summary>Curvature that is possible whatever the slope, rad/s at full thrust, added in squares to the share. Default 1.5 deg/s: riser twist
     /// bends the pull of a machine whose slope is small.</summary>
