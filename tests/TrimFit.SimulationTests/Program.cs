@@ -21,9 +21,14 @@ internal static class Program
 
     private static int Coverage(string[] args)
     {
-        int flights = Number("--flights", 2000), threads = Number("--threads", 1), seed = Number("--seed", 1);
-        int hard = Number("--hard", Math.Max(1, flights / 4));
+        int flights = (int)Number("--flights", 2000), threads = (int)Number("--threads", 1), seed = (int)Number("--seed", 1);
+        int hard = (int)Number("--hard", Math.Max(1, flights / 4));
         double minutes = Number("--minutes", 24 * 60);
+        if (flights < 1 || threads < 1 || hard < 1 || !(minutes > 0))
+        {
+            Console.Error.WriteLine("coverage [--flights N] [--hard N] [--minutes M] [--threads N] [--seed N] [--only part of a row's name]: numbers above 0");
+            return 2;
+        }
         string only = Text("--only");
         var rows = new List<(string Name, Sensors Sensors, Hardship Hardship, int Flights)>
         {
@@ -58,10 +63,11 @@ internal static class Program
         }
         return 0;
 
-        int Number(string option, int otherwise)
+        double Number(string option, int otherwise)
         {
             string text = Text(option);
-            return text.Length == 0 ? otherwise : int.Parse(text, CultureInfo.InvariantCulture);
+            return text.Length == 0 ? otherwise
+                : double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out double number) ? number : double.NaN;
         }
 
         string Text(string option)

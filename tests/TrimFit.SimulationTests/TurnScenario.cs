@@ -95,7 +95,7 @@ internal sealed record TurnScenario
             LevelShare = random.Between(0.45, 0.65),
             Constant = random.Normal() * Deg(1.5),
             SlopePerFull = slope,
-            CurvaturePerFull = 0.25 * random.Normal() * Math.Abs(slope),
+            CurvaturePerFull = random.Normal() * double.Hypot(0.25 * slope, Deg(1.5)), // the rich simulator's machines bend that much by riser twist
             Brake = Deg(random.Between(25, 60)),
             DisturbanceRms = Deg(1.4 * Math.Exp(0.4 * random.Normal())),
             DisturbanceTau = 7 * Math.Exp(0.5 * random.Normal()),

@@ -1,5 +1,4 @@
 using TrimFit.Core.Rigging;
-using TrimFit.Core.Turns;
 
 namespace TrimFit.Core.Analysis;
 

@@ -200,7 +200,7 @@ internal static class ReportFixture
                     Columns = [new("t", ChannelRole.Time, "s", "name", 0), new(columnName, ChannelRole.YawRate, "deg/s", "header", 1), new("note", null, "", "", 0)],
                 },
             ],
-            Sampling = new() { Start = new DateTimeOffset(2025, 5, 17, 8, 0, 0, TimeSpan.Zero), DurationSec = 100, RateHz = 10, Gaps = [new(40, 3)] },
+            Sampling = new() { Start = new DateTimeOffset(2025, 5, 17, 8, 0, 0, TimeSpan.Zero), StartIsUtc = true, DurationSec = 100, RateHz = 10, Gaps = [new(40, 3)] },
             Warnings = [new("demo", warning)],
         });
 

@@ -198,7 +198,11 @@ public class FilterErrorEstimatorTests
         {
             TurnScenario machine = Machine(seed, sensors: sensors) with
             {
-                Constant = 0, SlopePerFull = 0, CurvaturePerFull = 0, DisturbanceRms = double.DegreesToRadians(0.8), DurationSec = 600,
+                Constant = 0,
+                SlopePerFull = 0,
+                CurvaturePerFull = 0,
+                DisturbanceRms = double.DegreesToRadians(0.8),
+                DurationSec = 600,
             };
             TurnFit fit = _estimator.Estimate(MadeUpFlight.Fly(machine, new Gauss(seed + 1000)));
             Assert.InRange(fit[TurnCoefficient.BrakeDifference]!.Value.Value / machine.Brake, 0.5, 1.5);
