@@ -61,6 +61,7 @@ internal sealed class KeptFits
             lock (_writing)
                 File.AppendAllText(_path, line + "\n");
         }
+        _fits[(seed, wrong)] = made;
         return made;
     }
 }
