@@ -45,4 +45,19 @@ public class RealLogTests
         Assert.Contains(missing, verdict.GetProperty("reasons").EnumerateArray().Select(r => r.GetProperty("code").GetString()));
         Assert.Empty(result.RootElement.GetProperty("adjustments").EnumerateArray());
     }
+
+    [Fact]
+    public void A_real_soft_wing_turns_by_its_steering_as_least_squares_says_and_is_asked_about_its_sign()
+    {
+        BuiltProgram.Outcome run = BuiltProgram.Run(null, "fit", Log("kite-v3-20191008_0019.csv"), "--rig", BuiltProgram.Sample("uncorrected-rig.toml"), "--json", "-",
+            "--column", "brake_difference=kite_actual_steering:%", "--column", "yaw_rate=kite_1_yaw_rate:rad/s");
+        using JsonDocument result = JsonDocument.Parse(run.Output);
+        JsonElement steering = result.RootElement.GetProperty("turn_model").GetProperty("coefficients").EnumerateArray().Single(c => c.GetProperty("name").GetString() == "brake_difference");
+        Assert.Equal("deg/s per %", steering.GetProperty("unit").GetString());
+        Assert.InRange(steering.GetProperty("value").GetDouble(), -2.2 * 1.1, -2.2 * 0.9); // README of the log; Scripts/kite_least_squares.py: -2.174
+        Assert.Equal(4, run.ExitCode);
+        string?[] reasons = [.. result.RootElement.GetProperty("verdict").GetProperty("reasons").EnumerateArray().Select(r => r.GetProperty("code").GetString())];
+        Assert.Contains("brake_sign_reversed", reasons);
+        Assert.Contains("no_thrust", reasons);
+    }
 }

@@ -12,7 +12,7 @@ public sealed partial class TurnSignals
 
     /// <summary>A turn is strong and intended beyond this rate, unless three times the flight's own median is more (a kite turns all the time).</summary>
     private static readonly double _strongTurnRadPerSec = double.DegreesToRadians(15);
-    private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3;
+    private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3, MostShare = 0.5;
 
     /// <summary>Makes a flight ready for an estimator.</summary>
     /// <param name="log">The flight.</param>
@@ -58,7 +58,10 @@ public sealed partial class TurnSignals
             double[] sizes = [.. rate.Where((r, i) => use[i] && double.IsFinite(r)).Select(Math.Abs)];
             double strong = Math.Max(_strongTurnRadPerSec, sizes.Length > 0 ? StrongTurnOverMedian * QuantileType7.Of(sizes, 0.5) : 0);
             bool[] turning = Widen(time, [.. rate.Select(r => Math.Abs(r) > strong)], AroundStrongTurnSec);
-            LeaveOut(i => turning[i], StrongTurnReason);
+            // Where steered turns are most of the flight they are what there is to learn from, not an exception to leave out.
+            bool mostOfIt = hasBrakes && use.Where((u, i) => u && turning[i]).Count() > MostShare * use.Count(u => u);
+            if (!mostOfIt)
+                LeaveOut(i => turning[i], StrongTurnReason);
         }
 
         bool declared = log.Has(ChannelRole.HandsOff);
