@@ -1,10 +1,8 @@
 using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
-using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
 using TrimFit.Reporting.Wording;
-using TrimFit.Simulation;
 
 namespace TrimFit.Tests.Analysis;
 

@@ -1,6 +1,5 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
-using TrimFit.Reporting;
 using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Tests.Analysis;
