@@ -85,20 +85,31 @@ public class AdjustmentRulesTests
         {
             Mass = new()
             {
-                PilotKg = Reading.Measured(88), PowerUnitKg = Reading.Measured(30), PostureM = Reading.Measured(0), CgDepthM = Reading.Measured(0.40),
+                PilotKg = Reading.Measured(88),
+                PowerUnitKg = Reading.Measured(30),
+                PostureM = Reading.Measured(0),
+                CgDepthM = Reading.Measured(0.40),
                 PowerUnitLateralM = Reading.Measured(0),
             },
             Carabiners = new() { LeftM = Reading.Measured(-0.22), RightM = Reading.Measured(0.22) },
             HangPoints = new() { FrontShare = Reading.Measured(0.8), FrontOffsetM = Reading.Measured(0), RearOffsetM = Reading.Measured(0) },
             Propeller = new()
             {
-                Rotation = PropellerRotation.Clockwise, DiameterM = 1.4, ShaftPowerW = 20_000, PowerRelativeSd = 0.02, FullPowerRevPerSec = 55,
-                StaticThrustN = Reading.Measured(900, 9), ThrustLineM = Reading.Measured(0), ThrustLineDepthM = Reading.Measured(thrustDepth),
+                Rotation = PropellerRotation.Clockwise,
+                DiameterM = 1.4,
+                ShaftPowerW = 20_000,
+                PowerRelativeSd = 0.02,
+                FullPowerRevPerSec = 55,
+                StaticThrustN = Reading.Measured(900, 9),
+                ThrustLineM = Reading.Measured(0),
+                ThrustLineDepthM = Reading.Measured(thrustDepth),
                 HangBackRad = Reading.Measured(0),
             },
             Wing = new()
             {
-                MassKg = Reading.Measured(6), LineLengthM = Reading.Measured(7), YawStiffnessNmPerRad = Reading.Measured(35, 1),
+                MassKg = Reading.Measured(6),
+                LineLengthM = Reading.Measured(7),
+                YawStiffnessNmPerRad = Reading.Measured(35, 1),
                 SensitivityRadPerSecPerM = Reading.Measured(double.DegreesToRadians(90), double.DegreesToRadians(2)),
             },
         };

@@ -124,7 +124,9 @@ public class SensitivitySourcesTests
             HangPoints = new() { FrontShare = Reading.Measured(0.8), FrontOffsetM = Reading.Measured(0), RearOffsetM = Reading.Measured(0) },
             Propeller = MadeUpFlight.Rig().Propeller with
             {
-                ThrustLineDepthM = Reading.Measured(0.40, 0.005), HangBackRad = Reading.Measured(0, 0.005), ThrustLineM = Reading.Measured(0, 0.001),
+                ThrustLineDepthM = Reading.Measured(0.40, 0.005),
+                HangBackRad = Reading.Measured(0, 0.005),
+                ThrustLineM = Reading.Measured(0, 0.001),
             },
         };
         TurnSignals signals = Signals();
