@@ -9,7 +9,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Rig(output), Synth(error),
+            Inspect(output), Fit(output, error), Rig(output), Synth(error), JobCommandTree.Create(output, error),
         };
         return root;
     }

@@ -35,7 +35,7 @@ internal static class FitCommand
     }
 
     /// <summary>Balanced needs no travel; every other verdict is an answer only with one.</summary>
-    private static bool Answered(TrimAnalysis analysis) => analysis.Verdict.Code switch
+    internal static bool Answered(TrimAnalysis analysis) => analysis.Verdict.Code switch
     {
         VerdictCode.Insufficient => false,
         VerdictCode.Balanced => true,

@@ -14,7 +14,7 @@ public sealed partial class JobBook
     /// <param name="at">The time.</param>
     /// <returns>The job as the book keeps it.</returns>
     /// <exception cref="JobBookException">The book cannot take it.</exception>
-    public JobRecord AddJob(JobRecord job, InputFile? rig, DateTimeOffset at)
+    public JobRecord AddJob(JobRecord job, KeptFile? rig, DateTimeOffset at)
     {
         ArgumentNullException.ThrowIfNull(job);
         return Writing(() =>
@@ -28,7 +28,7 @@ public sealed partial class JobBook
 
     /// <summary>Writes down a measured machine as a new setup; the latest one when it is the same file.</summary>
     /// <exception cref="JobBookException">No such job, or the book cannot take it.</exception>
-    public SetupRecord AddSetup(long job, InputFile rig, string note, DateTimeOffset at)
+    public SetupRecord AddSetup(long job, KeptFile rig, string note, DateTimeOffset at)
     {
         ArgumentNullException.ThrowIfNull(rig);
         return Writing(() =>
@@ -47,13 +47,21 @@ public sealed partial class JobBook
         ArgumentNullException.ThrowIfNull(flight);
         return Writing(() =>
         {
-            MustHaveSetup(job, flight.Setup);
+            int setup = flight.Setup;
+            if (flight.NewRig is KeptFile rig)
+            {
+                MustExist(job);
+                string sha256 = Keep(rig);
+                SetupRecord? latest = SetupsOf(job).LastOrDefault();
+                setup = latest?.RigSha256 == sha256 ? latest.Number : InsertSetup(job, sha256, rig.Name, null, "", at).Number;
+            }
+            MustHaveSetup(job, setup);
             int number = Next("flight", job);
             var record = new FlightRecord
             {
                 Number = number,
                 Added = at,
-                Setup = flight.Setup,
+                Setup = setup,
                 Flown = flight.Flown,
                 WingId = flight.WingId,
                 Inputs = [.. flight.Inputs.Select(i => new InputRecord(i.Role, i.Name, Keep(i)))],
@@ -84,7 +92,7 @@ public sealed partial class JobBook
     /// <param name="rig">Rig file with the readings after.</param>
     /// <param name="at">The time.</param>
     /// <exception cref="JobBookException">No such job or setup, the setup is no longer the latest, or the book cannot take it.</exception>
-    public AdjustmentRecord AddAdjustment(long job, AdjustmentRecord adjustment, InputFile rig, DateTimeOffset at)
+    public AdjustmentRecord AddAdjustment(long job, AdjustmentRecord adjustment, KeptFile rig, DateTimeOffset at)
     {
         ArgumentNullException.ThrowIfNull(adjustment);
         ArgumentNullException.ThrowIfNull(rig);
@@ -302,7 +310,7 @@ public sealed partial class JobBook
     }
 
     /// <summary>Keeps bytes once, whoever brings them.</summary>
-    private string Keep(InputFile file) => Keep(file.Bytes);
+    private string Keep(KeptFile file) => Keep(file.Bytes);
 
     private string Keep(ReadOnlyMemory<byte> bytes)
     {

@@ -7,13 +7,16 @@ namespace TrimFit.Jobs;
 /// <param name="Role">Its role, one of <see cref="InputRecord"/>.</param>
 /// <param name="Name">File name without its folder.</param>
 /// <param name="Bytes">Its bytes.</param>
-public sealed record InputFile(string Role, string Name, ReadOnlyMemory<byte> Bytes);
+public sealed record KeptFile(string Role, string Name, ReadOnlyMemory<byte> Bytes);
 
 /// <summary>A flight to be kept together with its first result: both come into the book or neither does.</summary>
 public sealed record NewFlight
 {
-    /// <summary>Number of the setup it was flown with.</summary>
+    /// <summary>Number of the setup it was flown with; not looked at with <see cref="NewRig"/>.</summary>
     public required int Setup { get; init; }
+
+    /// <summary>The machine it was flown with, when that is another setup than the latest; null to use <see cref="Setup"/>.</summary>
+    public KeptFile? NewRig { get; init; }
 
     /// <summary>When its log begins; null when unknown.</summary>
     public DateTimeOffset? Flown { get; init; }
@@ -22,7 +25,7 @@ public sealed record NewFlight
     public string WingId { get; init; } = "";
 
     /// <summary>Logs and sheet.</summary>
-    public required ImmutableArray<InputFile> Inputs { get; init; }
+    public required ImmutableArray<KeptFile> Inputs { get; init; }
 
     /// <summary>Its result.</summary>
     public required NewResult Result { get; init; }
@@ -38,5 +41,5 @@ public sealed record NewResult
     public required ReadOnlyMemory<byte> Json { get; init; }
 
     /// <summary>Every file it rests on, with its bytes.</summary>
-    public required ImmutableArray<InputFile> Inputs { get; init; }
+    public required ImmutableArray<KeptFile> Inputs { get; init; }
 }

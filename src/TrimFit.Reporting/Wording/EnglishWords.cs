@@ -147,6 +147,8 @@ internal sealed record EnglishWords : Words
 
     public override string Language => "en";
 
+    public override JobWords Jobs { get; } = new EnglishJobWords();
+
     public override Labels Labels => _labels;
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
