@@ -8,6 +8,7 @@ using TrimFit.Core.Workshop;
 using TrimFit.Import;
 using TrimFit.Import.Places;
 using TrimFit.Jobs;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 using TrimFit.Reporting.Jobs;
 
@@ -90,7 +91,7 @@ internal static class JobAdd
         OutputFiles.Deliver(choices.Common, output,
             () => choices.Common.Quiet ? ReportText.FitBrief(report, choices.Common.Style) : ReportText.Fit(report, choices.Common.Style),
             () => json, () => ReportPage.Fit(report, choices.Common.Style), () => ReportMarkdown.Fit(report, choices.Common.Style));
-        return FitCommand.Answered(analysis) ? ExitCode.Done : ExitCode.NoAnswer;
+        return FitCommand.CodeOf(analysis);
     }
 
     /// <summary>What the workshop's other jobs say about this machine's wing.</summary>

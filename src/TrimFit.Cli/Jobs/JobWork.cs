@@ -7,6 +7,7 @@ using TrimFit.Core.Workshop;
 using TrimFit.Import;
 using TrimFit.Import.Rigs;
 using TrimFit.Jobs;
+using TrimFit.Pages;
 using TrimFit.Reporting.Jobs;
 
 namespace TrimFit.Cli;
@@ -45,7 +46,7 @@ internal static class JobWork
         using JobBook book = choices.Open(BookAccess.Read);
         var report = new JobReport { Job = book.Job(number), Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices.Common, output, () => JobReportText.Job(report, choices.Common.Style), () => JobText.Write(report.Job),
-            () => JobReportPage.Job(report, choices.Common.Style), () => JobReportText.JobMarkdown(report, choices.Common.Style));
+            () => JobPage.Job(report, choices.Common.Style), () => JobReportText.JobMarkdown(report, choices.Common.Style));
         return ExitCode.Done;
     }
 

@@ -8,9 +8,19 @@ using TrimFit.Reporting.Wording;
 namespace TrimFit.Reporting.Jobs;
 
 /// <summary>Job, list, history and memory as documents.</summary>
-internal static class JobDocuments
+public static class JobDocuments
 {
-    public static ReportDocument Job(JobReport report, Words words, Numbers numbers)
+    /// <summary>A job.</summary>
+    /// <param name="report">The job.</param>
+    /// <param name="style">Units and culture.</param>
+    public static ReportDocument Job(JobReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return Job(report, Words.English, new Numbers(style));
+    }
+
+    internal static ReportDocument Job(JobReport report, Words words, Numbers numbers)
     {
         JobRecord job = report.Job;
         JobWords w = words.Jobs;
@@ -52,7 +62,7 @@ internal static class JobDocuments
         return document.Build(w.JobTitle(job.Number), job.Machine);
     }
 
-    public static ReportDocument List(JobListReport report, Words words, Numbers numbers)
+    internal static ReportDocument List(JobListReport report, Words words, Numbers numbers)
     {
         JobWords w = words.Jobs;
         var document = new DocumentBuilder(words);
@@ -66,7 +76,7 @@ internal static class JobDocuments
         return document.Build(w.ListTitle, "");
     }
 
-    public static ReportDocument History(JobHistoryReport report, Words words, Numbers numbers)
+    internal static ReportDocument History(JobHistoryReport report, Words words, Numbers numbers)
     {
         JobWords w = words.Jobs;
         var document = new DocumentBuilder(words);
@@ -83,7 +93,7 @@ internal static class JobDocuments
         return document.Build(w.HistoryTitle, "");
     }
 
-    public static ReportDocument Memory(ShopMemoryReport report, Words words, Numbers numbers)
+    internal static ReportDocument Memory(ShopMemoryReport report, Words words, Numbers numbers)
     {
         JobWords w = words.Jobs;
         Labels l = words.Labels;

@@ -13,10 +13,10 @@ public static class JobReportText
     private static Words Words => Words.English;
 
     /// <summary>A job for the terminal.</summary>
-    public static string Job(JobReport report, ReportStyle style) => TextRenderer.Render(Document(report, style));
+    public static string Job(JobReport report, ReportStyle style) => TextRenderer.Render(JobDocuments.Job(report, style));
 
     /// <summary>A job as Markdown.</summary>
-    public static string JobMarkdown(JobReport report, ReportStyle style) => MarkdownRenderer.Render(Document(report, style));
+    public static string JobMarkdown(JobReport report, ReportStyle style) => MarkdownRenderer.Render(JobDocuments.Job(report, style));
 
     /// <summary>The list for the terminal.</summary>
     public static string List(JobListReport report, ReportStyle style) => TextRenderer.Render(JobDocuments.List(report, Words, new Numbers(style)));
@@ -59,13 +59,6 @@ public static class JobReportText
 
     /// <summary>Asks before a delete.</summary>
     public static string AskDelete(JobRecord job) => Words.Jobs.AskDelete(job);
-
-    private static ReportDocument Document(JobReport report, ReportStyle style)
-    {
-        ArgumentNullException.ThrowIfNull(report);
-        ArgumentNullException.ThrowIfNull(style);
-        return JobDocuments.Job(report, Words, new Numbers(style));
-    }
 
     private static string Line(string text) => TextRenderer.Safe(text) + "\n";
 }
