@@ -109,22 +109,27 @@ internal sealed record EnglishJobWords : JobWords
 
     public override string Reading(ReadingRecord reading, Numbers numbers)
     {
-        string value = numbers.Significant(reading.Value, 4);
-        return reading.Key switch
+        string name = reading.Key switch
         {
-            "carabiners.left_mm" => $"left riser carabiner {value} mm",
-            "carabiners.right_mm" => $"right riser carabiner {value} mm",
-            "hang_points.front_offset_mm" => $"front harness hang points {value} mm",
-            "hang_points.rear_offset_mm" => $"rear harness hang points {value} mm",
-            "hang_points.front_left_mm" => $"left front harness hang point {value} mm",
-            "hang_points.front_right_mm" => $"right front harness hang point {value} mm",
-            "hang_points.rear_left_mm" => $"left rear harness hang point {value} mm",
-            "hang_points.rear_right_mm" => $"right rear harness hang point {value} mm",
-            "hang_check.left_kg" => $"hang check left {value} kg",
-            "hang_check.right_kg" => $"hang check right {value} kg",
-            "propeller.thrust_line_mm" => $"thrust line {value} mm",
-            _ => $"{reading.Key[(reading.Key.IndexOf('.', StringComparison.Ordinal) + 1)..].Replace('_', ' ')} {value}",
+            "carabiners.left_mm" => "left riser carabiner",
+            "carabiners.right_mm" => "right riser carabiner",
+            "hang_points.front_offset_mm" => "middle of the front harness hang points",
+            "hang_points.rear_offset_mm" => "middle of the rear harness hang points",
+            "hang_points.front_left_mm" => "left front harness hang point",
+            "hang_points.front_right_mm" => "right front harness hang point",
+            "hang_points.rear_left_mm" => "left rear harness hang point",
+            "hang_points.rear_right_mm" => "right rear harness hang point",
+            "hang_check.left_kg" => "hang check left",
+            "hang_check.right_kg" => "hang check right",
+            "propeller.thrust_line_mm" => "thrust line",
+            _ => reading.Key[(reading.Key.IndexOf('.', StringComparison.Ordinal) + 1)..].Replace('_', ' '),
         };
+        bool lateral = reading.Key.StartsWith("carabiners.", StringComparison.Ordinal) || reading.Key.StartsWith("hang_points.", StringComparison.Ordinal) || reading.Key == "propeller.thrust_line_mm";
+        // As measured: not rounded to what a workshop can set.
+        string Measured(double mm) => numbers.Imperial ? numbers.Plain(Math.Abs(mm) / 25.4, 2) + " in" : numbers.Tick(Math.Abs(mm)) + " mm";
+        return lateral ? $"{name} {Measured(reading.Value)}{(reading.Value == 0 ? "" : " " + Side(reading.Value))}"
+            : reading.Key.StartsWith("hang_check.", StringComparison.Ordinal) ? $"{name} {numbers.Mass(reading.Value)}"
+            : $"{name} {numbers.Tick(reading.Value)}";
     }
 
     public override string Event(JobEvent what, Numbers numbers) => what switch
@@ -166,10 +171,10 @@ internal sealed record EnglishJobWords : JobWords
         string part = Words.English.PartShort(kind), travel = Words.English.Travel(moved.Travel, unit, numbers);
         string step = numbers.Travel(moved.Step, unit);
         if (moved.Misfit > moved.Step)
-            return $"The readings do not fit moving the {part}: they are up to {numbers.Length(moved.Misfit)} off what {travel} would give, and one step is {step}. Left is negative, right positive. Measure again.";
+            return $"The readings do not fit one travel of {part}: they are up to {numbers.Length(moved.Misfit)} off what {travel} would give, and one step is {step}. Left is negative, right positive. Measure again.";
         return recommended is double wanted
-            ? $"The readings say the {part} moved {travel}; recommended was {Words.English.Travel(wanted, unit, numbers)}, and one step is {step}. Measure again, and see whether it went to the right side."
-            : $"The readings say the {part} moved {travel}, and no result of this job recommends moving it. Measure again, and see whether it is the right part.";
+            ? $"By the readings, {part} went {travel}; recommended was {Words.English.Travel(wanted, unit, numbers)}, and one step is {step}. Measure again, and see whether it went to the right side."
+            : $"By the readings, {part} went {travel}, and the latest result does not recommend that. Measure again, and see whether it is the right part.";
     }
 
     public override string HangChange(HangChangeResult result, Numbers numbers)
