@@ -13,6 +13,7 @@ internal static class RigCommand
         if (ground.Moved is not null)
             return MeasureCommand.Compare(path, ground, choices, output, error);
         (Rig rig, SourceFile file) = InputFiles.Rig(path);
+        MeasureCommand.Sheets(rig, ground, choices);
         var report = new RigSheetReport { Rig = rig, Statics = RigReporter.Of(rig, choices.Seed ?? 1), RigFile = file, Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.RigBrief(report, choices.Style) : ReportText.Rig(report, choices.Style),

@@ -1,4 +1,5 @@
 using TrimFit.Core.Ground;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;
@@ -30,7 +31,7 @@ internal static class ChecksCommand
         Complaint complaint = told.Complaint();
         var report = new ChecksReport { Complaint = complaint, Checks = CheckOrder.Of(complaint), Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output, () => GroundReports.ChecksText(report, choices.Style), () => GroundReports.ChecksJson(report),
-            () => GroundReports.ChecksPage(report, choices.Style), () => GroundReports.ChecksMarkdown(report, choices.Style));
+            () => GroundPage.Checks(report, choices.Style), () => GroundReports.ChecksMarkdown(report, choices.Style));
         return ExitCode.Done;
     }
 

@@ -4,6 +4,7 @@ using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Import;
 using TrimFit.Import.Rigs;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;
@@ -76,8 +77,15 @@ internal static class MeasureCommand
             Provenance = ProgramVersion.Provenance,
         };
         OutputFiles.Deliver(common, output, () => GroundReports.ChangeText(report, common.Style), () => GroundReports.ChangeJson(report),
-            () => GroundReports.ChangePage(report, common.Style), () => GroundReports.ChangeMarkdown(report, common.Style));
+            () => GroundPage.Change(report, common.Style), () => GroundReports.ChangeMarkdown(report, common.Style));
         return report.Change.Verdict == HangChangeVerdict.Confirmed ? ExitCode.Done : ExitCode.NoAnswer;
+    }
+
+    /// <summary>Writes the sheets that were asked for.</summary>
+    public static void Sheets(Rig rig, MeasureChoices choices, CommonChoices common)
+    {
+        foreach ((SheetKind kind, string path) in choices.Sheets)
+            OutputFiles.Write("--sheet", path, GroundPage.Sheet(kind, rig, common.Style));
     }
 
     private static GroundReadings Readings(MeasureChoices choices, TextWriter error, MeasureGroup? only)

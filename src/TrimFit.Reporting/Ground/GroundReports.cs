@@ -79,12 +79,6 @@ public static class GroundReports
         }, _context.HangChangeJson) + "\n";
     }
 
-    /// <summary>Checks as a page.</summary>
-    public static string ChecksPage(ChecksReport report, ReportStyle style) => HtmlRenderer.Render(Document(report, style));
-
-    /// <summary>The proof of a change as a page.</summary>
-    public static string ChangePage(HangChangeReport report, ReportStyle style) => HtmlRenderer.Render(Document(report, style));
-
     /// <summary>One fault as a sentence.</summary>
     public static string Sentence(GroundFault fault, ReportStyle style) => Words.English.Ground.Fault(fault, new Numbers(style));
 
@@ -125,14 +119,27 @@ public static class GroundReports
         };
     }
 
-    internal static ReportDocument Document(ChecksReport report, ReportStyle style)
+    /// <summary>A sheet to print and fill in, for a machine.</summary>
+    /// <param name="kind">Which.</param>
+    /// <param name="rig">The machine: its name, what its file says now, and the readings to expect.</param>
+    /// <param name="style">Units and culture.</param>
+    public static ReportDocument Sheet(SheetKind kind, Rig rig, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(rig);
+        ArgumentNullException.ThrowIfNull(style);
+        return SheetDocument.Build(kind, rig, Words.English, new Numbers(style));
+    }
+
+    /// <summary>The checks of a complaint as a document.</summary>
+    public static ReportDocument Document(ChecksReport report, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
         return ChecksDocument.Build(report, Words.English, new Numbers(style));
     }
 
-    internal static ReportDocument Document(HangChangeReport report, ReportStyle style)
+    /// <summary>The proof of a change as a document.</summary>
+    public static ReportDocument Document(HangChangeReport report, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);

@@ -75,7 +75,7 @@ internal sealed record EnglishGroundWords : GroundWords
         SheetKind.HangCheck => "Pilot in full flying kit, fuel as flown, engine cold, plug cap off. Two hanging scales of the same kind hang level from a beam that carries five times the weight, as far apart as the riser carabiners hang in flight.",
         SheetKind.Weighing => "Power unit without pilot, engine cold, plug cap off. It stands level with its two feet on two scales, as far from the centre line left as right.",
         SheetKind.Rotation => "Plug out and plug cap off, ignition off. Stand behind the machine and look the way it flies. Mark one blade and the crank pulley with tape, turn the crank by hand the way the engine runs, and count.",
-        SheetKind.Thrust => "Tether the frame from its two lower mounts to a post that carries ten times the pull, the scale in the rope, the rope along the thrust axis. Warm engine, no wind. Full power for five seconds, read, idle; three times.",
+        SheetKind.Thrust => "Tether the frame to a post that carries ten times the pull: a bridle with equal legs outside the hoop, the scale in the rope behind it, so that the rope pulls along the propeller axis. Warm engine, no wind. Full power for five seconds, read, idle; three times.",
         SheetKind.Templates => "For spacers and readings where no vernier reaches.",
     };
 
