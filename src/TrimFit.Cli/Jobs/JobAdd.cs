@@ -109,8 +109,8 @@ internal static class JobAdd
         ProgramVersion = ProgramVersion.Provenance.ProgramVersion,
         Options = options,
         Sha256 = "",
-        Verdict = Word(analysis.Verdict.Code.ToString()),
-        Strength = Word(analysis.Verdict.Strength.ToString()),
+        Verdict = CommandWords.Of(analysis.Verdict.Code),
+        Strength = CommandWords.Of(analysis.Verdict.Strength),
         RateRadPerSec = analysis.Pull.AtBalance.RateRadPerSec,
         RateInterval95 = analysis.Pull.AtBalance.Interval95,
         Sensitivities = [.. Records(MeasuredSensitivity.From(analysis, job, wingId))],
@@ -126,7 +126,7 @@ internal static class JobAdd
     public static string OptionWords(CommonChoices choices, ShopMemory? memory)
     {
         CultureInfo plain = CultureInfo.InvariantCulture;
-        string balance = choices.Balance.Kind == BalanceThrustKind.Newtons ? choices.Balance.Newtons.ToString("R", plain) : Word(choices.Balance.Kind.ToString());
+        string balance = choices.Balance.Kind == BalanceThrustKind.Newtons ? choices.Balance.Newtons.ToString("R", plain) : CommandWords.Of(choices.Balance.Kind);
         var words = new StringBuilder().Append(plain, $"--balance-thrust {balance} --tolerance {Math.Round(choices.Tolerance.DegPerSec, 9)} --seed {choices.TrimOptions.Seed}");
         foreach (ColumnRule rule in choices.Columns)
             words.Append(plain, $" --column {ChannelRoles.NameOf(rule.Role)}={rule.Name}{(rule.Unit is null ? "" : ":" + rule.Unit)}");
@@ -136,8 +136,6 @@ internal static class JobAdd
     }
 
     internal static SourceFile Source(KeptFile file) => new(file.Name, Convert.ToHexStringLower(System.Security.Cryptography.SHA256.HashData(file.Bytes.Span)));
-
-    internal static string Word(string pascal) => string.Concat(pascal.Select((c, i) => char.IsAsciiLetterUpper(c) ? (i > 0 ? "_" : "") + char.ToLowerInvariant(c) : c.ToString()));
 
     private static FlightImport Read(ImmutableArray<KeptFile> logs, KeptFile? sheet, Rig rig, CommonChoices choices)
     {

@@ -1,9 +1,11 @@
 using System.Collections.Immutable;
 using System.Globalization;
+using System.Text;
 using System.Text.Json;
 using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;
+using TrimFit.Import.Rigs;
 using TrimFit.Jobs;
 using TrimFit.Reporting.Jobs;
 
@@ -39,6 +41,15 @@ internal static class JobAdjust
         KeptFile before = JobWork.RigOf(book, setup);
         KeptFile after = given?.File ?? (rigReadings.Length > 0 ? JobWork.WithReadings(before, rigReadings) : before);
         Rig rigBefore = JobWork.ReadRig(before), rigAfter = JobWork.ReadRig(after);
+        // Where the weight sat before the change says nothing about after it: kept in the rig file it would undo the change in the statics.
+        bool stale = MovesWeight(kind) && rigAfter.HangCheck is RigHangCheck carried && rigBefore.HangCheck is RigHangCheck earlier && SameCheck(earlier, carried);
+        if (stale)
+        {
+            after = after with { Bytes = Encoding.UTF8.GetBytes(RigFileEditor.WithoutHangCheck(after.Name, Encoding.UTF8.GetString(after.Bytes.Span))) };
+            rigAfter = JobWork.ReadRig(after);
+        }
+        if (rigReadings.Length > 0 && !request.Confirmed)
+            JobWork.RefuseContradictions(after.Name, rigAfter, rigBefore, rigReadings, choices.Common.Style, "Measure again; when the readings stand, say so with --confirm.");
 
         MovedPart? read = MovedPart.Between(kind, rigBefore, rigAfter);
         if (read is not null && toldTravel is not null)
@@ -74,7 +85,8 @@ internal static class JobAdjust
             return ExitCode.Done;
         }
         output.Write(JobReportText.Kept(new JobEvent.Adjusted(kept), number, choices.Common.Style));
-        output.Write(JobReportText.HangChange(HangChangeOf(kind, moved.Travel, rigBefore, rigAfter), choices.Common.Style));
+        if (MovesWeight(kind))
+            output.Write(JobReportText.HangChange(HangChangeOf(kind, moved.Travel, rigBefore, rigAfter), kind, choices.Common.Style));
         output.Write(JobReportText.AfterAdjustment(kind, choices.Common.Style));
         return ExitCode.Done;
     }
@@ -83,15 +95,16 @@ internal static class JobAdjust
     public static HangChangeResult? HangChangeOf(AdjustmentKind kind, double travel, Rig before, Rig after)
     {
         Adjustment adjustment = Adjustment.All.Single(a => a.Kind == kind);
-        if (adjustment.Move is null || travel == 0 || RigHang.Of(before) is not HangCheckResult first || RigHang.Of(after) is not HangCheckResult second
-            || ReferenceEquals(before, after) || SameCheck(before.HangCheck!, after.HangCheck!))
+        if (!MovesWeight(kind) || travel == 0 || RigHang.Of(before) is not HangCheckResult first || RigHang.Of(after) is not HangCheckResult second)
             return null;
         (double change, double sd, _) = RigHang.Expected(before, adjustment, travel);
         return change == 0 ? null : HangChange.Judge(first, second, change, sd);
     }
 
+    private static bool MovesWeight(AdjustmentKind kind) => Adjustment.All.Single(a => a.Kind == kind).Move is not null;
+
     /// <summary>The hang check of before, carried along in the rig file, is none of after.</summary>
-    private static bool SameCheck(RigHangCheck a, RigHangCheck b) => a.LeftKg == b.LeftKg && a.RightKg == b.RightKg;
+    private static bool SameCheck(RigHangCheck a, RigHangCheck b) => a.LeftKg.Value == b.LeftKg.Value && a.RightKg.Value == b.RightKg.Value;
 
     /// <summary>Asks once more, on a terminal; without one the command says what to do.</summary>
     private static bool AskedAgain(JobChoices choices, AdjustmentKind kind, MovedPart moved, double? recommended)
@@ -120,21 +133,13 @@ internal static class JobAdjust
             return (null, null);
         foreach (JsonElement adjustment in adjustments.EnumerateArray())
         {
-            if (adjustment.GetProperty("kind").GetString() == JobAdd.Word(kind.ToString()) && adjustment.GetProperty("first_step").ValueKind == JsonValueKind.Number)
+            if (adjustment.GetProperty("kind").GetString() == CommandWords.Of(kind) && adjustment.GetProperty("first_step").ValueKind == JsonValueKind.Number)
                 return (adjustment.GetProperty("first_step").GetDouble() / PerSi(kind), latest.Number);
         }
         return (null, null);
     }
 
-    private static AdjustmentKind Kind(string word)
-    {
-        foreach (AdjustmentKind kind in Enum.GetValues<AdjustmentKind>())
-        {
-            if (JobAdd.Word(kind.ToString()) == word)
-                return kind;
-        }
-        throw new CommandLineException($"--part: found \"{word}\", expected one of {string.Join(", ", Enum.GetValues<AdjustmentKind>().Select(k => JobAdd.Word(k.ToString())))}.");
-    }
+    private static AdjustmentKind Kind(string word) => CommandWords.Parse<AdjustmentKind>("--part", word);
 
     private static double Travel(string text, AdjustmentKind kind) =>
         double.TryParse(text[TravelKey.Length..], NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out double value) && double.IsFinite(value)

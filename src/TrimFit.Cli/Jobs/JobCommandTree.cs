@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.CommandLine.Invocation;
 using TrimFit.Jobs;
 
 namespace TrimFit.Cli;
@@ -8,7 +9,7 @@ internal static class JobCommandTree
 {
     public static Command Create(TextWriter output, TextWriter error) => new("job", "The workshop's job book: one file with complaint, setups, flights, results, adjustments and sign-off.")
     {
-        Open(output, error), Measure(output, error), Add(output, error), Adjust(output, error), Show(output, error), List(output, error), History(output, error), Sign(output, error),
+        Open(output, error), Measure(output, error), Checks(output, error), Add(output, error), Adjust(output, error), Show(output, error), List(output, error), History(output, error), Sign(output, error),
         Export(output, error), Import(output, error), Delete(output, error),
     };
 
@@ -34,10 +35,40 @@ internal static class JobCommandTree
         Argument<string> job = Job();
         Option<string> rig = Words("--rig", "The machine as measured: a rig file (TOML).", "RIG"), note = Note();
         Option<string[]> reading = Reading("Reading that takes the place of the one in the rig file, such as hang_check.left_kg=56.3,56.1. May be given more than once.");
+        var evenSo = new Option<bool>("--even-so") { Description = "Write readings down although they contradict each other." };
         var own = new JobOptions(error);
-        var command = new Command("measure", "Write down the machine as measured: a new setup, never a change of an old one.") { job, rig, reading, note };
+        var command = new Command("measure", "Write down the machine as measured: a new setup, never a change of an old one.") { job, rig, reading, evenSo, note };
         own.Add(command);
-        command.SetAction(parsed => JobWork.Measure(own.Choices(parsed), Number(parsed, job), parsed.GetValue(rig), parsed.GetValue(reading) ?? [], parsed.GetValue(note), output));
+        command.SetAction(parsed => JobWork.Measure(own.Choices(parsed), Number(parsed, job), parsed.GetValue(rig), parsed.GetValue(reading) ?? [], parsed.GetValue(evenSo), parsed.GetValue(note), output));
+        return command;
+    }
+
+    /// <summary>The sheet of checks; with a job's number and outcomes, their record.</summary>
+    private static Command Checks(TextWriter output, TextWriter error)
+    {
+        Command command = JobCommands.Checks(output, error);
+        var sheet = (SynchronousCommandLineAction)command.Action!;
+        Argument<string?> job = new("JOB") { Description = "Number of the job whose checks are written down; without one, only the sheet is shown.", Arity = ArgumentArity.ZeroOrOne };
+        var done = new Option<string[]>("--done")
+        {
+            Description = "A check that was made: its word, what came out (pass, fail, not_done) and the number found, such as brake_lines=pass:4mm. May be given more than once.",
+            HelpName = "CHECK=OUTCOME[:NUMBER]",
+        };
+        Option<string> by = Words("--by", "Who did it.", "NAME"), note = Note();
+        var own = new JobOptions(error);
+        command.Arguments.Add(job);
+        command.Options.Add(done);
+        command.Options.Add(by);
+        command.Options.Add(note);
+        own.AddBook(command);
+        command.SetAction(parsed =>
+        {
+            string[] made = parsed.GetValue(done) ?? [];
+            if (made.Length == 0)
+                return sheet.Invoke(parsed);
+            long number = Whole("JOB", parsed.GetValue(job) ?? throw new CommandLineException("job checks --done: name the job the checks belong to, such as trimfit job checks 1 --done brake_lines=pass."));
+            return JobChecks.Run(own.Choices(parsed), number, made, parsed.GetValue(by) ?? "", parsed.GetValue(note) ?? "", output);
+        });
         return command;
     }
 

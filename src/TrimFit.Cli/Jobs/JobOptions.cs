@@ -27,6 +27,9 @@ internal sealed class JobOptions(TextWriter error, bool logs = false)
         }
     }
 
+    /// <summary>For a command that has the others already.</summary>
+    public void AddBook(Command command) => command.Options.Add(_book);
+
     public JobChoices Choices(ParseResult parsed)
     {
         string? told = parsed.GetValue(_book);

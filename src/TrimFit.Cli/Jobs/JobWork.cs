@@ -2,12 +2,14 @@ using System.Collections.Immutable;
 using System.Globalization;
 using System.Text;
 using TrimFit.Core.Analysis;
+using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;
 using TrimFit.Import;
 using TrimFit.Import.Rigs;
 using TrimFit.Jobs;
 using TrimFit.Pages;
+using TrimFit.Reporting;
 using TrimFit.Reporting.Jobs;
 
 namespace TrimFit.Cli;
@@ -26,7 +28,7 @@ internal static class JobWork
         return ExitCode.Done;
     }
 
-    public static int Measure(JobChoices choices, long number, string? rigPath, string[] readings, string? note, TextWriter output)
+    public static int Measure(JobChoices choices, long number, string? rigPath, string[] readings, bool evenSo, string? note, TextWriter output)
     {
         if (rigPath is null && readings.Length == 0)
             throw new CommandLineException("job measure: nothing was measured. Give --rig RIG, or --reading KEY=VALUE.");
@@ -35,7 +37,12 @@ internal static class JobWork
         JobRecord job = book.Job(number);
         KeptFile rig = given ?? RigOf(book, CurrentSetup(job));
         if (readings.Length > 0)
+        {
+            Rig before = ReadRig(rig);
             rig = WithReadings(rig, readings);
+            if (!evenSo)
+                RefuseContradictions(rig.Name, ReadRig(rig), before, readings, choices.Common.Style, "Read again, or write it down --even-so.");
+        }
         SetupRecord setup = book.AddSetup(number, rig, note ?? "", JobChoices.Now);
         output.Write(choices.Common.Json == "-" ? JobText.Write(book.Job(number)) : JobReportText.Kept(new JobEvent.Measured(setup), number, choices.Common.Style));
         return ExitCode.Done;
@@ -124,6 +131,25 @@ internal static class JobWork
     /// <summary>A rig file with readings written into it, read again so that a contradiction is found at once.</summary>
     public static KeptFile WithReadings(KeptFile rig, IEnumerable<string> readings)
     {
+        string written = RigFileEditor.Write(rig.Name, Encoding.UTF8.GetString(rig.Bytes.Span), Taken(readings));
+        RigFileReader.Read(rig.Name, written);
+        return rig with { Bytes = Encoding.UTF8.GetBytes(written) };
+    }
+
+    /// <summary>Readings as the book keeps them: one number each, the mean of repeats.</summary>
+    public static IEnumerable<ReadingRecord> Records(string text) => Taken([text]).Repeats.Select(r => new ReadingRecord(r.Key, r.Value.Average()));
+
+    /// <summary>Readings that contradict each other or the machine.</summary>
+    /// <exception cref="LogFormatException">They do; the message has a line for each.</exception>
+    public static void RefuseContradictions(string name, Rig rig, Rig before, IEnumerable<string> readings, ReportStyle style, string remedy)
+    {
+        ImmutableArray<GroundFault> faults = EntryChecks.Of(rig, before, Taken(readings).Repeats);
+        if (!faults.IsEmpty)
+            throw new LogFormatException(string.Join('\n', faults.Select(f => $"{name}: {GroundReports.Sentence(f, style)}")) + $"\n{name}: nothing was written down. {remedy}");
+    }
+
+    private static GroundReadings Taken(IEnumerable<string> readings)
+    {
         var taken = new GroundReadings();
         foreach (string text in readings)
         {
@@ -131,19 +157,7 @@ internal static class JobWork
             if (taken.TrySet(key, value) is string fault)
                 throw new CommandLineException($"--reading: {fault}");
         }
-        string written = RigFileEditor.Write(rig.Name, Encoding.UTF8.GetString(rig.Bytes.Span), taken);
-        RigFileReader.Read(rig.Name, written);
-        return rig with { Bytes = Encoding.UTF8.GetBytes(written) };
-    }
-
-    /// <summary>Readings as the book keeps them: one number each, the mean of repeats.</summary>
-    public static IEnumerable<ReadingRecord> Records(string text)
-    {
-        (MeasuredKey key, string value) = Key(text);
-        var taken = new GroundReadings();
-        if (taken.TrySet(key, value) is string fault)
-            throw new CommandLineException($"--reading: {fault}");
-        return taken.Repeats.Select(r => new ReadingRecord(r.Key, r.Value.Average()));
+        return taken;
     }
 
     private static (MeasuredKey Key, string Value) Key(string text)

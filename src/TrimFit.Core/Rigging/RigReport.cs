@@ -42,8 +42,8 @@ public sealed record RigReport
     public required double HangCheckRightKg { get; init; }
     /// <summary>The hang check; null without one.</summary>
     public Ground.HangCheckResult? HangCheck { get; init; }
-    /// <summary>CG offset that tape and weighing give without the hang check.</summary>
-    public required Ground.LateralGeometry Tape { get; init; }
+    /// <summary>CG offset that tape and weighing give without the hang check; null when not asked for.</summary>
+    public Ground.LateralGeometry? Tape { get; init; }
     /// <summary>What the hang check contradicts.</summary>
     public ImmutableArray<Ground.GroundFault> GroundFaults { get; init; } = [];
     /// <summary>CG offset that would balance the torque at cruise thrust, m; null without torque.</summary>

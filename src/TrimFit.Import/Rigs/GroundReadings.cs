@@ -34,6 +34,16 @@ public sealed class GroundReadings
         _words[key] = word;
     }
 
+    /// <summary>Adds all readings of another set; they take the place of earlier ones.</summary>
+    public void Add(GroundReadings other)
+    {
+        ArgumentNullException.ThrowIfNull(other);
+        foreach ((MeasuredKey key, ImmutableArray<double> values) in other._numbers)
+            _numbers[key] = values;
+        foreach ((MeasuredKey key, string word) in other._words)
+            _words[key] = word;
+    }
+
     /// <summary>The value as TOML.</summary>
     internal string Toml(MeasuredKey key)
     {

@@ -34,8 +34,8 @@ public static class JobReportText
     public static string AskAgain(AdjustmentKind kind, MovedPart moved, double? recommended, ReportStyle style) => Words.Jobs.AskAgain(kind, moved, recommended, new Numbers(style));
 
     /// <summary>What two hang checks say; without them, that they are missing.</summary>
-    public static string HangChange(HangChangeResult? result, ReportStyle style) =>
-        Line(result is null ? Words.Jobs.NoHangChange : Words.Jobs.HangChange(result, new Numbers(style)));
+    public static string HangChange(HangChangeResult? result, AdjustmentKind kind, ReportStyle style) =>
+        Line(result is null ? Words.Jobs.NoHangChange : Words.Ground.Change(result, Words.PartShort(kind), new Numbers(style)));
 
     /// <summary>What comes after an adjustment, with the cautions of one.</summary>
     public static string AfterAdjustment(AdjustmentKind kind, ReportStyle style)

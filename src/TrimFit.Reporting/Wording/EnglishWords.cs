@@ -153,6 +153,8 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override GroundWords Ground { get; } = new EnglishGroundWords();
+
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)

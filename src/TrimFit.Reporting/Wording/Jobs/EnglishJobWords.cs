@@ -105,7 +105,15 @@ internal sealed record EnglishJobWords : JobWords
         CheckOutcome.NotDone => "not done",
     };
 
-    public override string CheckName(string code) => code.Replace('_', ' ');
+    public override string CheckName(string code)
+    {
+        foreach (SimpleCause cause in Enum.GetValues<SimpleCause>())
+        {
+            if (Snake.Of(cause.ToString()) == code)
+                return Words.English.Ground.Cause(cause);
+        }
+        return code.Replace('_', ' ');
+    }
 
     public override string Reading(ReadingRecord reading, Numbers numbers)
     {
@@ -175,18 +183,6 @@ internal sealed record EnglishJobWords : JobWords
         return recommended is double wanted
             ? $"By the readings, {part} went {travel}; recommended was {Words.English.Travel(wanted, unit, numbers)}, and one step is {step}. Measure again, and see whether it went to the right side."
             : $"By the readings, {part} went {travel}, and the latest result does not recommend that. Measure again, and see whether it is the right part.";
-    }
-
-    public override string HangChange(HangChangeResult result, Numbers numbers)
-    {
-        string measured = $"The hang check shows the CG {Words.English.Lateral(result.MeasuredChangeM, numbers)} of where it was ({numbers.LengthNumber(result.Interval95.Lower)} to {numbers.LengthNumber(result.Interval95.Upper)}); {Words.English.Lateral(result.ExpectedChangeM, numbers)} was to come.";
-        return result.Verdict switch
-        {
-            HangChangeVerdict.Confirmed => measured + " Side and size are confirmed.",
-            HangChangeVerdict.WrongWay => measured + " WRONG WAY: do not fly. The part was moved to the wrong side, or an entry is wrong.",
-            HangChangeVerdict.OtherSize => measured + " The side is right, the size is not: measure again before you fly.",
-            HangChangeVerdict.CannotTell => measured + " The readings scatter too much to tell; " + (result.HangsAfter is int n ? $"hang {Text(n)} times in the new setting." : "hang more often in both settings."),
-        };
     }
 
     public override string NoHangChange => "No hang check before and after: do one before every flight after a change, two scales under the riser carabiners (--reading hang_check.left_kg=KG --reading hang_check.right_kg=KG).";

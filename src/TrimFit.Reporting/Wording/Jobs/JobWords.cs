@@ -1,5 +1,4 @@
 using TrimFit.Core.Analysis;
-using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;
 using TrimFit.Reporting.Jobs;
@@ -88,9 +87,6 @@ internal abstract record JobWords
 
     /// <summary>A travel as measured is more than one step off the recommendation, or the readings do not fit the part.</summary>
     public abstract string AskAgain(AdjustmentKind kind, MovedPart moved, double? recommended, Numbers numbers);
-
-    /// <summary>What two hang checks say about an adjustment.</summary>
-    public abstract string HangChange(HangChangeResult result, Numbers numbers);
 
     /// <summary>A setup without both hang checks.</summary>
     public abstract string NoHangChange { get; }
