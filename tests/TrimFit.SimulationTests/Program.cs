@@ -14,6 +14,10 @@ internal static class Program
             return Coverage(args);
         if (args.Length > 0 && args[0] == "shift")
             return ShiftStudy.Run(args);
+        if (args.Length > 0 && args[0] == "memory")
+            return MemoryStudy.Run(args);
+        if (args.Length > 0 && args[0] == "book")
+            return BookStudy.Run(args);
         if (args.Length > 0 && args[0] == "ground")
             return GroundStudy.Run(args.Length > 1 && int.TryParse(args[1], NumberStyles.None, CultureInfo.InvariantCulture, out int cases) && cases > 0 ? cases : 2000);
         return args.Any(a => a is "--server" or "--internal-msbuild-node")

@@ -4,24 +4,26 @@ using TrimFit.Core.Statistics;
 namespace TrimFit.Core.Analysis;
 
 /// <summary>What a workshop's own jobs say about the sensitivity of the next wing, before it has flown.</summary>
-/// <remarks>Random effects on the logarithm, one study a wing, brought to the new wing's area and load (DEVELOPERS.md, "The shop's memory").
-/// Variance between by Paule and Mandel, error of the mean by Hartung and Knapp, never below the plain one; the prediction has k − 2 degrees of
-/// freedom (J. P. T. Higgins, S. G. Thompson &amp; D. J. Spiegelhalter, J. R. Stat. Soc. A 172 (2009) 137, eq. 12).</remarks>
+/// <remarks>Random effects on the logarithm, one study a wing, brought to the new wing's area and load; the spread between wings is integrated out
+/// (DEVELOPERS.md, "The shop's memory").</remarks>
 public sealed record ShopMemory
 {
     /// <summary>Word of this source in results.</summary>
     public const string Kind = "shop_memory";
 
-    /// <summary>Fewest wings that say anything about the spread between wings: k − 2 degrees of freedom need three.</summary>
+    /// <summary>Fewest wings that say anything about the spread between wings.</summary>
     public const int FewestWings = 3;
 
-    /// <summary>A wing whose p among the others is below this is set aside and named (the level of every conflict).</summary>
+    /// <summary>A wing whose p among the others, times the number of wings looked at, is below this is set aside and named.</summary>
     public const double ConflictP = 0.05;
 
     // Geometrically similar wings at one lift coefficient: the roll moment W e over dynamic pressure, area and span gives C_l = C_L e/b, and a
     // steady turn has r b/(2 V) in proportion to C_l, so S = r/e goes as V/b², that is (m/A)^(1/2)/A. Wings of a line are not scale copies, so
     // each exponent carries a standard deviation of a half (assumed, no source).
     private const double AreaExponent = -1, LoadingExponent = 0.5, ExponentSd = 0.5;
+
+    /// <summary>Scale of the prior of the standard deviation between wings, of the logarithm: times or over 2 at 95 % (assumed, no source).</summary>
+    private const double BetweenScale = 0.35;
 
     /// <summary>Log-sd for a size that is not known: wings for one person differ by about 20 % in area either way (common practice, no source).</summary>
     private const double UnknownSizeLogSd = 0.25;
@@ -35,7 +37,7 @@ public sealed record ShopMemory
     /// <summary>Wings it rests on.</summary>
     public required int Wings { get; init; }
 
-    /// <summary>Standard deviation between wings, of the logarithm.</summary>
+    /// <summary>Standard deviation between wings, of the logarithm: posterior mean.</summary>
     public required double BetweenLogSd { get; init; }
 
     /// <summary>Wings that behave otherwise than the rest and were set aside, by the job that measured them first.</summary>
@@ -63,18 +65,19 @@ public sealed record ShopMemory
         while (studies.Count > FewestWings)
         {
             (Study Study, double P) worst = studies.Select(s => (s, AmongOthers(s, studies))).MinBy(s => s.Item2);
-            if (worst.P >= ConflictP)
+            double p = Math.Min(1, studies.Count * worst.P); // Bonferroni: as many wings were looked at
+            if (p >= ConflictP)
                 break;
-            aside.Add(new(worst.Study.Job, worst.Study.WingId, Math.Exp(worst.Study.LogMedian), worst.P));
+            aside.Add(new(worst.Study.Job, worst.Study.WingId, Math.Exp(worst.Study.LogMedian), p));
             studies.Remove(worst.Study);
         }
         if (studies.Count < FewestWings)
             return null;
-        Prediction prediction = Prediction.From(studies);
+        RandomEffectsPrediction prediction = Predict(studies);
         return new ShopMemory
         {
             LogMedian = prediction.Mean,
-            LogSd = prediction.Sd,
+            LogSd = prediction.StandardDeviation,
             Wings = studies.Count,
             BetweenLogSd = prediction.BetweenSd,
             SetAside = [.. aside.OrderBy(a => a.Job)],
@@ -90,9 +93,12 @@ public sealed record ShopMemory
     /// <summary>p of a wing under what the others predict, its own error included.</summary>
     private static double AmongOthers(Study study, List<Study> all)
     {
-        Prediction others = Prediction.From([.. all.Where(s => s != study)]);
-        return 2 * StandardNormal.Cdf(-Math.Abs(study.LogMedian - others.Mean) / Math.Sqrt((others.Sd * others.Sd) + study.Variance));
+        RandomEffectsPrediction others = Predict([.. all.Where(s => s != study)]);
+        return 2 * StandardNormal.Cdf(-Math.Abs(study.LogMedian - others.Mean) / Math.Sqrt((others.StandardDeviation * others.StandardDeviation) + study.Variance));
     }
+
+    private static RandomEffectsPrediction Predict(IReadOnlyList<Study> studies) =>
+        RandomEffectsPrediction.Of([.. studies.Select(s => s.LogMedian)], [.. studies.Select(s => s.Variance)], BetweenScale);
 
     /// <summary>A measurement as it would be on a wing of another area and load.</summary>
     private static MeasuredSensitivity Moved(MeasuredSensitivity m, double? areaM2, double suspendedKg)
@@ -121,19 +127,6 @@ public sealed record ShopMemory
             return measured.Length == 1
                 ? new(measured[0].Job, measured[0].WingId, measured[0].LogMedian, measured[0].LogSd * measured[0].LogSd)
                 : new(measured.Min(m => m.Job), measured[0].WingId, sum / weights, (1 / weights) + model);
-        }
-    }
-
-    /// <summary>Distribution of the next wing.</summary>
-    private sealed record Prediction(double Mean, double Sd, double BetweenSd)
-    {
-        public static Prediction From(IReadOnlyList<Study> studies)
-        {
-            RandomEffectsFit fit = RandomEffects.PauleMandel([.. studies.Select(s => s.LogMedian)], [.. studies.Select(s => s.Variance)]);
-            double error = Math.Max(fit.HartungKnappStandardError ?? double.PositiveInfinity, fit.Mean.StandardError);
-            double sd = Math.Sqrt(fit.BetweenVariance + (error * error));
-            double widen = StudentT.TwoSidedFactor(0.95, Math.Max(1, studies.Count - 2)) / StandardNormal.Quantile(0.975);
-            return new(fit.Mean.Value, widen * sd, Math.Sqrt(fit.BetweenVariance));
         }
     }
 }
