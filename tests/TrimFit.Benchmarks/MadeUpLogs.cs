@@ -58,7 +58,7 @@ internal static class MadeUpLogs
         var random = new Random(1);
         var start = new DateTime(2025, 5, 17, 8, 0, 0, DateTimeKind.Utc);
         using var text = new StreamWriter(path, false, new UTF8Encoding(false)) { NewLine = "\n" };
-        text.WriteLine("time,rpm,throttle,yaw_rate,brake_left,brake_right,latitude,longitude,ground_speed,ground_course,altitude,vertical_speed,acceleration_x,acceleration_y");
+        text.WriteLine("time,rpm,throttle_pct,yaw_rate_dps,brake_left_mm,brake_right_mm,lat_deg,lon_deg,speed_kmh,course_deg,altitude_m,vario_m_s,acceleration_x_m_s2,acceleration_y_m_s2");
         ImmutableArray<(double Low, double High, int Decimals)> columns =
             [(1000, 2600, 0), (0, 100, 1), (-20, 20, 3), (0, 200, 1), (0, 200, 1), (-38.6, -38.4, 7), (-112.3, -112.2, 7), (20, 50, 2), (0, 359.9, 1), (300, 500, 1), (-3, 3, 2), (-2, 2, 3), (-2, 2, 3)];
         for (int i = 0; i < TableRows; i++)

@@ -74,7 +74,7 @@ internal static class SideBySide
             # Speed, side by side
 
             `tests/TrimFit.Benchmarks/compare` made this page: {rounds} rounds, every contender once a round in turn; ratios are taken within a round, then their median (least to most).
-            Whole programs are timed from start to exit; CSV readers and least squares by their own clock, start-up left out.
+            Whole programs are timed from start to exit; CSV readers and least squares by their own clock, second run in one process.
             Machine: {Machine()}.
 
             | race | ratio | wanted | |
