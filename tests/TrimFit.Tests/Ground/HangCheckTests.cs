@@ -49,6 +49,17 @@ public class HangCheckTests
     }
 
     [Fact]
+    public void Hangs_that_scatter_more_than_pilots_do_speak_for_themselves()
+    {
+        // e_i = 2 mm/kg × −10, 0, 10 kg = −20, 0, 20 mm: squares 800 mm², variance 400 mm² against 12.96 of the usual pilot.
+        HangCheckResult hang = HangCheck.Measure([new(55, 45), new(50, 50), new(45, 55)], 0.400, 0, 0.8);
+        Assert.True(hang.ScattersMore);
+        Accuracy.AgreesTo(9, 0.020, hang.SeatingSdM);
+        Assert.Equal(2, hang.SeatingDegreesOfFreedom);
+        Assert.False(HangCheck.Measure([new(49, 51), new(47.5, 52.5), new(46, 54)], 0.400, 0, 0.8).ScattersMore);
+    }
+
+    [Fact]
     public void Exchanging_the_scales_takes_their_difference_out()
     {
         // The left scale shows 4 kg too much wherever it hangs; true halves are 50 and 50.

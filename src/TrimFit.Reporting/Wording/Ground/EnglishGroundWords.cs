@@ -182,6 +182,8 @@ internal sealed record EnglishGroundWords : GroundWords
             double half = 1.96 * tape.StandardDeviation;
             text += $" Tape and weighing alone give {At(tape.OffsetM, new(tape.OffsetM - half, tape.OffsetM + half, 0.95), numbers)}. The scales are used.";
         }
+        if (hang.ScattersMore)
+            return text + $" The hangs scatter by {numbers.Length(hang.SeatingSdM)}, more than pilots usually do: look for a loose strap or a twisted seat, and hang six times or more.";
         return hang.Hangs.Length < 3 ? text + " Three hangs, out and in each time, would make the range narrower." : text;
     }
 
