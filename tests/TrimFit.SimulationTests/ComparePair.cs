@@ -19,9 +19,6 @@ internal sealed class ComparePair
     public static readonly double FlightScatterRadPerSec = double.DegreesToRadians(0.3);
     public static readonly TrimOptions Options = new() { Draws = 2000 };
 
-    /// <summary>Options of a single flight's analysis here: only its fit is used.</summary>
-    private static readonly TrimOptions _few = new() { Draws = 100 };
-
     /// <summary>A sixth of the tolerance: what the card is planned for.</summary>
     public static readonly double WantedStdError = Options.Tolerance.RadPerSec / 6;
 
@@ -104,13 +101,27 @@ internal sealed class ComparePair
             Rig rig = RigFileReader.Read("machine.toml", RigText.Write(written));
             TurnSignals signals = TurnSignals.From(flight.Log, rig);
             TurnFit fit = _kept.Get(seed, EnteredWrong.Nothing, () => new FilterErrorEstimator().Estimate(signals));
-            return new() { Name = $"{setup} {number}", Setup = setup, Analysis = TrimAnalysis.Run(signals, fit, rig, _few) };
+            return new() { Name = $"{setup} {number}", Setup = setup, Analysis = OnlyFit(signals, fit, rig) };
         }
         catch (SimulationException)
         {
             return null;
         }
     }
+
+    /// <summary>A flight's analysis of which a comparison only takes signals, fit and rig; the rest would take most of the study's time.</summary>
+    private static TrimAnalysis OnlyFit(TurnSignals signals, TurnFit fit, Rig rig) => new()
+    {
+        Rig = rig,
+        Options = Options,
+        Signals = signals,
+        Fit = fit,
+        Pull = new() { At = [], AtBalance = new() { Setting = PowerSetting.Cruise, ThrustFraction = 0 }, CruiseBasis = CruiseBasis.Assumed },
+        Sensitivity = new() { Sources = [], Conflict = false, EffectiveSamples = 0, YawRatio = 0, YawRatioInterval95 = default },
+        RigReport = null!,
+        Verdict = new() { Code = VerdictCode.Insufficient, Strength = VerdictStrength.None, TravelGiven = false },
+        Assumptions = [],
+    };
 
     private static double Idle(Scenario s) => s.Propeller.Clutch ? 0 : s.Propeller.FullThrustN * s.Propeller.IdleRatio * s.Propeller.IdleRatio;
 

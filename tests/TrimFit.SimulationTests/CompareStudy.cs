@@ -125,9 +125,9 @@ internal static class CompareStudy
         ulong seed = (ulong)Number("--seed", 1);
         var kept = new KeptFits(Text("--fits") is { Length: > 0 } path ? path : null);
         var clock = Stopwatch.StartNew();
-        Line($"{Print(Many(pairs, i => Pair(seed + i, kept)))}");
         Line($"{PrintRepeats(Many(repeats, i => Repeat(seed + 1_000_000 + i, kept)))}");
         Line($"{PrintSwaps(Many(swaps, i => Swap(seed + 2_000_000 + i, kept)))}");
+        Line($"{Print(Many(pairs, i => Pair(seed + i, kept)))}");
         return 0;
 
         T[] Many<T>(int count, Func<ulong, T?> one)
