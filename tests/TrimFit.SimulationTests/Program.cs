@@ -5,7 +5,9 @@ using Xunit.Runner.InProc.SystemConsole;
 namespace TrimFit.SimulationTests;
 
 /// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
-/// --minutes for each row); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
+/// --minutes for each row); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `compare`
+/// the one of before and after (--pairs, --repeats, --swaps, --seed, --threads, --minutes, --fits); `ground N` runs the hang checks; `memory` that of the
+/// shop's memory (--shops, --flights, --seed, --minutes); `book` makes a job book of ten years (--out, --jobs, --flights); anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -14,6 +16,8 @@ internal static class Program
             return Coverage(args);
         if (args.Length > 0 && args[0] == "shift")
             return ShiftStudy.Run(args);
+        if (args.Length > 0 && args[0] == "compare")
+            return CompareStudy.Run(args);
         if (args.Length > 0 && args[0] == "memory")
             return MemoryStudy.Run(args);
         if (args.Length > 0 && args[0] == "book")
