@@ -44,7 +44,7 @@ internal static class JobCompare
             FlightSheet? read = sheet is null ? null : KeptFlight.ReadSheet(sheet);
             compared.Add(new()
             {
-                Name = $"{Text(flight.Number)} ({string.Join(" + ", kept.Where(k => k.Role != InputRecord.Sheet).Select(k => k.Name))})",
+                Name = string.Join(" + ", kept.Where(k => k.Role != InputRecord.Sheet).Select(k => k.Name)),
                 Setup = $"setup {Text(flight.Setup)}",
                 Analysis = analysis,
                 Sheet = read,

@@ -36,10 +36,12 @@ public class ShopMemoryTests
     [Fact]
     public void A_size_that_is_not_known_costs_width_and_moves_nothing()
     {
-        MeasuredSensitivity[] shop = [Wing(1, 1.6), Wing(2, 1.6), Wing(3, 1.6)];
-        ShopMemory known = ShopMemory.Of(shop, 26, 115)!, unknown = ShopMemory.Of(shop, null, 150)!;
+        ShopMemory known = ShopMemory.Of([Wing(1, 1.6), Wing(2, 1.6), Wing(3, 1.6)], 26, 115)!;
+        ShopMemory unknown = ShopMemory.Of([Wing(1, 1.6, area: null), Wing(2, 1.6, area: null), Wing(3, 1.6, area: null)], 26, 150)!;
         Accuracy.AgreesTo(9, 1.6, unknown.LogMedian);
         Assert.True(unknown.LogSd > known.LogSd);
+        // Where the new wing's size is not known, the load alone moves nothing either.
+        Accuracy.AgreesTo(9, 1.6, ShopMemory.Of([Wing(1, 1.6), Wing(2, 1.6), Wing(3, 1.6)], null, 250)!.LogMedian);
     }
 
     [Fact]
@@ -93,6 +95,18 @@ public class ShopMemoryTests
         Accuracy.AgreesTo(3, mean, prediction.Mean);
         Accuracy.AgreesTo(2, meanTau, prediction.BetweenSd);
         Accuracy.AgreesTo(2, high / 1.959964, prediction.StandardDeviation);
+    }
+
+    [Fact]
+    public void An_unknown_slope_widens_by_its_spread_times_the_difference()
+    {
+        // By hand: one study of variance 0.04 that differs by 2, slope 0 ± 0.1: 0.04 + (0.1 × 2)² = 0.08.
+        RandomEffectsPrediction prediction = RandomEffectsPrediction.Of([1.5], [0.04], 1e-6, [[2.0]], 0.1);
+        Accuracy.AgreesTo(9, 1.5, prediction.Mean);
+        Accuracy.AgreesTo(4, Math.Sqrt(0.08), prediction.StandardDeviation);
+        // By hand: two exact studies at -1 and 1 with values 1 and 3 and a free slope give 2 in the middle.
+        RandomEffectsPrediction line = RandomEffectsPrediction.Of([1, 3], [1e-6, 1e-6], 1e-6, [[-1.0, 1.0]], 1e3);
+        Accuracy.AgreesTo(6, 2, line.Mean);
     }
 
     [Fact]
