@@ -54,7 +54,9 @@ public class HangCheckTravelTests
     {
         static RigHangCheck Check(params double[] offsets) => new()
         {
-            LeftKg = Reading.Measured(59), RightKg = Reading.Measured(59), CarabinerSpacingM = Reading.Measured(0.44, 0.001),
+            LeftKg = Reading.Measured(59),
+            RightKg = Reading.Measured(59),
+            CarabinerSpacingM = Reading.Measured(0.44, 0.001),
             Hangs = [.. offsets.Select(e => HangCheck.Expected(118, e, 0.44))],
         };
         Rig tight = Machine(0.8, 0.005, Check(0.010, 0.0101, 0.0099, 0.010, 0.0101, 0.0099)), loose = Machine(0.8, 0.005, Check(-0.010, 0.030, 0.010));
