@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using CsCheck;
 using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;

@@ -1,5 +1,4 @@
 using TrimFit.Core.Ground;
-using TrimFit.Core.Rigging;
 
 namespace TrimFit.Reporting.Wording;
 
