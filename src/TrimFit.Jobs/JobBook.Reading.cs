@@ -32,7 +32,7 @@ public sealed partial class JobBook
                 Verdict = r.IsDBNull(9) ? null : r.GetString(9),
                 RateRadPerSec = r.NumberOrNull(10),
                 RateInterval95 = Interval(r, 11),
-                Signed = r.GetInt64(13) != 0,
+                IsSigned = r.GetInt64(13) != 0,
             }),
     ]);
 

@@ -13,19 +13,23 @@ namespace TrimFit.SimulationTests;
 /// <summary>A job book of ten years: how large it becomes, and how long its list takes.</summary>
 internal static class BookStudy
 {
+    /// <summary>About the size of a result as JSON.</summary>
+    private const int UsualResultBytes = 24_000;
+
     /// <summary>Makes the book.</summary>
     /// <param name="path">Where; must not be there yet.</param>
     /// <param name="jobs">Jobs.</param>
     /// <param name="flights">Flights over all jobs.</param>
     /// <param name="logs">Texts of flight logs; each flight gets one with its last digits drawn anew, so that no two are alike.</param>
+    /// <param name="resultBytes">Size of a result.</param>
     /// <param name="progress">Called with the jobs done.</param>
-    public static void Make(string path, int jobs, int flights, IReadOnlyList<byte[]> logs, Action<int>? progress = null)
+    public static void Make(string path, int jobs, int flights, IReadOnlyList<byte[]> logs, int resultBytes = UsualResultBytes, Action<int>? progress = null)
     {
         using JobBook book = JobBook.Open(path, BookAccess.Create, At(0));
         book.DoNotWaitForTheDisk(); // it is made up: made again when the power goes
         var random = new SeededRandom(1);
         KeptFile rig = Text(InputRecord.Rig, "machine.toml", RigText.Write(RandomScenarios.Draw(1)));
-        byte[] result = new byte[24_000]; // about the size of a result
+        byte[] result = new byte[resultBytes];
         Encoding.UTF8.GetBytes("{\"schema\":\"trimfit-fit/1\"").CopyTo(result, 0);
         for (int j = 0; j < jobs; j++)
         {
@@ -38,7 +42,7 @@ internal static class BookStudy
             for (int f = 0; f < own; f++)
             {
                 KeptFile log = new(InputRecord.Log, "flight.csv", Redrawn(logs[random.NextInt32(logs.Count)], random));
-                for (int i = 100; i < result.Length; i++)
+                for (int i = 30; i < result.Length; i++)
                     result[i] = (byte)(i % 12 == 0 ? ',' : '0' + random.NextInt32(10));
                 book.AddFlight(job, new()
                 {
@@ -82,7 +86,11 @@ internal static class BookStudy
         int jobs = int.Parse(Word("--jobs", "500"), CultureInfo.InvariantCulture), flights = int.Parse(Word("--flights", "5000"), CultureInfo.InvariantCulture);
         byte[][] logs = [.. Enumerable.Range(1, 4).Select(seed => LogWriters.Csv(FlightSimulator.Fly(RandomScenarios.Draw((ulong)seed)).Log))];
         var clock = Stopwatch.StartNew();
-        Make(path, jobs, flights, logs, done => Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\r{done}/{jobs} jobs, {clock.Elapsed.TotalSeconds:F0} s ")));
+        Make(path, jobs, flights, logs, progress: done => 
+        {
+            if (done % 20 == 0)
+                Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\r{done}/{jobs} jobs, {clock.Elapsed.TotalSeconds:F0} s "));
+        });
         Console.Error.WriteLine();
         double[] seconds = [.. Enumerable.Range(0, 7).Select(_ => List(path).Sec).Order()];
         Console.WriteLine(string.Create(CultureInfo.InvariantCulture,

@@ -62,7 +62,7 @@ internal static class JobWork
         using JobBook book = choices.Open(BookAccess.Read);
         ImmutableArray<JobSummary> jobs =
         [
-            .. book.List().Where(j => !(unsignedOnly && j.Signed)
+            .. book.List().Where(j => !(unsignedOnly && j.IsSigned)
                 && (having.Length == 0 || new[] { j.Machine, j.Customer, j.Wing, j.Complaint }.Any(t => t.Contains(having, StringComparison.OrdinalIgnoreCase)))),
         ];
         var report = new JobListReport { Jobs = jobs, BookBytes = book.SizeOnDisk(), Provenance = ProgramVersion.Provenance };

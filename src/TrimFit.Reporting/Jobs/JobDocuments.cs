@@ -71,7 +71,7 @@ public static class JobDocuments
             report.Jobs.Select(j => (IReadOnlyList<string>)
             [
                 numbers.Integer(j.Number), Date(j.Opened), Cut(j.Machine), Cut(j.Customer), Cut(j.Wing), numbers.Integer(j.Flights), Rate(j.RateRadPerSec, numbers),
-                j.Verdict is string v ? w.VerdictWord(v) : "", j.Signed ? w.Signed : w.Unsigned,
+                j.Verdict is string v ? w.VerdictWord(v) : "", j.IsSigned ? w.Signed : w.Unsigned,
             ]));
         return document.Build(w.ListTitle, "");
     }
