@@ -28,7 +28,8 @@ internal static class CompareDocument
         else
             Settings(document, c, numbers);
         document.Paragraph(w.Removed(c, numbers));
-        document.Paragraph(w.Attribution(c.Attribution, numbers));
+        if (c.Attribution is { Of: not AttributedPull.AtBalance }) // of the pull where it is to be nulled the share stands above
+            document.Paragraph(w.Attribution(c.Attribution, numbers));
         document.Paragraph(w.Trend(c, numbers));
         if (figures)
         {
