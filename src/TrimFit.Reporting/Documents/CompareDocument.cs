@@ -106,11 +106,11 @@ internal static class CompareDocument
         document.Heading(words.Comparing.Heads.Next);
         if (c.Verdict?.Code != ComparisonVerdictCode.Fixed && answer.Adjustment is AdjustmentReport best)
             document.Instruction(words.FirstStep(best, next.Rig, numbers));
-        document.Paragraph(words.Answer(answer, numbers) + (next.Verdict.Code is VerdictCode.Balanced or VerdictCode.Insufficient ? "" : " " + words.Strength(next.Verdict.Strength)));
+        document.Paragraph(words.Answer(answer, numbers) + (next.Verdict.Code is VerdictCode.Balanced or VerdictCode.Insufficient ? "" : " " + words.Comparing.Strength(next.Verdict.Strength)));
         if (next.Shift is ShiftReport shift && answer.Kind == AnswerKind.Travel)
             document.Paragraph(words.Shift(shift, numbers));
         if (c.Setups.Length > 1)
-            document.Paragraph(words.Comparing.NextNote(c.PairUsed, next.Verdict.Strength));
+            document.Paragraph(words.Comparing.NextNote(c.PairUsed));
         document.List(next.Verdict.Reasons.Where(f => f != answer.Reason).Select(f => words.Finding(f, numbers)));
     }
 

@@ -33,14 +33,14 @@ public class CompareReportTests
         };
     }
 
-    private static CompareReport Better => Report(Known(0, ChangedPart.Geometry), Flight("as delivered", -3, 0.1, -0.5, name: "one.csv"), Flight("moved", -1.0, 0.1, -0.5, rig: Moved(-0.02), name: "two.csv"));
+    private static CompareReport Better => Report(Known(0, ChangedPart.Geometry), Flight("as delivered", -3, 0.1, -2, 0.05, name: "one.csv", curveError: 0.3), Flight("moved", -1.0, 0.1, -2, 0.05, Moved(-0.02), "two.csv", curveError: 0.3));
 
     [Fact]
     public void The_first_sentence_says_what_became_of_the_pull()
     {
-        // Level flight is at 0.6 of full thrust: -3 - 0.3 and -1 - 0.3.
-        Assert.StartsWith("Better: in level flight it turned left at 3.3 deg/s before and turns left at 1.3 deg/s now\n(change 1.7 to 2.3; right is positive).\n"
-            + "The pull became smaller, but it was not shown to lie within 1.0 deg/s at idle, in level flight and at\nfull power.\n", ReportText.Compare(Better, new()), StringComparison.Ordinal);
+        // Level flight is near 0.6 of full thrust: -3 - 1.2 and -1 - 1.2.
+        Assert.StartsWith("Better: in level flight it turned left at 4.2 deg/s before and turns left at 2.2 deg/s now (change\n1.6 to 2.4; right is positive).\n"
+            + "The pull became smaller, but it was not shown to lie within 1.0 deg/s at idle, in level flight and\nat full power.\n", ReportText.Compare(Better, new()), StringComparison.Ordinal);
         string straight = ReportText.Compare(Report(Known(0), Flight("a", 3, 0.1), Flight("b", 0, 0.1, rig: Moved(0.03))), new());
         Assert.StartsWith("Fixed: at idle, in level flight and at full power the turn left lies within 1.0 deg/s; in level\nflight it turned right at 3.0 deg/s before and hardly turns now", straight, StringComparison.Ordinal);
         Assert.DoesNotContain("> First step", straight, StringComparison.Ordinal); // what is fixed is left alone
@@ -82,7 +82,7 @@ public class CompareReportTests
     public void Numbers_follow_culture_and_units_and_JSON_does_not()
     {
         var german = new ReportStyle { Culture = CultureInfo.GetCultureInfo("de-DE"), Units = UnitSystem.Imperial };
-        Assert.Contains("3,3 deg/s", ReportText.Compare(Better, german), StringComparison.Ordinal);
+        Assert.Contains("4,2 deg/s", ReportText.Compare(Better, german), StringComparison.Ordinal);
         using JsonDocument json = JsonDocument.Parse(ReportJson.Compare(Better));
         JsonElement root = json.RootElement;
         Assert.Equal("trimfit-compare/1", root.GetProperty("schema").GetString());
@@ -91,7 +91,7 @@ public class CompareReportTests
         Assert.Equal(2.0, root.GetProperty("change").GetProperty("at_balance").GetProperty("rate_deg_s").GetDouble(), 1e-4);
         Assert.Equal("trimfit-fit/1", root.GetProperty("before").GetProperty("flights")[0].GetProperty("result").GetProperty("schema").GetString());
         Assert.Equal(["off", "idle", "cruise", "full"], root.GetProperty("after").GetProperty("at").EnumerateArray().Select(x => x.GetProperty("setting").GetString()));
-        Assert.Equal(100 * 2 / 3.3, root.GetProperty("removed_percent").GetDouble(), 0.1);
+        Assert.Equal(100 * 2 / 4.2, root.GetProperty("removed_percent").GetDouble(), 1.0);
         Assert.DoesNotContain("NaN", ReportJson.Compare(Better), StringComparison.Ordinal);
     }
 

@@ -257,7 +257,7 @@ public class FlightComparisonTests
     public void Riser_carabiners_moved_between_the_flights_measure_the_sensitivity()
     {
         // By hand: 20 mm to the left shift the CG offset 20 mm to the right; 1.8 deg/s more to the right is 0.09 deg/s per mm.
-        FlightComparison c = FlightComparison.Run([Flight("a", -2, 0.02, -0.5), Flight("b", -0.2, 0.02, -0.5, rig: Moved(-0.020))],
+        FlightComparison c = FlightComparison.Run([Flight("a", -2, 0.02, -2, 0.05, curveError: 0.5), Flight("b", -0.2, 0.02, -2, 0.05, Moved(-0.020), curveError: 0.5)],
             new() { Scatter = FlightScatter.None, Trim = new() { Draws = 4000 } });
         SensitivitySource pair = c.Next!.Sensitivity.Sources.Single(s => s.Kind == "pair");
         Assert.True(c.PairUsed && pair.Used);

@@ -42,7 +42,7 @@ public class FlightListTests
             trial.toml(1): found "wings" for changed, expected "geometry", "wing", "brake_lines", "trimmers", "harness", "propeller" or "ballast". Write changed = "wing" if that is what it is.
             trial.toml(2): found a flight without rig, expected the rig file it was flown with. Write rig = "rig.toml" below [[flight]], or once at the top for all flights.
             trial.toml(3): found 3 for logs, expected a file name or a list of file names. Write logs = "flight.csv", or logs = ["gps.igc", "engine.csv"].
-            trial.toml(4): unknown key "setap" in [flight]; did you mean "setup"?
+            trial.toml(4): unknown key "setap" in [[flight]]; did you mean "setup"?
             trial.toml(5): found a flight without logs, expected at least one log. Write logs = "flight.csv", or logs = ["gps.igc", "engine.csv"].
             """.ReplaceLineEndings("\n"), e.Message);
     }

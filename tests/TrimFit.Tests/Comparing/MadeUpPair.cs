@@ -16,14 +16,14 @@ internal static class MadeUpPair
 
     /// <summary>A flight with a pull without power and a growth to full power, deg/s, each with its standard error.</summary>
     public static ComparedFlight Flight(string setup, double constant, double error, double slope = 0, double slopeError = 0.01, Rig? rig = null, string name = "flight",
-        double brake = 40, double brakeError = 1)
+        double brake = 40, double brakeError = 1, double curveError = 1e-4)
     {
         Rig machine = rig ?? MadeUpFlight.Rig();
         TurnFit fit = SensitivitySourcesTests.FitOf(_signals, (constant, error), (slope, slopeError));
         int n = fit.Coefficients.Length;
         double[] covariance = [.. fit.Covariance];
         covariance[(3 * n) + 3] = Deg(brakeError) * Deg(brakeError);
-        covariance[(2 * n) + 2] *= 1e-6; // no curve
+        covariance[(2 * n) + 2] *= Math.Pow(curveError / 0.1, 2);
         fit = fit with
         {
             Coefficients = [.. fit.Coefficients.Select(c => c.Name == TurnCoefficient.BrakeDifference ? c with { Estimate = new(Deg(brake), Deg(brakeError)) } : c)],

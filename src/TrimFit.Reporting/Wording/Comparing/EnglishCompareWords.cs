@@ -218,7 +218,15 @@ internal sealed record EnglishCompareWords : CompareWords
     public override string HistoryDescription(FlightComparison c) =>
         $"Pull in level flight of each of {c.Flights.Length} flights in their order, with 95 % bars of the flight alone; a marker for each setting, and the tolerance either side of zero.";
 
-    public override string NextNote(bool pairUsed, VerdictStrength strength) => pairUsed
+    public override string Strength(VerdictStrength strength) => strength switch
+    {
+        VerdictStrength.None => "Strength: none. A direction at most, never millimetres.",
+        VerdictStrength.Weak => "Strength: weak. The direction is certain, the size is not: go in steps, and fly after each.",
+        VerdictStrength.Fair => "Strength: fair. The size is known within a half; go in steps.",
+        VerdictStrength.Firm => "Strength: firm. Direction and size are known within one step.",
+    };
+
+    public override string NextNote(bool pairUsed) => pairUsed
         ? "This rests on all flights together: what the change between the settings did measures how much a shift turns this machine."
         : "The change between the settings does not measure how much a shift turns this machine; the size of the next step rests on the last setting's flights.";
 
