@@ -71,11 +71,18 @@ internal sealed record EnglishCompareWords : CompareWords
         return verdict.Code switch
         {
             ComparisonVerdictCode.Fixed => "Two one-sided tests at each of the three powers, each at 5 %, with the scatter from flight to flight counted.",
-            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance),
+            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance) + Larger(c),
             ComparisonVerdictCode.Worse => "The pull became larger: put it back as it was, or go the other way.",
             ComparisonVerdictCode.NoClearChange when verdict.ShownEqual => "What was changed does not matter to the pull, or something else moved with it.",
             ComparisonVerdictCode.NoClearChange => "Not a sign that it did not work. What is missing: a second flight of each setting, in turn (A-B-A), longer flights or calmer air.",
         };
+    }
+
+    /// <summary>Where the pull became larger although it is smaller where it was to be nulled.</summary>
+    private static string Larger(FlightComparison c)
+    {
+        string[] larger = [.. c.Changes.Where(x => x.SizeChange95.Lower > 0).Select(x => At(x.Setting))];
+        return larger.Length == 0 ? "" : $" {Capital(Join(larger))} it became larger: a fixed shift cannot null every power.";
     }
 
     private string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
