@@ -85,7 +85,7 @@ internal sealed record EnglishCompareWords : CompareWords
         return larger.Length == 0 ? "" : $" {Capital(Join(larger))} it became larger: a fixed shift cannot null every power.";
     }
 
-    private string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
+    private static string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
     {
         if (verdict.WithheldFixed)
             return "whether it is fixed cannot be said without the brakes or hands-off spans in the log.";
@@ -243,11 +243,11 @@ internal sealed record EnglishCompareWords : CompareWords
 
     private static string Range(ConfidenceInterval interval, Numbers numbers) => numbers.RateRange(interval, " to ");
 
-    private static string Join(IReadOnlyList<string> items) => items.Count switch
+    private static string Join(params string[] items) => items.Length switch
     {
         0 => "",
         1 => items[0],
-        _ => string.Join(", ", items.Take(items.Count - 1)) + " and " + items[^1],
+        _ => string.Join(", ", items[..^1]) + " and " + items[^1],
     };
 
     private static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];
