@@ -210,9 +210,6 @@ internal sealed record EnglishCompareWords : CompareWords
             CompareNoticeCode.BeforeAlreadyInside => "Before the change the pull already lay inside the tolerance.",
             CompareNoticeCode.NoSteering => $"Without brakes or hands-off spans in the log nothing can be called fixed: {Join([.. n])}.",
             CompareNoticeCode.ThrustBasesDiffer => "Some rig files know the thrust in newtons, others do not: all flights are compared at shares of full thrust. Give static_thrust_n in every rig file.",
-            CompareNoticeCode.BlindOrder => Value(0, s => s > 0 ? "fits" : "does not fit") is var fits && fits == "fits"
-                ? $"Blind trial: the sealed order was {Join([.. n])}, and the flights are in it."
-                : $"Blind trial: the sealed order was {Join([.. n])}, but the flights do not follow it.",
         };
     }
 
