@@ -166,7 +166,7 @@ internal static class CompareStudy
     {
         int n = all.Length;
         if (n == 0)
-            return "no pair was flown";
+            return "";
         PairOutcome[] known = [.. all.Where(o => o.SensitivityCovers is not null)];
         (int low, int high) = BinomialBand.Counts(known.Length, 0.95, 0.99);
         return string.Join('\n',

@@ -28,7 +28,8 @@ internal static class CompareDocument
         else
             Settings(document, c, numbers);
         document.Paragraph(w.Removed(c, numbers));
-        document.Paragraph(w.Attribution(c.Attribution, numbers));
+        if (c.Attribution is { Of: not AttributedPull.AtBalance }) // of the pull where it is to be nulled the share stands above
+            document.Paragraph(w.Attribution(c.Attribution, numbers));
         document.Paragraph(w.Trend(c, numbers));
         if (figures)
         {
@@ -105,11 +106,11 @@ internal static class CompareDocument
         document.Heading(words.Comparing.Heads.Next);
         if (c.Verdict?.Code != ComparisonVerdictCode.Fixed && answer.Adjustment is AdjustmentReport best)
             document.Instruction(words.FirstStep(best, next.Rig, numbers));
-        document.Paragraph(words.Answer(answer, numbers) + (next.Verdict.Code is VerdictCode.Balanced or VerdictCode.Insufficient ? "" : " " + words.Strength(next.Verdict.Strength)));
+        document.Paragraph(words.Answer(answer, numbers) + (next.Verdict.Code is VerdictCode.Balanced or VerdictCode.Insufficient ? "" : " " + words.Comparing.Strength(next.Verdict.Strength)));
         if (next.Shift is ShiftReport shift && answer.Kind == AnswerKind.Travel)
             document.Paragraph(words.Shift(shift, numbers));
         if (c.Setups.Length > 1)
-            document.Paragraph(words.Comparing.NextNote(c.PairUsed, next.Verdict.Strength));
+            document.Paragraph(words.Comparing.NextNote(c.PairUsed));
         document.List(next.Verdict.Reasons.Where(f => f != answer.Reason).Select(f => words.Finding(f, numbers)));
     }
 

@@ -1,6 +1,5 @@
 using ScottPlot;
 using ScottPlot.Plottables;
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
@@ -118,7 +117,7 @@ internal static class ComparePlots
         PlotFont.Use(plot);
         SvgFigure.Ticks(plot, numbers);
         double tolerance = Deg(c.Options.Trim.Tolerance.RadPerSec);
-        HorizontalSpan span = plot.Add.HorizontalSpan(-tolerance, tolerance);
+        VerticalSpan span = plot.Add.VerticalSpan(-tolerance, tolerance);
         span.FillColor = Palette.Of(Palette.Shade).WithAlpha(0.45);
         span.LineWidth = 0;
         span.LegendText = words.Comparing.Heads.Tolerance;

@@ -48,8 +48,11 @@ internal abstract record CompareWords
     /// <summary>What the history shows, for those who cannot see it.</summary>
     public abstract string HistoryDescription(FlightComparison comparison);
 
-    /// <summary>Where the shift starts from.</summary>
-    public abstract string NextNote(bool pairUsed, VerdictStrength strength);
+    /// <summary>What the next step rests on.</summary>
+    public abstract string NextNote(bool pairUsed);
+
+    /// <summary>Strength of the next step, in words that fit more than one flight.</summary>
+    public abstract string Strength(VerdictStrength strength);
 }
 
 /// <summary>Heads of the comparison's sections and tables.</summary>

@@ -46,10 +46,9 @@ internal sealed record EnglishCompareWords : CompareWords
         if (c.AtBalance is not SettingChange change || c.Verdict is not ComparisonVerdict verdict)
         {
             SetupPull only = c.Setups[0].AtBalance;
-            return $"All flights have the same setting: {power} it turns {Rate(only.Rate.Mean, numbers)} ({Range(only.Interval95, numbers)}; right is positive).";
+            return $"All flights have the same setting: {power} it {Turn("turns", only.Rate.Mean, numbers)} ({Range(only.Interval95, numbers)}; right is positive).";
         }
-        string before = Rate(change.Before.Rate.Mean, numbers), after = Rate(change.After.Rate.Mean, numbers);
-        string both = $"{power} it turned {before} before and turns {after} now";
+        string both = $"{power} it {Turn("turned", change.Before.Rate.Mean, numbers)} before and {Turn("turns", change.After.Rate.Mean, numbers)} now";
         string range = $"change {Range(change.Interval95, numbers)}; right is positive";
         return verdict.Code switch
         {
@@ -58,7 +57,9 @@ internal sealed record EnglishCompareWords : CompareWords
             ComparisonVerdictCode.Worse => $"Worse: {both} ({range}).",
             ComparisonVerdictCode.NoClearChange => verdict.ShownEqual
                 ? $"No change: {both}, and the change was shown to be within {numbers.Rate(c.Options.Trim.Tolerance.RadPerSec)} at idle, in level flight and at full power ({range})."
-                : $"These flights cannot tell whether the pull became smaller or larger: {both} ({range}).",
+                : change.Interval95.ExcludesZero
+                    ? $"The turn changed, but whether the pull became smaller these flights cannot tell: {both} ({range})."
+                    : $"These flights cannot tell whether anything changed: {both} ({range}).",
         };
     }
 
@@ -70,14 +71,21 @@ internal sealed record EnglishCompareWords : CompareWords
         return verdict.Code switch
         {
             ComparisonVerdictCode.Fixed => "Two one-sided tests at each of the three powers, each at 5 %, with the scatter from flight to flight counted.",
-            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance),
+            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance) + Larger(c),
             ComparisonVerdictCode.Worse => "The pull became larger: put it back as it was, or go the other way.",
             ComparisonVerdictCode.NoClearChange when verdict.ShownEqual => "What was changed does not matter to the pull, or something else moved with it.",
-            ComparisonVerdictCode.NoClearChange => "Not a sign that nothing changed: the flights are too short, the air too rough or the change too small. Fly both settings again, in turn.",
+            ComparisonVerdictCode.NoClearChange => "Not a sign that it did not work. What is missing: a second flight of each setting, in turn (A-B-A), longer flights or calmer air.",
         };
     }
 
-    private string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
+    /// <summary>Where the pull became larger although it is smaller where it was to be nulled.</summary>
+    private static string Larger(FlightComparison c)
+    {
+        string[] larger = [.. c.Changes.Where(x => x.SizeChange95.Lower > 0).Select(x => At(x.Setting))];
+        return larger.Length == 0 ? "" : $" {Capital(Join(larger))} it became larger: a fixed shift cannot null every power.";
+    }
+
+    private static string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
     {
         if (verdict.WithheldFixed)
             return "whether it is fixed cannot be said without the brakes or hands-off spans in the log.";
@@ -142,7 +150,7 @@ internal sealed record EnglishCompareWords : CompareWords
     {
         if (c.Trend is not SetupTrend t)
             return "";
-        string seen = $"Smallest pull seen: {c.Setups[t.BestSeen].Name}, {Rate(c.Setups[t.BestSeen].AtBalance.Rate.Mean, numbers)}.";
+        string seen = $"Smallest pull seen: {c.Setups[t.BestSeen].Name}, it {Turn("turns", c.Setups[t.BestSeen].AtBalance.Rate.Mean, numbers)}.";
         string line = $"Over the settings the turn changes by {numbers.SensitivityNumber(t.SlopeRadPerSecPerM)} {numbers.SensitivityUnit} of CG offset "
             + $"({numbers.SensitivityNumber(t.SlopeInterval95.Lower)} to {numbers.SensitivityNumber(t.SlopeInterval95.Upper)}).";
         string best = t.BestOffset is { Kind: FiellerKind.Interval, Ratio: double zero, Interval: ConfidenceInterval i }
@@ -202,9 +210,6 @@ internal sealed record EnglishCompareWords : CompareWords
             CompareNoticeCode.BeforeAlreadyInside => "Before the change the pull already lay inside the tolerance.",
             CompareNoticeCode.NoSteering => $"Without brakes or hands-off spans in the log nothing can be called fixed: {Join([.. n])}.",
             CompareNoticeCode.ThrustBasesDiffer => "Some rig files know the thrust in newtons, others do not: all flights are compared at shares of full thrust. Give static_thrust_n in every rig file.",
-            CompareNoticeCode.BlindOrder => Value(0, s => s > 0 ? "fits" : "does not fit") is var fits && fits == "fits"
-                ? $"Blind trial: the sealed order was {Join([.. n])}, and the flights are in it."
-                : $"Blind trial: the sealed order was {Join([.. n])}, but the flights do not follow it.",
         };
     }
 
@@ -212,28 +217,34 @@ internal sealed record EnglishCompareWords : CompareWords
         + (fits ? "" : " There are fewer or more flights than the order has.");
 
     public override string PowerPlotDescription(FlightComparison c) =>
-        $"Turn rate over thrust with {c.Setups[0].Name} and with {c.Setups[^1].Name}, each with its 95 % band, and the tolerance either side of zero.";
+        $"Turn rate over thrust with the settings \"{c.Setups[0].Name}\" and \"{c.Setups[^1].Name}\", each with its 95 % band, and the tolerance either side of zero.";
 
     public override string HistoryDescription(FlightComparison c) =>
         $"Pull in level flight of each of {c.Flights.Length} flights in their order, with 95 % bars of the flight alone; a marker for each setting, and the tolerance either side of zero.";
 
-    public override string NextNote(bool pairUsed, VerdictStrength strength) => pairUsed
+    public override string Strength(VerdictStrength strength) => strength switch
+    {
+        VerdictStrength.None => "Strength: none. A direction at most, never millimetres.",
+        VerdictStrength.Weak => "Strength: weak. The direction is certain, the size is not: go in steps, and fly after each.",
+        VerdictStrength.Fair => "Strength: fair. The size is known within a half; go in steps.",
+        VerdictStrength.Firm => "Strength: firm. Direction and size are known within one step.",
+    };
+
+    public override string NextNote(bool pairUsed) => pairUsed
         ? "This rests on all flights together: what the change between the settings did measures how much a shift turns this machine."
         : "The change between the settings does not measure how much a shift turns this machine; the size of the next step rests on the last setting's flights.";
 
-    private static string Rate(double radPerSec, Numbers numbers)
-    {
-        string size = numbers.Rate(Math.Abs(radPerSec));
-        return numbers.RateNumber(Math.Abs(radPerSec)) == numbers.RateNumber(0) ? $"hardly ({size})" : $"{(radPerSec < 0 ? "left" : "right")} at {size}";
-    }
+    private static string Turn(string verb, double radPerSec, Numbers numbers) => numbers.RateNumber(Math.Abs(radPerSec)) == numbers.RateNumber(0)
+        ? $"hardly {verb}"
+        : $"{verb} {(radPerSec < 0 ? "left" : "right")} at {numbers.Rate(Math.Abs(radPerSec))}";
 
     private static string Range(ConfidenceInterval interval, Numbers numbers) => numbers.RateRange(interval, " to ");
 
-    private static string Join(IReadOnlyList<string> items) => items.Count switch
+    private static string Join(params string[] items) => items.Length switch
     {
         0 => "",
         1 => items[0],
-        _ => string.Join(", ", items.Take(items.Count - 1)) + " and " + items[^1],
+        _ => string.Join(", ", items[..^1]) + " and " + items[^1],
     };
 
     private static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];
