@@ -1,21 +1,21 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
-using TrimFit.Core.Rigging;
 using TrimFit.Pages;
 using TrimFit.Reporting;
+using TrimFit.Reporting.Carrying;
+using TrimFit.Reporting.Documents;
 
 namespace TrimFit.Cli;
 
 internal static class FitCommand
 {
-    public static int Run(IReadOnlyList<string> logs, string rigPath, string? sheetPath, CommonChoices choices, TextWriter output, TextWriter error)
+    public static int Run(IReadOnlyList<string> logs, string? rigPath, string? sheetPath, string? customerPath, bool forgetPlace, CommonChoices choices, TextWriter output, TextWriter error)
     {
-        (Rig rig, SourceFile rigFile) = InputFiles.Rig(rigPath);
-        (FlightSheet Sheet, SourceFile File)? sheet = sheetPath is null ? null : InputFiles.Sheet(sheetPath);
-        FlightImport import = InputFiles.Flight(logs, choices, rig.Log);
-        if (sheet is (FlightSheet Sheet, SourceFile) given)
+        FitInputs inputs = FitInputs.Read(logs, rigPath, sheetPath, forgetPlace, choices);
+        FlightImport import = inputs.Import;
+        if (inputs.Sheet is FlightSheet sheet)
         {
-            SheetedFlight sheeted = SheetLegs.Apply(import.Flight, given.Sheet);
+            SheetedFlight sheeted = SheetLegs.Apply(import.Flight, sheet);
             import = import with
             {
                 Flight = sheeted.Flight,
@@ -23,16 +23,56 @@ internal static class FitCommand
                 Diagnostics = import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] },
             };
         }
-        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions, import.Legs.AsSpan());
-        var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
+        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, inputs.Rig, inputs.Options, import.Legs.AsSpan());
+        var report = new FitReport
+        {
+            Analysis = analysis,
+            Import = import,
+            RigFile = FitInputs.Source(inputs.RigFile),
+            SheetFile = inputs.SheetFile is null ? null : FitInputs.Source(inputs.SheetFile),
+            Provenance = ProgramVersion.Provenance,
+        };
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),
-            () => ReportJson.Fit(report), () => ReportPage.Fit(report, choices.Style), () => ReportMarkdown.Fit(report, choices.Style));
+            () => ReportJson.Fit(report),
+            () => ReportPage.Fit(report with { Carried = inputs.Carriable }, choices.Style, inputs.Pack(ReportJson.Fit(report))),
+            () => ReportMarkdown.Fit(report, choices.Style));
+        if (customerPath is not null)
+            WriteCustomerPage(customerPath, report, choices);
+        if (inputs.FromReport)
+            SayWhetherItAgrees(inputs, report, error);
         if (Answered(analysis))
             return ExitCode.Done;
         if (!choices.Quiet)
             error.WriteLine("trimfit: the data cannot answer the whole question (exit 4); what could be found is in the result.");
         return ExitCode.NoAnswer;
+    }
+
+    private static void WriteCustomerPage(string path, FitReport report, CommonChoices choices)
+    {
+        ReportDocument document = ReportDocuments.Customer(ReportDocuments.CustomerOf(report, choices.Style), choices.Style);
+        bool markdown = Path.GetExtension(path).Equals(".md", StringComparison.OrdinalIgnoreCase);
+        OutputFiles.Write("--customer", path, markdown ? ReportMarkdown.Of(document) : Page.Render(document, new() { Compact = true }));
+    }
+
+    /// <summary>Says it on standard error: the result itself is on standard output as for any log.</summary>
+    private static void SayWhetherItAgrees(FitInputs inputs, FitReport report, TextWriter error)
+    {
+        if (inputs.Before is not string before)
+        {
+            error.WriteLine("trimfit: run again from the report with something overruled, so its result is not compared.");
+            return;
+        }
+        ResultComparison comparison = ResultComparison.Of(before, ReportJson.Fit(report));
+        string tolerance = FormattableString.Invariant($"{ResultComparison.RelativeTolerance * 100} %");
+        if (comparison.Agrees)
+        {
+            error.WriteLine($"trimfit: run again from the report; this version agrees with it (every number within {tolerance}).");
+            return;
+        }
+        error.WriteLine($"trimfit: run again from the report; this version DIFFERS from it in {comparison.Differences.Length.ToString(System.Globalization.CultureInfo.InvariantCulture)} places (numbers by more than {tolerance}), first:");
+        foreach (string difference in comparison.Differences.Take(8))
+            error.WriteLine("trimfit:   " + difference);
     }
 
     /// <summary>Balanced needs no travel; every other verdict is an answer only with one.</summary>

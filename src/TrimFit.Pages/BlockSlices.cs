@@ -18,6 +18,7 @@ internal static class BlockSlices
         ChecksBlock b => ChecksSlice.Create(b),
         FieldsBlock b => FieldsSlice.Create(b),
         SignaturesBlock b => SignaturesSlice.Create(b),
+        LinesBlock b => LinesSlice.Create(b),
         TableBlock b => TableSlice.Create(b),
         FigureBlock b => FigureSlice.Create(b),
         CautionsBlock b => CautionsSlice.Create(b),

@@ -149,6 +149,10 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override ReportWords Report { get; } = new EnglishReportWords();
+
+    public override CustomerWords Customer { get; } = new EnglishCustomerWords();
+
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)
