@@ -68,8 +68,9 @@ internal static class CustomerDocument
         {
             yield return new(c.OtherPart(first.Kind, words.PartShort(first.Kind)), null, null);
         }
-        yield return new(c.Scale(left: true), numbers.Mass(a.RigReport.HangCheckLeftKg), null);
-        yield return new(c.Scale(left: false), numbers.Mass(a.RigReport.HangCheckRightKg), null);
+        // Only what somebody read: the statics' own figures are no readings.
+        yield return new(c.Scale(left: true), a.Rig.HangCheck is RigHangCheck check ? numbers.Mass(check.LeftKg.Value) : null, null);
+        yield return new(c.Scale(left: false), a.Rig.HangCheck is RigHangCheck other ? numbers.Mass(other.RightKg.Value) : null, null);
     }
 
     private static void Part(DocumentBuilder document, string heading, string? text)

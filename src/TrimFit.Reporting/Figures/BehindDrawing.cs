@@ -8,7 +8,7 @@ namespace TrimFit.Reporting.Figures;
 /// <summary>The machine from behind, so that left and right are the seated pilot's: one unit of the drawing is one millimetre sideways, heights are sketched.</summary>
 internal static class BehindDrawing
 {
-    private const int Top = -250, CarabinerY = -80, HangY = -44, CgY = 70, HubY = 60, Ring = 150, TextSize = 18;
+    private const int Top = -250, CarabinerY = -80, HangY = -32, CgY = 70, HubY = 60, Ring = 150, TextSize = 18;
     private const double LongestLoad = 110; // units of the drawing for the larger riser load
 
     /// <summary>What to move: the part with an arrow, how far, and the readings of the hang check.</summary>
@@ -37,6 +37,7 @@ internal static class BehindDrawing
         Centred(svg, 294, w.ToYourSide(numbers.Travel(first.FirstStep, first.Unit), first.FirstStep), bold: true);
         // The two scales of the hang check, each on its side.
         double x = half - 14;
+        Centred(svg, 338, w.HangCheckAfter, bold: false);
         Label(svg, -x, 338, "start", w.LeftScale);
         Label(svg, -x, 362, "start", numbers.Mass(first.HangCheckLeftKg), bold: true);
         Label(svg, x, 338, "end", w.RightScale);

@@ -11,10 +11,15 @@ namespace TrimFit.Reporting.Figures;
 /// <summary>The wind circle and the ground track: both square, both thinned so that the page stays small.</summary>
 internal static class GroundPlots
 {
-    private const int Size = 520, MostDots = 400, MostTrackPoints = 1200;
+    private const int Size = 520, Below = 124, MostDots = 400, MostTrackPoints = 1200;
 
     /// <summary>Velocities over ground around the wind; null without a wind.</summary>
-    public static string? Wind(TurnSignals signals, string description, Words words, Numbers numbers)
+    public static string? Wind(TurnSignals signals, string description, Words words, Numbers numbers) => WindPlot(signals, words, numbers) is Plot plot
+        ? Finish(plot, "wind", numbers.SpeedUnit, words.Report.WindTitle, description, words)
+        : null;
+
+    /// <summary>The wind circle as a plot.</summary>
+    internal static Plot? WindPlot(TurnSignals signals, Words words, Numbers numbers)
     {
         if (signals.Wind is not Wind wind || !signals.HasVelocity)
             return null;
@@ -45,7 +50,7 @@ internal static class GroundPlots
         arrow.LegendText = w.WindArrow;
         double reach = 1.1 * Math.Max(circle.Max(p => Math.Max(Math.Abs(p.X), Math.Abs(p.Y))), drawn.Max(i => Math.Max(Math.Abs(signals.VelocityEast[i]), Math.Abs(signals.VelocityNorth[i])) * scale));
         plot.Axes.SetLimits(-reach, reach, -reach, reach);
-        return Finish(plot, "wind", numbers.SpeedUnit, w.WindTitle, description, words);
+        return plot;
     }
 
     /// <summary>Positions over ground from the first one, and the way flown, m; null when the log has none.</summary>
@@ -93,8 +98,8 @@ internal static class GroundPlots
         plot.XLabel(words.Report.AxisEast(unit));
         plot.YLabel(words.Report.AxisNorth(unit));
         TurnPlot.Axes(plot);
-        plot.Layout.Fixed(new PixelPadding(78, 14, 96, 8)); // as wide as high: 428 by 428
+        plot.Layout.Fixed(new PixelPadding(74, 24, Below, 14)); // as wide as high
         plot.ShowLegend(Edge.Bottom);
-        return SvgFigure.Stack(id, Size, [(plot, Size + 12)], title, description);
+        return SvgFigure.Stack(id, Size, [(plot, Size - 74 - 24 + Below + 14)], title, description);
     }
 }

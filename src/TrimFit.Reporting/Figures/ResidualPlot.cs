@@ -40,7 +40,8 @@ internal static class ResidualPlot
             ], w.ResidualsTitle, description);
     }
 
-    private static Plot Panel(IReadOnlyList<(TurnPoint Point, double RadPerSec)> residuals, Func<TurnPoint, double> x, string axis, bool legend, Words words, Numbers numbers)
+    /// <summary>One panel as a plot.</summary>
+    internal static Plot Panel(IReadOnlyList<(TurnPoint Point, double RadPerSec)> residuals, Func<TurnPoint, double> x, string axis, bool legend, Words words, Numbers numbers)
     {
         var plot = new Plot();
         PlotFont.Use(plot);
@@ -56,7 +57,8 @@ internal static class ResidualPlot
             s.MarkerShape = handsOff ? MarkerShape.FilledCircle : MarkerShape.OpenTriangleUp;
             s.MarkerSize = handsOff ? 7 : 9;
             s.MarkerLineWidth = 1.5f;
-            s.LegendText = handsOff ? words.Labels.HandsOff : words.Labels.HandsOn;
+            if (legend) // one for both panels
+                s.LegendText = handsOff ? words.Labels.HandsOff : words.Labels.HandsOn;
         }
         double most = residuals.Max(r => Math.Abs(double.RadiansToDegrees(r.RadPerSec))) * 1.15;
         plot.Axes.SetLimitsY(-Math.Max(most, 0.2), Math.Max(most, 0.2));
@@ -66,7 +68,7 @@ internal static class ResidualPlot
         plot.YLabel(words.Report.AxisResidual);
         TurnPlot.Axes(plot);
         plot.Axes.Left.Label.FontSize = 13; // the two panels are low
-        plot.Layout.Fixed(new PixelPadding(78, 14, legend ? 96 : 52, 8));
+        plot.Layout.Fixed(new PixelPadding(78, 18, legend ? 96 : 52, 14));
         if (legend)
             plot.ShowLegend(Edge.Bottom);
         return plot;

@@ -9,13 +9,16 @@ namespace TrimFit.Reporting.Figures;
 /// <summary>Turn left over at each power: a row for the machine as it is and one for each way of making the shift, a sign for each power.</summary>
 internal static class TurnLeftPlot
 {
-    private const int Width = 760, RowHeight = 34, Left = 330;
+    private const int Width = 760, RowHeight = 34, Left = 330, Below = 150; // below: the axis and three rows of signs
 
     /// <summary>The figure; null without an adjustment.</summary>
-    public static string? Draw(TrimAnalysis analysis, string description, Words words, Numbers numbers)
+    public static string? Draw(TrimAnalysis analysis, string description, Words words, Numbers numbers) => analysis.Adjustments.IsEmpty
+        ? null
+        : SvgFigure.Stack("left", Width, [(Build(analysis, words, numbers), 8 + Below + ((analysis.Adjustments.Length + 1) * RowHeight))], words.Report.TurnLeftTitle, description);
+
+    /// <summary>The figure as a plot.</summary>
+    internal static Plot Build(TrimAnalysis analysis, Words words, Numbers numbers)
     {
-        if (analysis.Adjustments.IsEmpty)
-            return null;
         ReportWords w = words.Report;
         List<(string Name, IReadOnlyList<PullAtSetting> At)> rows = [(w.AsItIs, analysis.Pull.At)];
         rows.AddRange(analysis.Adjustments.Select(a => (words.PartShort(a.Kind), (IReadOnlyList<PullAtSetting>)a.TurnLeftAt)));
@@ -52,8 +55,8 @@ internal static class TurnLeftPlot
         TurnPlot.Axes(plot);
         plot.Axes.Left.TickLabelStyle.FontSize = 13;
         plot.Axes.SetLimits(-1.15 * most, 1.15 * most, -(rows.Count - 1) - 0.6, 0.6);
-        plot.Layout.Fixed(new PixelPadding(Left, 14, 96, 8));
+        plot.Layout.Fixed(new PixelPadding(Left, 18, Below, 8));
         plot.ShowLegend(Edge.Bottom);
-        return SvgFigure.Stack("left", Width, [(plot, 104 + (rows.Count * RowHeight))], w.TurnLeftTitle, description);
+        return plot;
     }
 }

@@ -12,6 +12,7 @@ internal sealed record EnglishReportWords : ReportWords
     public override string YourLeft => "your left";
     public override string YourRight => "your right";
     public override string LeftScale => "left scale";
+    public override string HangCheckAfter => "hang check after it";
     public override string RightScale => "right scale";
     public override string LeftRiserLoad => "left risers";
     public override string RightRiserLoad => "right risers";
@@ -29,8 +30,8 @@ internal sealed record EnglishReportWords : ReportWords
     public override string WindTitle => "Wind circle";
     public override string TrackTitle => "Ground track";
     public override string Start => "start";
-    public override string GroundVelocity => "velocity over ground";
-    public override string AirspeedCircle => "airspeed around the wind";
+    public override string GroundVelocity => "over ground";
+    public override string AirspeedCircle => "airspeed";
     public override string WindArrow => "wind";
     public override string ProveWrongTitle => "What would prove this wrong";
     public override string CovarianceTitle => "Covariance of the coefficients";
@@ -63,7 +64,7 @@ internal sealed record EnglishReportWords : ReportWords
     public override string BehindDescription(AdjustmentReport? first, string part, string travel, Numbers numbers) => first is null
         ? "The machine from behind, left and right as the seated pilot sees them. No part is to be moved now."
         : $"The machine from behind, left and right as the seated pilot sees them. First step: {part}, {travel}. Hang check after it: left scale "
-            + $"{numbers.Mass(first.HangCheckLeftKg)}, right scale {numbers.Mass(first.HangCheckRightKg)}.";
+            + $"{numbers.Mass(first.HangCheckLeftKg)}, right scale {numbers.Mass(first.HangCheckRightKg)}. Dots are the riser carabiners, squares the front harness hang points, the disc the CG. The arrows show the way, not the distance.";
 
     public override string ForcesDescription(string left, string right, string torque, string cg) =>
         $"At full thrust the left risers carry {left} and the right ones {right}; torque on the frame {torque}; CG offset from the middle between the riser carabiners {cg}. "

@@ -11,6 +11,7 @@ internal abstract record ReportWords
     public abstract string YourLeft { get; }
     public abstract string YourRight { get; }
     public abstract string LeftScale { get; }
+    public abstract string HangCheckAfter { get; }
     public abstract string RightScale { get; }
     public abstract string LeftRiserLoad { get; }
     public abstract string RightRiserLoad { get; }
