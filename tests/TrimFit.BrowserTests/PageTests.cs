@@ -91,6 +91,40 @@ public sealed partial class PageTests(ReportPages pages) : IClassFixture<ReportP
     }
 
     [Fact]
+    public async Task Every_report_draws_a_picture_at_both_widths_in_colour_and_in_grey()
+    {
+        string? kept = Environment.GetEnvironmentVariable("TRIMFIT_PICTURES"); // a folder to look at them in
+        foreach (string flight in ReportPages.Flights)
+        {
+            foreach (int width in new[] { PhoneWidth, PaperWidth })
+            {
+                await using IBrowserContext context = await pages.Open(width);
+                IPage page = await Show(context, flight + ".html");
+                byte[] colour = await page.ScreenshotAsync(new() { FullPage = true });
+                await page.AddStyleTagAsync(new() { Content = "html { filter: grayscale(1); }" });
+                byte[] grey = await page.ScreenshotAsync(new() { FullPage = true });
+                Assert.InRange(colour.Length, 50_000, 5_000_000);
+                Assert.NotEqual(colour, grey);
+                if (kept is null)
+                    continue;
+                await File.WriteAllBytesAsync(Path.Combine(kept, FormattableString.Invariant($"{flight}-{width}.png")), colour, TestContext.Current.CancellationToken);
+                await File.WriteAllBytesAsync(Path.Combine(kept, FormattableString.Invariant($"{flight}-{width}-grey.png")), grey, TestContext.Current.CancellationToken);
+            }
+        }
+        if (kept is not null)
+            await KeepForTheReadme(kept);
+    }
+
+    /// <summary>The two pictures of the README: the first screen, and the pull over power.</summary>
+    private async Task KeepForTheReadme(string folder)
+    {
+        await using IBrowserContext context = await pages.Open(PaperWidth);
+        IPage page = await Show(context, "uncorrected.html");
+        await page.ScreenshotAsync(new() { Path = Path.Combine(folder, "report-first-screen.png"), Clip = new() { X = 0, Y = 0, Width = PaperWidth, Height = 1130 } });
+        await page.Locator("figure").Filter(new() { Has = page.Locator("#turn-t") }).ScreenshotAsync(new() { Path = Path.Combine(folder, "report-turn-rate.png") });
+    }
+
+    [Fact]
     public async Task The_customers_page_is_one_side_of_paper()
     {
         foreach (string flight in ReportPages.Flights)

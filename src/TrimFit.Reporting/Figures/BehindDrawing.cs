@@ -62,7 +62,7 @@ internal static class BehindDrawing
         double? leftAfter = after?.RiserLoadLeftN, rightAfter = after?.RiserLoadRightN;
         string left = Change(full.RiserLoadLeftN, leftAfter), right = Change(full.RiserLoadRightN, rightAfter);
         string torque = rig.Propeller.RotationSign == 0 ? words.Labels.None
-            : $"{numbers.Moment(full.TorqueNm)} {words.Side(-rig.Propeller.RotationSign)}";
+            : w.Tipping(numbers.Moment(full.TorqueNm), -rig.Propeller.RotationSign);
         string cg = words.Lateral(report.CgOffsetM, numbers);
         string description = w.ForcesDescription(left, right, torque, cg);
         var svg = new StringBuilder();

@@ -99,6 +99,6 @@ public class FigureModelTests
         (string svg, string description) = BehindDrawing.Forces(ReportFixture.Rig(), ReportFixture.RigReport(), ReportFixture.Adjustment(), Words.English, Numbers.Invariant)!.Value;
         Assert.Contains("617 → 571 N", svg, StringComparison.Ordinal);
         Assert.Contains("362 → 408 N", svg, StringComparison.Ordinal);
-        Assert.Contains("the left risers carry 617 → 571 N and the right ones 362 → 408 N; torque on the frame 56.0 N m left", description, StringComparison.Ordinal); // clockwise: the frame is turned to the left
+        Assert.Contains("the left risers carry 617 → 571 N and the right ones 362 → 408 N; torque on the frame 56.0 N m, tipping it left", description, StringComparison.Ordinal); // clockwise: the frame is turned to the left
     }
 }

@@ -68,7 +68,7 @@ internal sealed record EnglishCustomerWords : CustomerWords
     };
 
     public override string LeftOver(double? offRadPerSec, Numbers numbers) => offRadPerSec is double r && numbers.RateNumber(Math.Abs(r)) != numbers.RateNumber(0)
-        ? $"With the engine off the machine will turn a little to your {(r < 0 ? "left" : "right")}. That is normal: the shift is made for level flight, and without the engine's torque it has nothing to hold against. At full power a little of the old pull stays."
+        ? $"With the engine off the machine will turn a little to your {(r < 0 ? "left" : "right")}. That is normal: the shift balances the engine in level flight and stays when the engine is off. At full power a little of the old pull stays."
         : "A fixed shift is made for one power, level flight. A small turn with the engine off and a small one to the other side at full power are normal.";
 
     public override string Carabiner(bool left) => left ? "left riser carabiner from the centre line" : "right riser carabiner from the centre line";

@@ -61,6 +61,8 @@ internal sealed record EnglishReportWords : ReportWords
 
     public override string ToYourSide(string amount, double rightPositive) => $"{amount} to your {(rightPositive < 0 ? "left" : "right")}";
 
+    public override string Tipping(string amount, double rightPositive) => $"{amount}, tipping it {Side(rightPositive)}";
+
     public override string BehindDescription(AdjustmentReport? first, string part, string travel, Numbers numbers) => first is null
         ? "The machine from behind, left and right as the seated pilot sees them. No part is to be moved now."
         : $"The machine from behind, left and right as the seated pilot sees them. First step: {part}, {travel}. Hang check after it: left scale "

@@ -53,6 +53,9 @@ internal abstract record ReportWords
     /// <summary>How far to which side: <c>7 mm to your left</c>.</summary>
     public abstract string ToYourSide(string amount, double rightPositive);
 
+    /// <summary>A torque that tips the frame to a side.</summary>
+    public abstract string Tipping(string amount, double rightPositive);
+
     /// <summary>Legs to fly when the flight could not answer.</summary>
     public abstract IReadOnlyList<string> LegsToFly { get; }
 
