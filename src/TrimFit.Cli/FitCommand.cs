@@ -1,5 +1,6 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Rigging;
 using TrimFit.Pages;
 using TrimFit.Reporting;
 using TrimFit.Reporting.Carrying;
@@ -12,26 +13,8 @@ internal static class FitCommand
     public static int Run(IReadOnlyList<string> logs, string? rigPath, string? sheetPath, string? customerPath, bool forgetPlace, CommonChoices choices, TextWriter output, TextWriter error)
     {
         FitInputs inputs = FitInputs.Read(logs, rigPath, sheetPath, forgetPlace, choices);
-        FlightImport import = inputs.Import;
-        if (inputs.Sheet is FlightSheet sheet)
-        {
-            SheetedFlight sheeted = SheetLegs.Apply(import.Flight, sheet);
-            import = import with
-            {
-                Flight = sheeted.Flight,
-                Legs = sheeted.Legs,
-                Diagnostics = import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] },
-            };
-        }
-        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, inputs.Rig, inputs.Options, import.Legs.AsSpan());
-        var report = new FitReport
-        {
-            Analysis = analysis,
-            Import = import,
-            RigFile = FitInputs.Source(inputs.RigFile),
-            SheetFile = inputs.SheetFile is null ? null : FitInputs.Source(inputs.SheetFile),
-            Provenance = ProgramVersion.Provenance,
-        };
+        FitReport report = Fit(inputs.Import, (inputs.Rig, FitInputs.Source(inputs.RigFile)),
+            inputs.Sheet is FlightSheet sheet ? (sheet, FitInputs.Source(inputs.SheetFile!)) : null, inputs.Options);
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),
             () => ReportJson.Fit(report),
@@ -41,11 +24,30 @@ internal static class FitCommand
             WriteCustomerPage(customerPath, report, choices);
         if (inputs.FromReport)
             SayWhetherItAgrees(inputs, report, error);
-        if (Answered(analysis))
-            return ExitCode.Done;
-        if (!choices.Quiet)
+        int code = CodeOf(report.Analysis);
+        if (code != ExitCode.Done && !choices.Quiet)
             error.WriteLine("trimfit: the data cannot answer the whole question (exit 4); what could be found is in the result.");
-        return ExitCode.NoAnswer;
+        return code;
+    }
+
+    /// <summary>One flight from its files to its result.</summary>
+    public static FitReport Fit(IReadOnlyList<string> logs, (Rig Rig, SourceFile File) machine, string? sheetPath, CommonChoices choices) =>
+        Fit(InputFiles.Flight(logs, choices, machine.Rig.Log), machine, sheetPath is null ? null : InputFiles.Sheet(sheetPath), choices.TrimOptions);
+
+    private static FitReport Fit(FlightImport import, (Rig Rig, SourceFile File) machine, (FlightSheet Sheet, SourceFile File)? sheet, TrimOptions options)
+    {
+        if (sheet is (FlightSheet Sheet, SourceFile) given)
+        {
+            SheetedFlight sheeted = SheetLegs.Apply(import.Flight, given.Sheet);
+            import = import with
+            {
+                Flight = sheeted.Flight,
+                Legs = sheeted.Legs,
+                Diagnostics = import.Diagnostics with { Warnings = [.. import.Diagnostics.Warnings, .. sheeted.Warnings] },
+            };
+        }
+        TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, machine.Rig, options, import.Legs.AsSpan());
+        return new FitReport { Analysis = analysis, Import = import, RigFile = machine.File, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
     }
 
     private static void WriteCustomerPage(string path, FitReport report, CommonChoices choices)
@@ -75,11 +77,11 @@ internal static class FitCommand
             error.WriteLine("trimfit:   " + difference);
     }
 
-    /// <summary>Balanced needs no travel; every other verdict is an answer only with one.</summary>
-    private static bool Answered(TrimAnalysis analysis) => analysis.Verdict.Code switch
+    /// <summary>Exit code of a result: balanced needs no travel, every other verdict is an answer only with one.</summary>
+    public static int CodeOf(TrimAnalysis analysis) => analysis.Verdict.Code switch
     {
-        VerdictCode.Insufficient => false,
-        VerdictCode.Balanced => true,
-        _ => analysis.Verdict.TravelGiven,
+        VerdictCode.Insufficient => ExitCode.NoAnswer,
+        VerdictCode.Balanced => ExitCode.Done,
+        _ => analysis.Verdict.TravelGiven ? ExitCode.Done : ExitCode.NoAnswer,
     };
 }

@@ -5,6 +5,7 @@ using TrimFit.Core.Rigging;
 using TrimFit.Import;
 using TrimFit.Import.Joining;
 using TrimFit.Import.Rigs;
+using TrimFit.Import.Sheets;
 using TrimFit.Import.Toml;
 using TrimFit.Reporting;
 using TrimFit.Reporting.Carrying;
@@ -50,6 +51,12 @@ internal static class InputFiles
     {
         MustExist(path);
         return (RigFileReader.ReadFile(path), Source(path));
+    }
+
+    public static (FlightSheet Sheet, SourceFile File) Sheet(string path)
+    {
+        MustExist(path);
+        return (FlightSheetReader.ReadFile(path), Source(path));
     }
 
     public static string Text(string path)

@@ -21,6 +21,9 @@ internal abstract record Words
     /// <summary>Texts of the customer's page.</summary>
     public abstract CustomerWords Customer { get; }
 
+    /// <summary>Words of the summary of many flights.</summary>
+    public abstract Batch.BatchWords Batch { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
