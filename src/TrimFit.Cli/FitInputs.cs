@@ -6,7 +6,6 @@ using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Units;
 using TrimFit.Import;
-using TrimFit.Import.Joining;
 using TrimFit.Import.Rigs;
 using TrimFit.Import.Sheets;
 using TrimFit.Import.Toml;

@@ -163,7 +163,7 @@ internal static class FitDocument
         AdjustmentReport? first = answer.Adjustment;
         string travel = first is null ? "" : words.Report.ToYourSide(numbers.Travel(first.FirstStep, first.Unit), first.FirstStep);
         string shown = words.Report.BehindDescription(first, first is null ? "" : words.PartShort(first.Kind), travel, numbers);
-        document.Heading(words.Report.BehindTitle);
+        document.Heading(first is null ? words.Report.BehindAsItIsTitle : words.Report.BehindTitle);
         document.Figure(BehindDrawing.Action(a.Rig, a.RigReport, first, a.Verdict.Code == VerdictCode.Balanced, shown, words, numbers), shown, FigureKind.Drawing);
     }
 

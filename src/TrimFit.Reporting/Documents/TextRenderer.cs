@@ -56,7 +56,7 @@ internal static class TextRenderer
                     break;
                 case LinesBlock lines:
                     for (int i = 0; i < lines.Count; i++)
-                        text.Append(Line).Append("\n");
+                        text.Append(Line).Append('\n');
                     break;
                 case PageBreakBlock:
                     text.Append('\n');

@@ -8,7 +8,7 @@ namespace TrimFit.Reporting.Figures;
 /// <summary>The machine from behind, so that left and right are the seated pilot's: one unit of the drawing is one millimetre sideways, heights are sketched.</summary>
 internal static class BehindDrawing
 {
-    private const int Top = -250, CarabinerY = -80, HangY = -32, CgY = 70, HubY = 60, Ring = 150, TextSize = 18;
+    private const int Top = -250, CarabinerY = -80, HangY = -32, CgY = 70, HubY = 60, Ring = 150, TextSize = 20; // on a phone 11 px
     private const double LongestLoad = 110; // units of the drawing for the larger riser load
 
     /// <summary>What to move: the part with an arrow, how far, and the readings of the hang check.</summary>
@@ -25,7 +25,7 @@ internal static class BehindDrawing
         double half = Half(rig);
         var svg = new StringBuilder();
         int height = first is null ? 556 : 626;
-        Open(svg, "behind", half, height, w.BehindTitle, description);
+        Open(svg, "behind", half, height, first is null ? w.BehindAsItIsTitle : w.BehindTitle, description);
         Machine(svg, rig, report, half, words);
         if (first is null)
         {
@@ -112,7 +112,7 @@ internal static class BehindDrawing
         // Risers, then the frame with its propeller ring, then the pilot: nearest last.
         svg.Append(Invariant($"<path d=\"M{left:0.#} {CarabinerY}L{left * 1.02:0.#} {Top + 40}M{right:0.#} {CarabinerY}L{right * 1.02:0.#} {Top + 40}\" stroke=\"{Palette.Grey}\" stroke-width=\"3\"/>\n"));
         svg.Append(Invariant($"<circle cx=\"{thrust:0.#}\" cy=\"{HubY}\" r=\"{Ring}\" fill=\"none\" stroke=\"{Palette.Shade}\" stroke-width=\"9\"/>\n"));
-        svg.Append(Invariant($"<path d=\"M{left:0.#} {CarabinerY}L{left * 0.5:0.#} {HubY - 40}M{right:0.#} {CarabinerY}L{right * 0.5:0.#} {HubY - 40}\" stroke=\"{Palette.Shade}\" stroke-width=\"9\" stroke-linecap=\"round\"/>\n"));
+        svg.Append(Invariant($"<path d=\"M{left:0.#} {CarabinerY}L{front - pair:0.#} {HangY}L{thrust - 110:0.#} {HubY - 40}M{right:0.#} {CarabinerY}L{front + pair:0.#} {HangY}L{thrust + 110:0.#} {HubY - 40}\" fill=\"none\" stroke=\"{Palette.Shade}\" stroke-width=\"9\" stroke-linecap=\"round\"/>\n"));
         svg.Append(Invariant($"<circle cx=\"{cg:0.#}\" cy=\"-38\" r=\"30\" fill=\"#fff\" stroke=\"{Palette.Grey}\" stroke-width=\"3\"/>"));
         svg.Append(Invariant($"<path d=\"M{cg - 58:0.#} 24Q{cg - 58:0.#} -4 {cg - 30:0.#} -4H{cg + 30:0.#}Q{cg + 58:0.#} -4 {cg + 58:0.#} 24V140Q{cg:0.#} 176 {cg - 58:0.#} 140Z\" fill=\"#fff\" stroke=\"{Palette.Grey}\" stroke-width=\"3\"/>\n"));
         svg.Append(Invariant($"<path d=\"M0 {Top + 40}V222\" stroke=\"{Palette.Grey}\" stroke-width=\"1.5\" fill=\"none\" stroke-dasharray=\"10 4 2 4\"/>\n"));

@@ -1,6 +1,5 @@
 using ScottPlot;
 using ScottPlot.Plottables;
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Turns;
 using TrimFit.Core.Units;
@@ -74,7 +73,8 @@ internal static class GroundPlots
         Scatter line = plot.Add.ScatterLine(places.Select(p => p.East * scale).ToArray(), places.Select(p => p.North * scale).ToArray());
         line.Color = Palette.Of(Palette.Ink);
         line.LineWidth = 1.5f;
-        Scatter start = plot.Add.ScatterPoints(new[] { 0.0 }, new[] { 0.0 });
+        double[] origin = [0];
+        Scatter start = plot.Add.ScatterPoints(origin, origin);
         start.Color = Palette.Of(Palette.Vermilion);
         start.MarkerShape = MarkerShape.FilledCircle;
         start.MarkerSize = 12;

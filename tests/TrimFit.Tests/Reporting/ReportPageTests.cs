@@ -115,7 +115,7 @@ public partial class ReportPageTests
             },
         };
         string page = ReportPage.Fit(ReportFixture.Report(analysis), new());
-        Assert.Equal(["What to move, seen from behind", "The rig from above", "Loads from behind, at full thrust"], Figures(page).Select(f => Child(f, "title")));
+        Assert.Equal(["The machine from behind", "The rig from above", "Loads from behind, at full thrust"], Figures(page).Select(f => Child(f, "title")));
         Assert.Contains("This flight cannot tell how hard the machine turns.", page, StringComparison.Ordinal);
     }
 

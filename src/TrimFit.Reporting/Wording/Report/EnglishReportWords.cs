@@ -8,6 +8,7 @@ namespace TrimFit.Reporting.Wording;
 internal sealed record EnglishReportWords : ReportWords
 {
     public override string BehindTitle => "What to move, seen from behind";
+    public override string BehindAsItIsTitle => "The machine from behind";
     public override string ForcesTitle => "Loads from behind, at full thrust";
     public override string YourLeft => "your left";
     public override string YourRight => "your right";

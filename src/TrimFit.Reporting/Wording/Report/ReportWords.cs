@@ -1,5 +1,4 @@
 using TrimFit.Core.Analysis;
-using TrimFit.Core.Turns;
 
 namespace TrimFit.Reporting.Wording;
 
@@ -7,6 +6,7 @@ namespace TrimFit.Reporting.Wording;
 internal abstract record ReportWords
 {
     public abstract string BehindTitle { get; }
+    public abstract string BehindAsItIsTitle { get; }
     public abstract string ForcesTitle { get; }
     public abstract string YourLeft { get; }
     public abstract string YourRight { get; }
