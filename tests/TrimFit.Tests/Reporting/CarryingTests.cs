@@ -4,7 +4,6 @@ using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Import;
 using TrimFit.Pages;
-using TrimFit.Reporting;
 using TrimFit.Reporting.Carrying;
 
 namespace TrimFit.Tests.Reporting;
