@@ -56,6 +56,7 @@ internal static class FitDocument
         document.Heading(labels.Warnings);
         document.List([
             .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
+            .. a.RigReport.GroundFaults.Select(f => words.Ground.Fault(f, numbers)),
             .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
         if (figures)
         {

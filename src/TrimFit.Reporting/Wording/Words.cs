@@ -21,6 +21,9 @@ internal abstract record Words
     /// <summary>Texts of the customer's page.</summary>
     public abstract CustomerWords Customer { get; }
 
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 
