@@ -16,4 +16,12 @@ public static class ReportMarkdown
 
     /// <summary>The result of <c>rig</c>.</summary>
     public static string Rig(RigSheetReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Rig(report, style, figures: true));
+
+    /// <summary>Any document.</summary>
+    /// <param name="document">What to write.</param>
+    public static string Of(ReportDocument document)
+    {
+        ArgumentNullException.ThrowIfNull(document);
+        return MarkdownRenderer.Render(document);
+    }
 }

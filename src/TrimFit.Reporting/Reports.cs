@@ -21,6 +21,9 @@ public sealed record FitReport
     /// <summary>The flight sheet; null when none was given.</summary>
     public SourceFile? SheetFile { get; init; }
 
+    /// <summary>What the page carries of its own input.</summary>
+    public CarriedInput Carried { get; init; }
+
     /// <summary>The program.</summary>
     public required Provenance Provenance { get; init; }
 }

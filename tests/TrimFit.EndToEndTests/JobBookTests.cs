@@ -51,6 +51,10 @@ public partial class JobBookTests
         string page = File.ReadAllText(folder["demo-job.html"]);
         foreach (string wanted in new[] { "T. Echnician", "A. Pilot", "pulls left at full power", "It approves nothing", "Before every flight after a change do the hang check", "A pull that grew suddenly is a fault" })
             Assert.Contains(wanted, page, StringComparison.Ordinal);
+        string customer = System.Net.WebUtility.HtmlDecode(File.ReadAllText(folder["demo-customer.html"]));
+        foreach (string wanted in new[] { "T. Echnician, 2", "A. Pilot", "pulls left at full power", "brake lines, left against right: in order, 3 mm", "it turned left at 1.4 deg/s", "it turned left at 0.9 deg/s",
+            "both riser carabiners 7 mm left", "220 mm left", "227 mm left", "It approves nothing", "First flight after a change", "A pull that grew suddenly is a fault" })
+            Assert.Contains(wanted, customer, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -122,10 +122,11 @@ internal static class JobCommandTree
     private static Command Show(TextWriter output, TextWriter error)
     {
         Argument<string> job = Job();
+        Option<string> customer = Words("--customer", "Write the page the customer gets: .html or .md.", "FILE");
         var own = new JobOptions(error);
-        var command = new Command("show", "Everything about one job.") { job };
+        var command = new Command("show", "Everything about one job, and the page for the customer.") { job, customer };
         own.Add(command, report: true);
-        command.SetAction(parsed => JobWork.Show(own.Choices(parsed), Number(parsed, job), output));
+        command.SetAction(parsed => JobWork.Show(own.Choices(parsed), Number(parsed, job), parsed.GetValue(customer), output));
         return command;
     }
 

@@ -6,7 +6,6 @@ using TrimFit.Core.Comparing;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;
-using TrimFit.Import;
 using TrimFit.Jobs;
 using TrimFit.Pages;
 using TrimFit.Reporting;
