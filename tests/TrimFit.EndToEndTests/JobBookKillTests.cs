@@ -97,6 +97,7 @@ public class JobBookKillTests(ITestOutputHelper output)
     }
 
     [Fact]
+    [System.Runtime.Versioning.UnsupportedOSPlatform("windows")]
     public void In_a_folder_that_may_not_be_written_it_reads_and_says_why_it_does_not_write()
     {
         Assert.SkipWhen(OperatingSystem.IsWindows(), "file modes are Unix's");

@@ -64,7 +64,7 @@ public static class JobDocuments
                 .Where(r => r.Text.Length > 0).Select(r => (IReadOnlyList<string>)[r.Name, r.Text]));
         document.Heading(w.Checks);
         document.Table([new(w.Date, false), new(w.Check, false), new(w.Outcome, false), new(w.Found), new(w.By, false), new(w.Notes, false)],
-            job.Checks.Select(c => (IReadOnlyList<string>)[Date(c.Made), w.CheckName(c.Code), w.OutcomeOf(c.Outcome), c.Value is double v ? numbers.Significant(v, 4) + " " + c.Unit : "", c.By, c.Note]));
+            job.Checks.Select(c => (IReadOnlyList<string>)[Date(c.Made), w.CheckName(c.Code), w.OutcomeOf(c.Outcome), c.Value is double v ? numbers.Tick(v) + " " + c.Unit : "", c.By, c.Note]));
         document.Heading(w.Setups);
         document.Table([new(w.Setup), new(w.Date, false), new(w.What, false), new(w.RigFile, false)],
             job.Setups.Select(s => (IReadOnlyList<string>)[numbers.Integer(s.Number), Date(s.Made), Join(w.SetupOrigin(s), s.Note), $"{s.RigName} {Short(s.RigSha256)}"]));

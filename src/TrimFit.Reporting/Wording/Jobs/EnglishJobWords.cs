@@ -154,7 +154,7 @@ internal sealed record EnglishJobWords : JobWords
         string.Join(" ", adjustments.Select(a => $"Moved, by the readings: {Words.English.PartShort(a.Kind)} {Words.English.Travel(a.Travel, FitFacts.UnitOf(a.Kind), numbers)}."));
 
     public override string CheckLine(CheckRecord check, Numbers numbers) =>
-        $"{CheckName(check.Code)}: {OutcomeOf(check.Outcome)}{(check.Value is double v ? $", {numbers.Significant(v, 4)} {check.Unit}" : "")}{Tail(check.Note)}";
+        $"{CheckName(check.Code)}: {OutcomeOf(check.Outcome)}{(check.Value is double v ? $", {numbers.Tick(v)} {check.Unit}" : "")}{Tail(check.Note)}";
 
     public override string SignedAs(SignatureRecord signature) => $"{signature.Name}, {JobDocuments.Date(signature.Date)}";
 
@@ -175,7 +175,7 @@ internal sealed record EnglishJobWords : JobWords
     {
         JobEvent.Opened e => $"Job {Text(job)} is open: {e.Job.Machine}.",
         JobEvent.Measured e => $"Job {Text(job)} has setup {Text(e.Setup.Number)} ({e.Setup.RigName}).",
-        JobEvent.Checked e => $"Job {Text(job)}, check {Text(e.Check.Number)}: {CheckName(e.Check.Code)} {OutcomeOf(e.Check.Outcome)}.",
+        JobEvent.Checked e => $"Job {Text(job)}, check {Text(e.Check.Number)}: {CheckLine(e.Check, numbers)}.",
         JobEvent.Flown e => $"Job {Text(job)}, flight {Text(e.Flight.Number)} is kept with its result (setup {Text(e.Flight.Setup)}).",
         JobEvent.Found e => $"Job {Text(job)}, result {Text(e.Result.Number)} is kept: {Found1(e.Result, numbers)}.",
         JobEvent.Adjusted e => $"Job {Text(job)}, setup {Text(e.Adjustment.ToSetup)}: {Moved(e.Adjustment, numbers)}.",
