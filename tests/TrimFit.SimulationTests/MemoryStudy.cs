@@ -3,7 +3,6 @@ using System.Globalization;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
-using TrimFit.Simulation;
 
 namespace TrimFit.SimulationTests;
 
