@@ -87,12 +87,15 @@ internal static class CardStudy
         var outcomes = new Outcome?[flights];
         var clock = Stopwatch.StartNew();
         int done = 0;
+        const int TableEvery = 50; // a study that is stopped has shown something
         Parallel.For(0, flights, new ParallelOptions { MaxDegreeOfParallelism = threads }, i =>
         {
             outcomes[i] = One((seed * 10_000) + (ulong)i, minutes);
             int now = Interlocked.Increment(ref done);
             if (now % 10 == 0)
                 Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\rcard: {now}/{flights}, {clock.Elapsed.TotalSeconds:F0} s "));
+            if (now % TableEvery == 0 && now < flights)
+                Console.WriteLine(Table([.. outcomes.OfType<Outcome>()], now));
         });
         Console.Error.WriteLine();
         Console.WriteLine(Table([.. outcomes.OfType<Outcome>()], flights));

@@ -14,6 +14,8 @@ internal static class Program
             return Coverage(args);
         if (args.Length > 0 && args[0] == "shift")
             return ShiftStudy.Run(args);
+        if (args.Length > 0 && args[0] == "sheet")
+            return SheetStudy.Run((option, otherwise) => NumberOf(args, option, otherwise));
         if (args.Length > 0 && args[0] == "carddebug")
         {
             CardDebug.Run(ulong.Parse(args[1]), double.Parse(args[2]), args.Length > 3 ? Enum.Parse<Core.Planning.CardLogger>(args[3]) : null);

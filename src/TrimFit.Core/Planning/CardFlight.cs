@@ -76,7 +76,7 @@ internal static class CardFlight
             thrust[i] = x * full;
             brake[i] = brakesLogged ? steer : 0;
             shift[i] = cg;
-            rotation[i] = brakesLogged ? x : 0;
+            rotation[i] = gyro ? x : 0; // thrust goes with the square of the speed
             // Without a channel that shows an edge the sheet's tolerance is taken off a hands-off leg at both ends.
             handsOff[i] = leg.Kind == CardLegKind.HandsOff && (brakesLogged
                 || (t >= leg.StartSec + Logs.SheetLegs.EdgeToleranceSec && t <= leg.EndSec - Logs.SheetLegs.EdgeToleranceSec));
