@@ -1,6 +1,7 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;

@@ -1,4 +1,5 @@
 using TrimFit.Core.Rigging;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;

@@ -7,22 +7,22 @@ namespace TrimFit.Reporting;
 public static class ReportText
 {
     /// <summary>The result of <c>fit</c>.</summary>
-    public static string Fit(FitReport report, ReportStyle style) => TextRenderer.Render(Reports.Fit(report, style, figures: false));
+    public static string Fit(FitReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Fit(report, style, figures: false));
 
     /// <summary>The first sentence of <c>fit</c> with the caution that stands everywhere, for scripts and quiet people.</summary>
-    public static string FitBrief(FitReport report, ReportStyle style) => Brief(Reports.Fit(report, style, figures: false), style);
+    public static string FitBrief(FitReport report, ReportStyle style) => Brief(ReportDocuments.Fit(report, style, figures: false), style);
 
     /// <summary>The result of <c>inspect</c>.</summary>
-    public static string Inspect(InspectReport report, ReportStyle style) => TextRenderer.Render(Reports.Inspect(report, style));
+    public static string Inspect(InspectReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Inspect(report, style));
 
     /// <summary>The first sentence of <c>inspect</c> with the caution that stands everywhere.</summary>
-    public static string InspectBrief(InspectReport report, ReportStyle style) => Brief(Reports.Inspect(report, style), style);
+    public static string InspectBrief(InspectReport report, ReportStyle style) => Brief(ReportDocuments.Inspect(report, style), style);
 
     /// <summary>The result of <c>rig</c>.</summary>
-    public static string Rig(RigSheetReport report, ReportStyle style) => TextRenderer.Render(Reports.Rig(report, style, figures: false));
+    public static string Rig(RigSheetReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Rig(report, style, figures: false));
 
     /// <summary>The first sentence of <c>rig</c> with the caution that stands everywhere.</summary>
-    public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(Reports.Rig(report, style, figures: false), style);
+    public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(ReportDocuments.Rig(report, style, figures: false), style);
 
     private static string Brief(ReportDocument document, ReportStyle style) =>
         TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";

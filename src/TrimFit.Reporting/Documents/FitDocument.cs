@@ -28,7 +28,7 @@ internal static class FitDocument
         {
             bool after = FitAnswer.Best(a) is not null;
             document.Heading(labels.Drawing);
-            document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, FitAnswer.Best(a), words, numbers), words.DrawingDescription(after) + " " + labels.DrawingNote);
+            document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, FitAnswer.Best(a), words, numbers), words.DrawingDescription(after) + " " + labels.DrawingNote, FigureKind.Drawing);
             document.Heading(labels.TurnPlot);
             document.Figure(TurnPlot.Draw(a, words, numbers), words.TurnPlotDescription(a.Fit.Points.Length));
         }

@@ -33,7 +33,7 @@ internal static class RigDocument
         if (figures)
         {
             document.Heading(l.Drawing);
-            document.Figure(RigDrawing.Draw(report.Rig, report.Statics, null, words, numbers), words.DrawingDescription(after: false) + " " + l.DrawingNote);
+            document.Figure(RigDrawing.Draw(report.Rig, report.Statics, null, words, numbers), words.DrawingDescription(after: false) + " " + l.DrawingNote, FigureKind.Drawing);
         }
         document.Heading(l.Masses);
         RigTables.Masses(document, report.Statics, numbers);

@@ -2,9 +2,13 @@ using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Reporting.Documents;
 
-/// <summary>One way from a report to its document for every form.</summary>
-internal static class Reports
+/// <summary>One way from a result to its document for every form.</summary>
+public static class ReportDocuments
 {
+    /// <summary>The report of <c>fit</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
     public static ReportDocument Fit(FitReport report, ReportStyle style, bool figures)
     {
         ArgumentNullException.ThrowIfNull(report);
@@ -12,6 +16,9 @@ internal static class Reports
         return FitDocument.Build(report, Words.English, new Numbers(style), figures);
     }
 
+    /// <summary>The report of <c>inspect</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
     public static ReportDocument Inspect(InspectReport report, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(report);
@@ -19,6 +26,10 @@ internal static class Reports
         return InspectDocument.Build(report, Words.English, new Numbers(style));
     }
 
+    /// <summary>The report of <c>rig</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
     public static ReportDocument Rig(RigSheetReport report, ReportStyle style, bool figures)
     {
         ArgumentNullException.ThrowIfNull(report);
