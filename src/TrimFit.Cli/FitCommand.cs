@@ -1,5 +1,6 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Pages;
 using TrimFit.Reporting;
@@ -8,10 +9,11 @@ namespace TrimFit.Cli;
 
 internal static class FitCommand
 {
-    public static int Run(IReadOnlyList<string> logs, string rigPath, string? sheetPath, CommonChoices choices, TextWriter output, TextWriter error)
+    public static int Run(IReadOnlyList<string> logs, string rigPath, string? sheetPath, string? cardPath, CommonChoices choices, TextWriter output, TextWriter error)
     {
         (Rig rig, SourceFile rigFile) = InputFiles.Rig(rigPath);
         (FlightSheet Sheet, SourceFile File)? sheet = sheetPath is null ? null : InputFiles.Sheet(sheetPath);
+        CardPromise? promise = cardPath is null ? null : InputFiles.Card(cardPath);
         FlightImport import = InputFiles.Flight(logs, choices, rig.Log);
         if (sheet is (FlightSheet Sheet, SourceFile) given)
         {
@@ -24,7 +26,7 @@ internal static class FitCommand
             };
         }
         TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, choices.TrimOptions, import.Legs.AsSpan());
-        var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
+        var report = new FitReport { Analysis = analysis, Import = import, RigFile = rigFile, SheetFile = sheet?.File, CardOutcome = promise is null ? null : CardOutcome.Of(promise, analysis), Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),
             () => ReportJson.Fit(report), () => ReportPage.Fit(report, choices.Style), () => ReportMarkdown.Fit(report, choices.Style));

@@ -4,9 +4,11 @@ using System.Text.Encodings.Web;
 using System.Text.Json;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 using TrimFit.Reporting.Json;
 using TrimFit.Reporting.Wording;
 
@@ -15,7 +17,7 @@ namespace TrimFit.Reporting;
 /// <summary>Results as JSON for scripts: schemas <c>trimfit-fit/1</c>, <c>trimfit-inspect/1</c>, <c>trimfit-rig-result/1</c>.</summary>
 /// <remarks>Always English, metric and culture-free. Numbers are finite or null and carry nine significant digits: more would only show
 /// the last bits of one processor. The text ends with a line feed.</remarks>
-public static class ReportJson
+public static partial class ReportJson
 {
     private const double DegPerRad = 180 / Math.PI;
     private const double MmPerM = 1000;
@@ -64,6 +66,7 @@ public static class ReportJson
             SpansLeftOut = [.. a.Fit.SpansLeftOut.Select(x => new SpanJson(Number(x.StartSec), Number(x.EndSec), x.Reason))],
             Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
+            Card = report.CardOutcome is CardOutcome outcome ? CardOutcomeOf(outcome) : null,
         };
         return JsonSerializer.Serialize(json, _context.FitJson) + "\n";
     }
@@ -194,8 +197,26 @@ public static class ReportJson
             Disturbance = new() { Rms = Number(fit.DisturbanceRmsRadPerSec, DegPerRad), TauS = Number(fit.DisturbanceTauSec) },
             EffectiveSamples = Number(fit.EffectiveSamples),
             Condition = Number(fit.Condition),
+            Noise = Noise(fit),
         };
     }
+
+    private static NoiseJson? Noise(TurnFit fit) => fit.Noise is not NoiseParameters n ? null : new()
+    {
+        Response = Snake.Of(n.Order.ToString()),
+        LagS = n.Order == ResponseOrder.First ? Number(n.LagSec) : null,
+        FrequencyRadS = n.Order == ResponseOrder.Second ? Number(n.NaturalFrequency) : null,
+        Damping = n.Order == ResponseOrder.Second ? Number(n.Damping) : null,
+        DisturbanceDegS = Number(n.DisturbanceRms, DegPerRad),
+        DisturbanceTauS = Number(n.DisturbanceTauSec),
+        QuickDegSRootS = Number(n.QuickDisturbance, DegPerRad),
+        GyroDegS = fit.GyroRowsPerSec > 0 ? Number(n.GyroNoise, DegPerRad) : null,
+        HeadingDeg = fit.HeadingRowsPerSec > 0 ? Number(n.HeadingNoise, DegPerRad) : null,
+        GustDeg = fit.HeadingRowsPerSec > 0 ? Number(n.GustRms, DegPerRad) : null,
+        GustTauS = fit.HeadingRowsPerSec > 0 ? Number(n.GustTauSec) : null,
+                GyroRowsPerS = Number(fit.GyroRowsPerSec),
+        HeadingRowsPerS = Number(fit.HeadingRowsPerSec),
+    };
 
     private static CrossCheckJson? CrossCheck(TrimAnalysis analysis, ControlUnit brake, ControlUnit trimmer)
     {

@@ -24,6 +24,12 @@ public static class ReportText
     /// <summary>The first sentence of <c>rig</c> with the caution that stands everywhere.</summary>
     public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(ReportDocuments.Rig(report, style, figures: false), style);
 
+    /// <summary>A test card.</summary>
+    public static string Card(CardReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Card(report, style));
+
+    /// <summary>The first sentence of a card with the caution that stands everywhere.</summary>
+    public static string CardBrief(CardReport report, ReportStyle style) => Brief(ReportDocuments.Card(report, style), style);
+
     private static string Brief(ReportDocument document, ReportStyle style) =>
         TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
 }

@@ -38,8 +38,15 @@ public sealed record CardOptions
     /// <summary>Whether legs with the engine off are offered to the design.</summary>
     public bool EngineOffLegs { get; init; }
 
-    /// <summary>Height above ground below which no leg is flown, m. Default 300 (common practice, no source).</summary>
-    public double FloorM { get; init => field = Guard.Positive(value); } = 300;
+    /// <summary>Lowest floor, m (common practice, no source); it may be raised, not lowered.</summary>
+    public const double LeastFloorM = 300;
+
+    /// <summary>Height above ground below which no leg is flown, m.</summary>
+    public double FloorM
+    {
+        get;
+        init => field = value >= LeastFloorM ? value : throw new ArgumentOutOfRangeException(nameof(value), value, "must be at least 300 m");
+    } = LeastFloorM;
 
     /// <summary>Where the turn is to be nulled.</summary>
     public BalanceThrust BalanceThrust { get; init; } = BalanceThrust.Cruise;

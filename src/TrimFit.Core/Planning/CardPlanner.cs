@@ -16,9 +16,6 @@ public static class CardPlanner
     /// <summary>Rounds in which the length is fitted to the wanted precision.</summary>
     private const int MostRounds = 4;
 
-    /// <summary>A card may miss a wanted precision by this before a longer one is tried: the prediction itself is good to some percent.</summary>
-    private const double NearEnough = 1.0;
-
     /// <summary>Plans a card.</summary>
     /// <param name="rig">The machine.</param>
     /// <param name="options">What is asked for.</param>
@@ -38,13 +35,20 @@ public static class CardPlanner
 
         var planning = new Planning(rig, spread, options, machine, progress);
         double? wanted = options.ShiftHalfWidthM ?? options.PullStdErrorRadPerSec;
-        CardPlan plan = planning.Of(options.Minutes ?? UsualMinutes);
-        if (wanted is null)
-            return plan;
-        if (options.Minutes is not null)
-            return plan.Reaches == true ? plan : WithNeed(planning, plan, wanted.Value);
+        CardPlan first = planning.Of(options.Minutes ?? UsualMinutes);
+        CardPlan plan = wanted is null ? first : Fitted(planning, first, wanted.Value, refused);
+        progress?.Report(1);
+        return plan;
+    }
 
-        for (int round = 0; round < MostRounds && MinutesFor(plan, wanted.Value) is double minutes; round++)
+    /// <summary>The card whose length gives the wanted precision, or a refusal.</summary>
+    private static CardPlan Fitted(Planning planning, CardPlan plan, double wanted, CardPlan refused)
+    {
+        CardOptions options = plan.Options;
+        if (options.Minutes is not null)
+            return plan.Reaches == true ? plan : WithNeed(planning, plan, wanted);
+
+        for (int round = 0; round < MostRounds && MinutesFor(plan, wanted) is double minutes; round++)
         {
             double now = plan.Seconds / 60;
             if (plan.Reaches == true && now - minutes < 1)

@@ -149,6 +149,8 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override CardWords Card { get; } = new EnglishCardWords();
+
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)

@@ -15,6 +15,9 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
