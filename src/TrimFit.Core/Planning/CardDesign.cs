@@ -67,7 +67,7 @@ internal sealed class CardDesign
     {
         var starts = new List<(CardLayout Layout, double Value)>();
         // Two runs and their repeats; a run is as long as a pilot can keep in mind.
-        const double ShortestRunMin = 1, LongestRunMin = 3.4;
+        const double ShortestRunMin = 1, LongestRunMin = 4.5;
         for (int runs = 2; runs * ShortestRunMin <= minutes; runs += 2)
         {
             if (runs * LongestRunMin < minutes && (runs + 2) * ShortestRunMin <= minutes)

@@ -52,10 +52,10 @@ internal sealed record EnglishCardWords : CardWords
             return "";
         string wanted = plan.Options.ShiftHalfWidthM is double w ? $"{numbers.Length(w)} either way for the shift" : $"a standard error of {Rate2(plan.Options.PullStdErrorRadPerSec ?? 0, numbers)} for the pull";
         if (reaches)
-            return $"The wanted {wanted} is expected to be reached.";
+            return $"Wanted: {wanted}. It is expected to be reached.";
         string need = plan.MinutesNeeded is double minutes ? $" It needs about {numbers.Plain(Math.Ceiling(minutes), 0)} min."
             : plan.LeastReachable is double least ? $" No longer card reaches it: the least is about {(plan.Options.ShiftHalfWidthM is null ? Rate2(least, numbers) : numbers.Length(least))}." : "";
-        return $"The wanted {wanted} is not expected in this time.{need}";
+        return $"Wanted: {wanted}. It is not expected in this time.{need}";
     }
 
     public override string HeadingName(double headingRad)
@@ -69,15 +69,15 @@ internal sealed record EnglishCardWords : CardWords
 
     public override string Leg(CardLeg leg, CardLeg? hold, Rig rig, Numbers numbers)
     {
-        string before = hold is null ? "" : $"Set {PowerName(hold.Power)}{(leg.Kind == CardLegKind.Ballast ? $", bring {numbers.Mass(leg.BallastKg)} out {numbers.Length(Math.Abs(leg.BallastArmM))} to the {Side(leg.BallastArmM)}" : "")}, hold the heading {numbers.Plain(hold.Seconds, 0)} s. ";
+        string before = hold is null ? "" : $"{Capital(PowerName(hold.Power))}{(leg.Kind == CardLegKind.Ballast ? $", bring {numbers.Mass(leg.BallastKg)} out {numbers.Length(Math.Abs(leg.BallastArmM))} to the {Side(leg.BallastArmM)}" : "")}, hold the heading. ";
         return before + leg.Kind switch
         {
             CardLegKind.Hold => $"Set {PowerName(leg.Power)} and hold the heading.",
             CardLegKind.HandsOff => leg.Power == PowerSetting.Off ? "Engine off, then hands off." : "Hands off.",
-            CardLegKind.BrakeStep => $"{Brake(leg, rig, numbers)}, and keep it there.",
-            CardLegKind.Circle => $"{Brake(leg, rig, numbers)}, and circle.",
+            CardLegKind.BrakeStep => $"{Brake(leg, rig, numbers)}; keep it there.",
+            CardLegKind.Circle => $"{Brake(leg, rig, numbers)}; circle.",
             CardLegKind.Ballast => "Hands off with the ballast out.",
-            CardLegKind.Turn => $"Turn gently {Side(leg.TurnRad)} by {numbers.Plain(Math.Abs(double.RadiansToDegrees(leg.TurnRad)), 0)} deg to {HeadingName(leg.HeadingRad)}, at level-flight power.",
+            CardLegKind.Turn => $"Look out, turn gently {Side(leg.TurnRad)} by {numbers.Plain(Math.Abs(double.RadiansToDegrees(leg.TurnRad)), 0)} deg ({HeadingName(leg.HeadingRad)}), level-flight power.",
         };
     }
 
@@ -249,12 +249,14 @@ internal sealed record EnglishCardWords : CardWords
         _ => leg.Power switch { PowerSetting.Off => "off", PowerSetting.Idle => "idle", PowerSetting.Cruise => "level", PowerSetting.Full => "full" },
     };
 
+    private static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];
+
     private static string SideName(CardLeg leg) => leg.BrakeRight > leg.BrakeLeft ? "Right" : "Left";
 
     private static string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
     private static string Brake(CardLeg leg, Rig rig, Numbers numbers) =>
-        $"Pull the {SideName(leg).ToLowerInvariant()} brake to the mark ({BrakeTravel([leg], rig, numbers)})";
+        $"{SideName(leg)} brake to the mark, {BrakeTravel([leg], rig, numbers)}";
 
     private static string BrakeTravel(IEnumerable<CardLeg> legs, Rig rig, Numbers numbers)
     {
