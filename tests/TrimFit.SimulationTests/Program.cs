@@ -5,7 +5,7 @@ using Xunit.Runner.InProc.SystemConsole;
 namespace TrimFit.SimulationTests;
 
 /// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
-/// --minutes for each row); `card` runs the study of test cards (--flights, --minutes of a card, --seed, --threads); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); anything else goes to the test runner.</summary>
+/// --minutes for each row); `card` runs the study of test cards, `sheet` that of their sheets (--flights, --minutes of a card, --seed, --threads); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -16,11 +16,6 @@ internal static class Program
             return ShiftStudy.Run(args);
         if (args.Length > 0 && args[0] == "sheet")
             return SheetStudy.Run((option, otherwise) => NumberOf(args, option, otherwise));
-        if (args.Length > 0 && args[0] == "carddebug")
-        {
-            CardDebug.Run(ulong.Parse(args[1]), double.Parse(args[2]), args.Length > 3 ? Enum.Parse<Core.Planning.CardLogger>(args[3]) : null);
-            return 0;
-        }
         if (args.Length > 0 && args[0] == "card")
             return CardStudy.Run((option, otherwise) => NumberOf(args, option, otherwise));
         return args.Any(a => a is "--server" or "--internal-msbuild-node")

@@ -60,8 +60,6 @@ internal static class SheetStudy
         SheetedFlight sheeted = SheetLegs.Apply(flight.Log, sheet);
         TurnSignals signals = TurnSignals.From(sheeted.Flight, rig, sheeted.Legs.AsSpan());
         TrimAnalysis analysis = TrimAnalysis.Run(signals, new FilterErrorEstimator().Estimate(signals), rig, new TrimOptions { Draws = 500 });
-        if (analysis.Pull.AtBalance.Interval95 is null)
-            Console.Error.WriteLine($"{seed}: {string.Join(", ", analysis.Verdict.Reasons.Select(r => r.Code))}; {string.Join(", ", analysis.Warnings.Select(r => r.Code))}; {string.Join(" ", analysis.Fit.Coefficients.Select(c => c.Reason))}; wind {signals.Wind}");
         if (analysis.Pull.AtBalance is not { Interval95: ConfidenceInterval interval, RateRadPerSec: double rate })
             return null;
         double truth = flight.Truth.Pull.Single(p => p.Setting == "cruise").RateRadPerSec;

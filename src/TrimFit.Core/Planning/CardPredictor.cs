@@ -13,8 +13,9 @@ internal static class CardPredictor
     /// <summary>Draws of the posterior of one predicted flight: its ends then move by some 3 %, less than flights differ.</summary>
     private const int PosteriorDraws = 2000;
 
-    /// <summary>Covariances are shrunk by this to see what the sensitivity alone leaves.</summary>
-    private const double Exact = 1e-4;
+    /// <summary>Covariances are shrunk by this to see what the sensitivity alone leaves: half a percent of the variance stays, and the posterior
+    /// still finds enough draws.</summary>
+    private const double Exact = 0.01;
 
     /// <summary>Predicts.</summary>
     public static CardPrediction Predict(

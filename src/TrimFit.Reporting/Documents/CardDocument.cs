@@ -3,7 +3,7 @@ using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Reporting.Documents;
 
-/// <summary>A test card: short card, needs, legs, what to do before, rules, precision, cautions.</summary>
+/// <summary>A test card: on the first side short card, needs, what to do before, rules and cautions; on the second every leg and the precision.</summary>
 internal static class CardDocument
 {
     public static ReportDocument Build(CardReport report, Words words, Numbers numbers)
@@ -14,20 +14,27 @@ internal static class CardDocument
         document.Answer(w.Answer(plan, numbers));
         if (!plan.Legs.IsEmpty)
         {
+            // One side of paper to fly by, the other to learn from.
             document.Paragraph(w.Reaches(plan, numbers));
             document.Heading(w.ShortTitle);
-            document.List(Runs(plan).Select((run, i) => w.Run(i + 1, run[0].HeadingRad, run.Where(l => l.Kind != CardLegKind.Hold), report.Rig, numbers)));
+            document.Steps(Runs(plan).Select(run => w.Run(run[0].HeadingRad, run.Where(l => l.Kind != CardLegKind.Hold), report.Rig, numbers)));
+            document.Paragraph(w.ShortNote(plan, numbers));
             document.Heading(w.NeedsTitle);
             document.Fields(w.Needs(plan, report.Rig, numbers).Select(n => new FieldItem(n.Name, n.Value)));
             document.Heading(w.BeforeTitle);
             document.Checks(w.Before(plan, report.Rig, numbers).Select(t => new CheckItem(t)));
-            document.Heading(w.LegsTitle);
-            document.Table([new(w.Number), new(w.Time), new(w.Heading, false), new(w.Do, false), new(w.Seconds), new(w.Height)], Rows(report, w, numbers));
+            document.Heading(w.RulesTitle);
             document.List(w.Rules(plan, numbers));
+        }
+        document.Cautions(CautionsOf(plan), numbers);
+        if (!plan.Legs.IsEmpty)
+        {
+            document.PageBreak();
+            document.Heading(w.LegsTitle);
+            document.Table([new(w.Do, false), new(w.Number), new(w.Time), new(w.Heading, false), new(w.Seconds), new(w.Height)], Rows(report, w, numbers));
             document.Heading(w.PrecisionTitle);
             document.List(w.Precision(plan, numbers));
         }
-        document.Cautions(CautionsOf(plan), numbers);
         return document.Build($"{w.Title}: {report.Rig.Name}", report.FromFile is SourceFile from ? $"{report.RigFile.Name}, {from.Name}" : report.RigFile.Name);
     }
 
@@ -72,10 +79,10 @@ internal static class CardDocument
             double height = plan.StartHeightM + plan.CautiousHeights[i];
             yield return
             [
+                w.Leg(leg, hold, report.Rig, numbers),
                 hold is null ? numbers.Integer(leg.Number) : numbers.Integer(hold.Number) + ", " + numbers.Integer(leg.Number),
                 Clock((hold ?? leg).StartSec, numbers),
                 leg.Kind == CardLegKind.Turn ? "" : w.HeadingName(leg.HeadingRad),
-                w.Leg(leg, hold, report.Rig, numbers),
                 hold is null ? numbers.Plain(leg.Seconds, 0) : numbers.Plain(hold.Seconds, 0) + " + " + numbers.Plain(leg.Seconds, 0),
                 numbers.Height(height),
             ];

@@ -14,6 +14,8 @@ internal abstract record CardWords
     public abstract string LegsTitle { get; }
     /// <summary>Title of what to do before take-off.</summary>
     public abstract string BeforeTitle { get; }
+    /// <summary>Title of the rules in flight.</summary>
+    public abstract string RulesTitle { get; }
     /// <summary>Title of the precision.</summary>
     public abstract string PrecisionTitle { get; }
     /// <summary>Title of what it needs: height, wind, fuel.</summary>
@@ -30,8 +32,6 @@ internal abstract record CardWords
     public abstract string Seconds { get; }
     /// <summary>Head of the height at the end, at least.</summary>
     public abstract string Height { get; }
-    /// <summary>Head of what was noted.</summary>
-    public abstract string Noted { get; }
 
     /// <summary>The card in one sentence.</summary>
     public abstract string Answer(CardPlan plan, Numbers numbers);
@@ -42,7 +42,9 @@ internal abstract record CardWords
     /// <summary>Name of a run's heading.</summary>
     public abstract string HeadingName(double headingRad);
     /// <summary>A whole run in one line.</summary>
-    public abstract string Run(int run, double headingRad, IEnumerable<CardLeg> measuring, Rig rig, Numbers numbers);
+    public abstract string Run(double headingRad, IEnumerable<CardLeg> measuring, Rig rig, Numbers numbers);
+    /// <summary>What goes before each leg of the short card.</summary>
+    public abstract string ShortNote(CardPlan plan, Numbers numbers);
     /// <summary>What to do on a leg, with the hold before it.</summary>
     public abstract string Leg(CardLeg leg, CardLeg? hold, Rig rig, Numbers numbers);
     /// <summary>What the speaking card says when a leg begins.</summary>

@@ -25,7 +25,7 @@ internal sealed record EnglishCardWords : CardWords
     public override string Do => "do";
     public override string Seconds => "s";
     public override string Height => "height at least";
-    public override string Noted => "noted";
+    public override string RulesTitle => "In flight";
     public override string OutcomeTitle => "Test card";
 
     public override string Answer(CardPlan plan, Numbers numbers)
@@ -64,8 +64,11 @@ internal sealed record EnglishCardWords : CardWords
         return ((int)Math.Round(4 * (turns - Math.Floor(turns))) % 4) switch { 0 => "out", 2 => "back", 1 => "across, right of out", _ => "across, left of out" };
     }
 
-    public override string Run(int run, double headingRad, IEnumerable<CardLeg> measuring, Rig rig, Numbers numbers) =>
-        $"{numbers.Integer(run)}. {HeadingName(headingRad)}: {string.Join(", ", measuring.Select(l => $"{Short(l)} {numbers.Plain(l.Seconds, 0)} s"))}";
+    public override string Run(double headingRad, IEnumerable<CardLeg> measuring, Rig rig, Numbers numbers) =>
+        $"{Capital(HeadingName(headingRad))}: {string.Join(", ", measuring.Select(l => $"{Short(l)} {numbers.Plain(l.Seconds, 0)} s"))}";
+
+    public override string ShortNote(CardPlan plan, Numbers numbers) =>
+        $"Before each: set the power and hold the heading {numbers.Plain(plan.Legs[0].Seconds, 0)} s. Off, idle, level and full are hands off. Between the lines turn gently to the next heading, at level-flight power.";
 
     public override string Leg(CardLeg leg, CardLeg? hold, Rig rig, Numbers numbers)
     {
