@@ -1,4 +1,5 @@
 using System.CommandLine;
+using TrimFit.Cli.Batch;
 
 namespace TrimFit.Cli;
 
@@ -9,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Rig(output), Card(output, error), Synth(error),
+            Inspect(output), Fit(output, error), Rig(output), Card(output, error), Synth(error), Batch(output, error),
         };
         return root;
     }
@@ -72,6 +73,29 @@ internal static class CommandTree
         common.AddSeed(command);
         common.AddQuiet(command);
         command.SetAction(parsed => SynthCommand.Run(parsed.GetValue(scenario)!, parsed.GetValue(folder)!, common.Choices(parsed), error));
+        return command;
+    }
+
+    private static Command Batch(TextWriter output, TextWriter error)
+    {
+        var paths = new Argument<string[]>("PATH") { Description = "Logs, one flight each; names may hold * and ?.", Arity = ArgumentArity.ZeroOrMore };
+        var list = new Option<string?>("--list") { Description = "A text file with one log a line.", HelpName = "FILE" };
+        var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
+        var folder = new Option<string>("--out") { Description = "Folder for flights.csv, flights.parquet and the journal that a run goes on from.", Required = true, HelpName = "DIR" };
+        var threads = new Option<string?>("--threads") { Description = "Flights worked on at once (the processor's cores).", HelpName = "N" };
+        var common = new CommonOptions();
+        var command = new Command("batch", "Many flights, in parallel, one result row each; goes on where it was when run again.") { paths, list, rig, folder, threads };
+        common.AddForReading(command);
+        common.AddForLogs(command);
+        common.AddForFit(command);
+        command.SetAction(parsed =>
+        {
+            string[] patterns = [.. parsed.GetValue(paths) ?? [], .. parsed.GetValue(list) is string file ? BatchFlight.Listed(file) : []];
+            if (patterns.Length == 0)
+                throw new CommandLineException("batch: no log is named. Name logs, patterns such as \"logs/*.csv\", or a list with --list.");
+            return BatchCommand.Run(BatchFlight.From(patterns, parsed.GetValue(rig)!), parsed.GetValue(folder)!, CommonOptions.Threads(parsed.GetValue(threads)),
+                common.Choices(parsed), output, error);
+        });
         return command;
     }
 

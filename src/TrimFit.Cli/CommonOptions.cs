@@ -28,6 +28,11 @@ internal sealed class CommonOptions
     {
         command.Options.Add(_json);
         command.Options.Add(_report);
+        AddForReading(command);
+    }
+
+    public void AddForReading(Command command)
+    {
         command.Options.Add(_units);
         command.Options.Add(_culture);
         AddQuiet(command);
@@ -122,6 +127,12 @@ internal sealed class CommonOptions
         ? null
         : ulong.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out ulong seed) ? seed
         : throw new CommandLineException($"--seed: found \"{text}\", expected a whole number of 0 or more.");
+
+    /// <summary>A number of threads; all cores when not given.</summary>
+    public static int Threads(string? text) => text is null
+        ? Environment.ProcessorCount
+        : int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out int threads) && threads > 0 ? threads
+        : throw new CommandLineException($"--threads: found \"{text}\", expected a whole number above 0.");
 
     private static double? Number(string text) =>
         double.TryParse(text, NumberStyles.AllowDecimalPoint | NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out double value) && double.IsFinite(value) ? value : null;

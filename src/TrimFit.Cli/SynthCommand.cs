@@ -14,7 +14,7 @@ internal static class SynthCommand
         OutputFiles.MakeFolder("--out", folder);
         foreach (FlightFile file in FlightFiles.Of(flight, Path.GetFileNameWithoutExtension(path)))
         {
-            OutputFiles.Write("--out", Path.Combine(folder, file.Name), file.Content.Span);
+            OutputFiles.Write("--out", Path.Combine(folder, file.Name), stream => stream.Write(file.Content.Span));
             if (!choices.Quiet)
                 error.WriteLine($"trimfit: wrote {file.Name}");
         }

@@ -30,6 +30,13 @@ public static class ReportText
     /// <summary>The first sentence of a card with the caution that stands everywhere.</summary>
     public static string CardBrief(CardReport report, ReportStyle style) => Brief(ReportDocuments.Card(report, style), style);
 
+    /// <summary>The summary of <c>batch</c>.</summary>
+    public static string Batch(BatchSummary summary, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(summary);
+        return TextRenderer.Render(BatchDocument.Build(summary, Words.English, new Numbers(style)));
+    }
+
     private static string Brief(ReportDocument document, ReportStyle style) =>
         TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
 }

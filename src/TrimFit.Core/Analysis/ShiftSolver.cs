@@ -46,13 +46,13 @@ internal static class ShiftSolver
             constantPart[k] = -posterior.Constant[k] / posterior.Sensitivity[k];
             powerPart[k] = shift[k] - constantPart[k];
         }
-        double median = WeightedQuantile.Of(shift, posterior.Weight, 0.5);
+        (double median, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(shift, posterior.Weight);
         return new ShiftReport
         {
             BalanceThrustN = signals.ThrustBasis == ThrustBasis.Newton ? levels.Balance * signals.FullThrust : null,
             BalanceThrustFraction = levels.Balance,
             CgShiftM = median,
-            Interval95 = TrimPosterior.Interval95(shift, posterior.Weight),
+            Interval95 = interval,
             ConstantPartM = WeightedQuantile.Of(constantPart, posterior.Weight, 0.5),
             PowerPartM = WeightedQuantile.Of(powerPart, posterior.Weight, 0.5),
             TurnLeftAt = TurnLeft(posterior, levels, signals, (k, _) => posterior.Sensitivity[k] * median),
@@ -124,7 +124,7 @@ internal static class ShiftSolver
         if (Math.Min(positive, total - positive) > LargestSignShare * total)
             return null; // which way a travel works is not known well enough
 
-        double median = WeightedQuantile.Of(travel, posterior.Weight, 0.5);
+        (double median, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(travel, posterior.Weight);
         AdjustmentLimit? limit = rig.Limits.GetValueOrDefault(adjustment.Kind);
         double step = limit?.Step ?? adjustment.DefaultStep;
         double rounded = Math.Round(median / step) * step;
@@ -143,7 +143,7 @@ internal static class ShiftSolver
         {
             if (!(posterior.Weight[k] > 0))
                 continue;
-            double sine = RigStatics.Solve(effect.Moved(posterior.Rigs[k], rounded), posterior.Rigs[k].FullThrustN).TwistSine;
+            double sine = effect.TwistSineAtFull(k, rounded);
             ratio[k] = Math.Abs(sine);
             if (sine < 0)
                 left += posterior.Weight[k];
@@ -152,7 +152,9 @@ internal static class ShiftSolver
             if (travel[k] * sign < first * sign)
                 wrongSide += posterior.Weight[k];
         }
-        double high = WeightedQuantile.Of(ratio, posterior.Weight, 0.975);
+        Span<double> ratios = stackalloc double[2];
+        WeightedQuantile.Of(ratio, posterior.Weight, [0.5, 0.975], ratios);
+        double high = ratios[1];
         StaticState full = RigStatics.Solve(moved, nominal.FullThrustN);
         bool? within = limit is null || (limit.Min is null && limit.Max is null) ? null
             : !(rounded < limit.Min - 1e-9) && !(rounded > limit.Max + 1e-9);
@@ -173,12 +175,12 @@ internal static class ShiftSolver
             Kind = adjustment.Kind,
             Unit = adjustment.Unit,
             Travel = median,
-            Interval95 = TrimPosterior.Interval95(travel, posterior.Weight),
+            Interval95 = interval,
             Rounded = rounded,
             FirstStep = first,
             Efficiency = adjustment.CgOffsetPerTravel(nominal),
             ThrustLineOffsetM = moved.ThrustLineOffsetM,
-            TwistRatio = newtons ? WeightedQuantile.Of(ratio, posterior.Weight, 0.5) : null,
+            TwistRatio = newtons ? ratios[0] : null,
             TwistRatioHigh95 = newtons ? high : null,
             TwistDirection = left > DirectionShare * (left + right) ? TwistDirection.Left
                 : right > DirectionShare * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
@@ -210,13 +212,14 @@ internal static class ShiftSolver
             };
             for (int k = 0; k < count; k++)
                 left[k] = posterior.Weight[k] > 0 ? posterior.RateAt(k, fraction) + change(k, fraction) : 0;
+            (double rate, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(left, posterior.Weight);
             result.Add(new PullAtSetting
             {
                 Setting = setting,
                 ThrustFraction = fraction,
                 ThrustN = signals.ThrustBasis == ThrustBasis.Newton ? fraction * signals.FullThrust : null,
-                RateRadPerSec = WeightedQuantile.Of(left, posterior.Weight, 0.5),
-                Interval95 = TrimPosterior.Interval95(left, posterior.Weight),
+                RateRadPerSec = rate,
+                Interval95 = interval,
             });
         }
         return result.ToImmutable();

@@ -145,6 +145,8 @@ internal sealed record EnglishWords : Words
         ProgramVersion = "TrimFit version",
     };
 
+    public override Batch.BatchWords Batch { get; } = new Batch.EnglishBatchWords();
+
     public override string Language => "en";
 
     public override Labels Labels => _labels;

@@ -18,6 +18,9 @@ internal abstract record Words
     /// <summary>Texts of test cards.</summary>
     public abstract CardWords Card { get; }
 
+    /// <summary>Words of the summary of many flights.</summary>
+    public abstract Batch.BatchWords Batch { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
