@@ -1,4 +1,3 @@
-using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
 using TrimFit.Core.Turns.FilterError;
 

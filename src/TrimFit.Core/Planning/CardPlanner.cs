@@ -1,9 +1,5 @@
-using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
-using TrimFit.Core.Statistics;
-using TrimFit.Core.Turns;
-using TrimFit.Core.Turns.FilterError;
 
 namespace TrimFit.Core.Planning;
 

@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
