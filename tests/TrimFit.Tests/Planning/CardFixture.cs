@@ -1,4 +1,3 @@
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Turns.FilterError;
