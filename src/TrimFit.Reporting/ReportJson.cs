@@ -214,7 +214,7 @@ public static partial class ReportJson
         HeadingDeg = fit.HeadingRowsPerSec > 0 ? Number(n.HeadingNoise, DegPerRad) : null,
         GustDeg = fit.HeadingRowsPerSec > 0 ? Number(n.GustRms, DegPerRad) : null,
         GustTauS = fit.HeadingRowsPerSec > 0 ? Number(n.GustTauSec) : null,
-                GyroRowsPerS = Number(fit.GyroRowsPerSec),
+        GyroRowsPerS = Number(fit.GyroRowsPerSec),
         HeadingRowsPerS = Number(fit.HeadingRowsPerSec),
     };
 
