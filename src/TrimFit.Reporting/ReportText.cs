@@ -30,6 +30,12 @@ public static class ReportText
     /// <summary>The first sentence of <c>rig</c> with the caution that stands everywhere.</summary>
     public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(ReportDocuments.Rig(report, style, figures: false), style);
 
+    /// <summary>A test card.</summary>
+    public static string Card(CardReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Card(report, style));
+
+    /// <summary>The first sentence of a card with the caution that stands everywhere.</summary>
+    public static string CardBrief(CardReport report, ReportStyle style) => Brief(ReportDocuments.Card(report, style), style);
+
     /// <summary>The summary of <c>batch</c>.</summary>
     public static string Batch(BatchSummary summary, ReportStyle style)
     {
