@@ -19,9 +19,11 @@ internal sealed class CardCommandOptions
     private readonly Option<string?> _sheet = new("--sheet") { Description = "Write an empty flight sheet (TOML) for the card.", HelpName = "FILE" };
     private readonly Option<string?> _speaking = new("--speaking") { Description = "Write the speaking card: one page (.html) for a telephone that calls the legs.", HelpName = "FILE" };
 
+    private readonly Option<string?> _blind = new("--blind") { Description = "Draw a sealed order of two settings, A and B, that the pilot does not know (TOML), with a slip for the helper beside it.", HelpName = "FILE" };
+
     public void AddTo(Command command)
     {
-        foreach (Option option in (Option[])[_rig, _from, _width, _stdError, _minutes, _logger, _ballast, _engineOff, _floor, _sheet, _speaking])
+        foreach (Option option in (Option[])[_rig, _from, _width, _stdError, _minutes, _logger, _ballast, _engineOff, _floor, _sheet, _speaking, _blind])
             command.Options.Add(option);
     }
 
@@ -43,6 +45,7 @@ internal sealed class CardCommandOptions
             FromPath = parsed.GetValue(_from),
             SheetPath = parsed.GetValue(_sheet),
             SpeakingPath = speaking,
+            BlindPath = parsed.GetValue(_blind),
             Options = new()
             {
                 ShiftHalfWidthM = width / 1000,
@@ -97,5 +100,6 @@ internal sealed record CardChoices
     public required string? FromPath { get; init; }
     public required string? SheetPath { get; init; }
     public required string? SpeakingPath { get; init; }
+    public required string? BlindPath { get; init; }
     public required CardOptions Options { get; init; }
 }

@@ -87,6 +87,7 @@ public static partial class ReportJson
                 Disturbance = Number(m.Noise.DisturbanceRms, DegPerRad),
                 DisturbanceTauS = Number(m.Noise.DisturbanceTauSec),
             },
+            SealedOrder = report.BlindCommitment,
             Cautions = CautionList(CardDocument.CautionsOf(plan)),
         };
         return JsonSerializer.Serialize(json, _context.CardJson) + "\n";

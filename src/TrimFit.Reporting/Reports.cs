@@ -44,6 +44,9 @@ public sealed record CardReport
     /// <summary>The result of the last flight it is planned from; null when none was given.</summary>
     public SourceFile? FromFile { get; init; }
 
+    /// <summary>Number of the sealed order of a blind trial; null when it is none.</summary>
+    public string? BlindCommitment { get; init; }
+
     /// <summary>The program.</summary>
     public required Provenance Provenance { get; init; }
 }

@@ -19,6 +19,11 @@ internal static class CardDocument
             document.Heading(w.ShortTitle);
             document.Steps(Runs(plan).Select(run => w.Run(run[0].HeadingRad, run.Where(l => l.Kind != CardLegKind.Hold), report.Rig, numbers)));
             document.Paragraph(w.ShortNote(plan, numbers));
+            if (report.BlindCommitment is string commitment)
+            {
+                document.Heading(w.BlindTitle);
+                document.List(w.Blind(commitment));
+            }
             document.Heading(w.NeedsTitle);
             document.Fields(w.Needs(plan, report.Rig, numbers).Select(n => new FieldItem(n.Name, n.Value)));
             document.Heading(w.BeforeTitle);

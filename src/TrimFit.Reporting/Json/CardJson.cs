@@ -17,6 +17,7 @@ internal sealed record CardJson
     public required CardLegJson[] Legs { get; init; }
     public required CardPredictionJson? Prediction { get; init; }
     public required CardMachineJson Machine { get; init; }
+    public required string? SealedOrder { get; init; }
     public required MessageJson[] Cautions { get; init; }
 }
 

@@ -58,6 +58,13 @@ internal abstract record CardWords
     /// <summary>Rules in flight: what ends the card.</summary>
     public abstract IEnumerable<string> Rules(CardPlan plan, Numbers numbers);
 
+    /// <summary>Title of a blind trial.</summary>
+    public abstract string BlindTitle { get; }
+    /// <summary>How a blind trial of two settings is flown; the number proves afterwards that the order is the one drawn.</summary>
+    public abstract IEnumerable<string> Blind(string commitment);
+    /// <summary>The slip for who sets the machine: which setting before which flight.</summary>
+    public abstract IEnumerable<string> HelperSlip(IEnumerable<string> setups, string commitment);
+
     /// <summary>Title of what came of a card.</summary>
     public abstract string OutcomeTitle { get; }
     /// <summary>Whether the card's precision was reached.</summary>

@@ -26,6 +26,27 @@ internal sealed record EnglishCardWords : CardWords
     public override string Seconds => "s";
     public override string Height => "height at least";
     public override string RulesTitle => "In flight";
+    public override string BlindTitle => "Blind trial of two settings, A and B";
+
+    public override IEnumerable<string> Blind(string commitment) =>
+    [
+        "Fly this card four times, if you can on one day, with the same wing, straps, fuel and air.",
+        "A helper sets the machine to A or B before each flight as the slip says, does the same work when nothing has to be moved, does the hang check without you, and keeps the slip.",
+        "You fly without knowing which it is, and nobody tells you before the flights are compared.",
+        $"Number of the sealed order: {commitment}. compare opens the order and shows the same number when nothing was changed.",
+    ];
+
+    public override IEnumerable<string> HelperSlip(IEnumerable<string> setups, string commitment) =>
+    [
+        "For who sets the machine. Keep it from the pilot until the flights are compared.",
+        $"Number of the sealed order: {commitment}",
+        "",
+        .. setups.Select((setup, i) => $"Before flight {i + 1}: setting {setup}"),
+        "",
+        "Do the same work before every flight, also when the setting stays: the pilot must not tell by the time it takes.",
+        "After each setting: hang check, carabiner gates, safety strap, reserve bridle routing.",
+    ];
+
     public override string OutcomeTitle => "Test card";
 
     public override string Answer(CardPlan plan, Numbers numbers)
