@@ -103,6 +103,7 @@ internal sealed class AugmentedFilter
         double headingNoise = noise.HeadingNoise * noise.HeadingNoise;
         double compassNoise = noise.CompassNoise * noise.CompassNoise;
         bool gusts = f.HasHeading;
+        int surprises = f.Surprise.Length > 0 ? f.IndexOf(ColumnKind.RateSurprise) + 1 : 0;
         int m = 0;
         for (int i = 0; i < f.Count; i++)
         {
@@ -122,6 +123,12 @@ internal sealed class AugmentedFilter
             else
             {
                 ref readonly TurnDynamics d = ref _steps[f.StepIndex[i - 1]];
+                if (surprises > 0 && f.Surprise[i - 1] is double surprise && surprise != 0)
+                {
+                    Unsafe.Add(ref r, surprises) += surprise;
+                    Unsafe.Add(ref w, surprises + 1) += surprise;
+                    Unsafe.Add(ref s, surprises + 2) += surprise;
+                }
                 Propagate(in d, ref r, ref p, ref w, ref s, ref g, ref f.InputRows[(i - 1) * stride], stride);
 
                 double m00 = (d.Rr * p00) + (d.Rp * p01) + (d.Rw * p02), m01 = (d.Rr * p01) + (d.Rp * p11) + (d.Rw * p12);
@@ -291,15 +298,22 @@ internal sealed class AugmentedFilter
             logs += (2 * Math.Log(_factor[(a * k) + a])) - Math.Log(_precision[a]);
         }
         int measurements = _flight.Measurements;
+        double product = 1; // a logarithm for every eight variances; they lie between 1e-9 and 1e4, so the product stays far from the limits
         for (int i = 0; i < measurements; i++)
         {
-            logs += Math.Log(_variance[i]);
+            product *= _variance[i];
+            if ((i & 7) == 7)
+            {
+                logs += Math.Log(product);
+                product = 1;
+            }
             ref double row = ref _rows[i * stride];
             double z = row;
             for (int j = 0; j < k; j++)
                 z += Unsafe.Add(ref row, j + 1) * Coefficients[j];
             _standardised[i] = z;
         }
+        logs += Math.Log(product);
         double value2 = (sum + logs + (measurements * Math.Log(Math.Tau))) / 2;
         return double.IsFinite(value2) ? value2 : double.PositiveInfinity;
     }
