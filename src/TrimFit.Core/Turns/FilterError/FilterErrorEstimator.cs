@@ -108,12 +108,6 @@ public sealed class FilterErrorEstimator : ITurnEstimator
                 HeadingNoise = found.HeadingNoise * Math.Sqrt(coarse.HeadingSamplesPerRow / flight.HeadingSamplesPerRow),
             });
             layout.Clamp(theta);
-            filter.Run(layout.FromVector(theta));
-            SetCurvaturePrior(flight, filter);
-            filter.RunRobust(layout.FromVector(theta), 3 * _options.OutlierLimit);
-            SearchResult rough = search.From(theta, _options.MostIterations, NoiseSearch.Rough);
-            theta = rough.Theta;
-            evaluations += rough.Evaluations + 2;
         }
         filter.Run(layout.FromVector(theta));
         SetCurvaturePrior(flight, filter);
@@ -165,7 +159,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         // Gross errors (a gyro spike of 100 deg/s) would otherwise set the noise level of the first search.
         first.Evaluate(best);
         filter.RunRobust(firstLayout.FromVector(best), 3 * _options.OutlierLimit);
-        SearchResult one = first.From(best, _options.MostIterations, NoiseSearch.Rough);
+        SearchResult one = first.From(best, _options.MostIterations, NoiseSearch.Coarse);
         SetCurvaturePrior(flight, filter);
         filter.RunRobust(one.Noise, _options.OutlierLimit);
         evaluations += one.Evaluations + 3;

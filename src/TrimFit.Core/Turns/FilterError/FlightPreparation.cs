@@ -350,7 +350,7 @@ internal static class FlightPreparation
             steps[i] = time[i + 1] - time[i];
         Array.Sort(steps);
         double median = steps[steps.Length / 2];
-        int samples = (int)Math.Floor((wanted / median) + 1e-6);
+        int samples = (int)Math.Floor((wanted / median) + 0.05); // steps jitter: 0.1003 s is a step of 0.1 s
         return samples >= 2 ? samples * median : 0;
     }
 
