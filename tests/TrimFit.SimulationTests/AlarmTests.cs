@@ -37,7 +37,7 @@ public class AlarmTests
         Assert.True(AlarmStudy.IsAlarm(new(true, VerdictCode.PowerPull, false)));
         Assert.False(AlarmStudy.IsAlarm(new(true, VerdictCode.Insufficient, false)));
         Assert.True(AlarmStudy.IsForbiddenUnlogged(new(true, VerdictCode.Insufficient, true)));
-        Assert.Equal(18, AlarmStudy.MostAlarms(200)); // by the binomial distribution: P(more than 18 of 200 at 5 %) = 0.4 %
+        Assert.Equal(18, AlarmStudy.MostAlarms(200)); // by the binomial distribution
         // Machines as drawn pull, and most flights of the good card in wind see it.
         Assert.InRange(Fly(Condition.StrongWind, balanced: false).Count(AlarmStudy.IsAlarm), Flights / 3, Flights);
     }

@@ -6,7 +6,7 @@ namespace TrimFit.SimulationTests;
 
 /// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
 /// --minutes for each row, --flights-to a file with a line for each flight); `alarms` flies what may raise a false alarm (--flights, --only,
-/// --seed, --threads, --minutes); `timing` times fits (--hours at most); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); anything else goes to the test runner.</summary>
+/// --machine, --seed, --threads, --minutes); `timing` times fits (--hours at most); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -29,8 +29,8 @@ internal static class Program
         int flights = (int)Number(args, "--flights", 200), threads = (int)Number(args, "--threads", 1), seed = (int)Number(args, "--seed", 1);
         double minutes = Number(args, "--minutes", 24 * 60);
         if (flights >= 1 && threads >= 1 && seed >= 0 && minutes > 0)
-            return AlarmStudy.Run(flights, (ulong)seed, threads, Text(args, "--only"), minutes);
-        Console.Error.WriteLine("alarms [--flights N] [--minutes M] [--threads N] [--seed N] [--only part of a condition's name]: numbers above 0");
+            return AlarmStudy.Run(flights, (ulong)seed, threads, Text(args, "--only"), Text(args, "--machine"), minutes);
+        Console.Error.WriteLine("alarms [--flights N] [--minutes M] [--threads N] [--seed N] [--only part of a condition's name] [--machine drawn|balanced]: numbers above 0");
         return 2;
     }
 

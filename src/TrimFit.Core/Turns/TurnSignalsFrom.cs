@@ -12,6 +12,7 @@ public sealed partial class TurnSignals
 
     /// <summary>A turn is strong and intended beyond this rate, unless three times the flight's own median is more (a kite turns all the time).</summary>
     private static readonly double _strongTurnRadPerSec = double.DegreesToRadians(15);
+    private const double Reached = 0.9; // of the samples stay below: the rest is the beginning of turns, and held courses
     private const double UsedHard = 0.5; // of the brake that only 1 % of the samples exceed
     private const double BeyondSteering = 3; // times a strong turn: a spiral, whatever made it
     private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3, MostShare = 0.5;
@@ -112,7 +113,7 @@ public sealed partial class TurnSignals
         };
     }
 
-    /// <summary>Brake difference that makes a turn of a rate: by the median of turn over brake where the brakes were used hard; NaN when they never were.</summary>
+    /// <summary>Brake difference that makes a turn of a rate: by the turn over brake that is reached where the brakes are used hard; NaN when they never are.</summary>
     /// <remarks>Intended turns are told by what the pilot did, not by how fast the machine turned. A rate is the brakes' and the air's together, so a
     /// choice by rate ends a span just where the air turns the machine hardest, and those ends then look like a pull (thermals, by 1 to 3 deg/s).</remarks>
     private static double BrakeOfTurn(double strong, double[] rate, double[] brakes, bool[] use)
@@ -122,7 +123,7 @@ public sealed partial class TurnSignals
         if (!(hard > 0))
             return double.NaN;
         double[] turnPerBrake = [.. rate.Select((r, i) => use[i] && Math.Abs(brakes[i]) > hard ? Math.Abs(r / brakes[i]) : double.NaN).Where(double.IsFinite)];
-        return turnPerBrake.Length > 0 && QuantileType7.Of(turnPerBrake, 0.5) is double k and > 0 ? strong / k : double.NaN;
+        return turnPerBrake.Length > 0 && QuantileType7.Of(turnPerBrake, Reached) is double k and > 0 ? strong / k : double.NaN;
     }
 
     /// <summary>How much of a leg is left out at an edge that no control shows: the sheet's own tolerance.</summary>
