@@ -1,4 +1,5 @@
 using System.CommandLine;
+using TrimFit.Cli.Batch;
 
 namespace TrimFit.Cli;
 
@@ -9,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Rig(output), Synth(error),
+            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommands.Create(output, error),
         };
         return root;
     }
@@ -30,23 +31,71 @@ internal static class CommandTree
         Argument<string[]> logs = Logs();
         var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
         var sheet = new Option<string?>("--sheet") { Description = "What the pilot did: a flight sheet (TOML).", HelpName = "SHEET" };
+        var card = new Option<string?>("--card") { Description = "The test card that was flown (JSON): says whether its precision was reached, and the next best leg.", HelpName = "CARD" };
         var common = new CommonOptions();
-        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet };
+        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet, card };
         common.AddForPeople(command);
         common.AddForLogs(command);
         common.AddForFit(command);
-        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), common.Choices(parsed), output, error));
+        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), parsed.GetValue(card), common.Choices(parsed), output, error));
         return command;
     }
 
-    private static Command Rig(TextWriter output)
+    private static Command Compare(TextWriter output, TextWriter error)
+    {
+        var list = new Argument<string?>("FLIGHTS") { Description = "A list of flights (TOML): [[flight]] with logs, rig, sheet, setup.", Arity = ArgumentArity.ZeroOrOne };
+        Option<string[]> Logs(string name, string which) => new(name) { Description = $"Logs of the flight {which} the change.", HelpName = "LOG", AllowMultipleArgumentsPerToken = true };
+        Option<string?> File(string name, string what, string help) => new(name) { Description = what, HelpName = help };
+        Option<string[]> before = Logs("--before", "before"), after = Logs("--after", "after");
+        Option<string?> beforeRig = File("--before-rig", "The machine before the change.", "RIG"), afterRig = File("--after-rig", "The machine after it; that before when left out.", "RIG");
+        Option<string?> beforeSheet = File("--before-sheet", "Flight sheet of the flight before.", "SHEET"), afterSheet = File("--after-sheet", "Flight sheet of the flight after.", "SHEET");
+        Option<string?> changed = File("--changed", "What was changed; the change is put down to it, everything else that differs is warned of.", "WHAT");
+        Option<string?> scatter = File("--flight-scatter", "Known scatter of an unchanged machine's pull from flight to flight, deg/s; without it what is usual is assumed.", "DEG_S");
+        var common = new CommonOptions();
+        var command = new Command("compare", "Before and after: did the change work, and what comes next. Two flights, or a list of more.")
+        {
+            list, before, beforeRig, beforeSheet, after, afterRig, afterSheet, changed, scatter,
+        };
+        common.AddForPeople(command);
+        common.AddForLogs(command);
+        common.AddForFit(command);
+        command.SetAction(parsed => CompareCommand.Run(new CompareRequest
+        {
+            List = parsed.GetValue(list),
+            Before = [.. parsed.GetValue(before) ?? []],
+            BeforeRig = parsed.GetValue(beforeRig),
+            BeforeSheet = parsed.GetValue(beforeSheet),
+            After = [.. parsed.GetValue(after) ?? []],
+            AfterRig = parsed.GetValue(afterRig),
+            AfterSheet = parsed.GetValue(afterSheet),
+            Changed = CommonOptions.Changed(parsed.GetValue(changed)),
+            Scatter = CommonOptions.Scatter(parsed.GetValue(scatter)),
+        }, common.Choices(parsed), output, error));
+        return command;
+    }
+
+    private static Command Rig(TextWriter output, TextWriter error)
     {
         var rig = new Argument<string>("RIG") { Description = "The machine: a rig file (TOML)." };
         var common = new CommonOptions();
         var command = new Command("rig", "Statics and adjustment table of a machine without a flight.") { rig };
         common.AddForPeople(command);
         common.AddSeed(command);
-        command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, common.Choices(parsed), output));
+        var ground = new MeasureOptions();
+        ground.AddTo(command);
+        command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, ground.Choices(parsed), common.Choices(parsed), output, error));
+        return command;
+    }
+
+    private static Command Card(TextWriter output, TextWriter error)
+    {
+        var options = new CardCommandOptions();
+        var common = new CommonOptions();
+        var command = new Command("card", "A test card: what to fly for a wanted precision, and the precision to expect.");
+        options.AddTo(command);
+        common.AddForPeople(command);
+        common.AddForFit(command);
+        command.SetAction(parsed => CardCommand.Run(options.Choices(parsed, common.Choices(parsed)), common.Choices(parsed), output, error));
         return command;
     }
 
@@ -59,6 +108,29 @@ internal static class CommandTree
         common.AddSeed(command);
         common.AddQuiet(command);
         command.SetAction(parsed => SynthCommand.Run(parsed.GetValue(scenario)!, parsed.GetValue(folder)!, common.Choices(parsed), error));
+        return command;
+    }
+
+    private static Command Batch(TextWriter output, TextWriter error)
+    {
+        var paths = new Argument<string[]>("PATH") { Description = "Logs, one flight each; names may hold * and ?.", Arity = ArgumentArity.ZeroOrMore };
+        var list = new Option<string?>("--list") { Description = "A text file with one log a line.", HelpName = "FILE" };
+        var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
+        var folder = new Option<string>("--out") { Description = "Folder for flights.csv, flights.parquet and the journal that a run goes on from.", Required = true, HelpName = "DIR" };
+        var threads = new Option<string?>("--threads") { Description = "Flights worked on at once (the processor's cores).", HelpName = "N" };
+        var common = new CommonOptions();
+        var command = new Command("batch", "Many flights, in parallel, one result row each; goes on where it was when run again.") { paths, list, rig, folder, threads };
+        common.AddForReading(command);
+        common.AddForLogs(command);
+        common.AddForFit(command);
+        command.SetAction(parsed =>
+        {
+            string[] patterns = [.. parsed.GetValue(paths) ?? [], .. parsed.GetValue(list) is string file ? BatchFlight.Listed(file) : []];
+            if (patterns.Length == 0)
+                throw new CommandLineException("batch: no log is named. Name logs, patterns such as \"logs/*.csv\", or a list with --list.");
+            return BatchCommand.Run(BatchFlight.From(patterns, parsed.GetValue(rig)!), parsed.GetValue(folder)!, CommonOptions.Threads(parsed.GetValue(threads)),
+                common.Choices(parsed), output, error);
+        });
         return command;
     }
 

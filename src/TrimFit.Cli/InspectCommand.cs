@@ -1,5 +1,6 @@
 using TrimFit.Core.Logs;
 using TrimFit.Core.Turns;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;

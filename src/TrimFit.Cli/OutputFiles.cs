@@ -9,13 +9,16 @@ internal static class OutputFiles
     public static void Write(string option, string path, string text) => Write(option, path, Encoding.UTF8.GetBytes(text));
 
     /// <exception cref="CommandLineException">The file cannot be written.</exception>
-    public static void Write(string option, string path, ReadOnlySpan<byte> bytes)
+    public static void Write(string option, string path, byte[] bytes) => Write(option, path, stream => stream.Write(bytes));
+
+    /// <exception cref="CommandLineException">The file cannot be written.</exception>
+    public static void Write(string option, string path, Action<Stream> write)
     {
         try
         {
             string part = path + ".part"; // a full disk must not leave half a result under the wanted name
             using (FileStream stream = File.Create(part))
-                stream.Write(bytes);
+                write(stream);
             File.Move(part, path, overwrite: true);
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or ArgumentException or NotSupportedException)

@@ -4,18 +4,20 @@ using System.Text.Encodings.Web;
 using System.Text.Json;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 using TrimFit.Reporting.Json;
 using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Reporting;
 
-/// <summary>Results as JSON for scripts: schemas <c>trimfit-fit/1</c>, <c>trimfit-inspect/1</c>, <c>trimfit-rig-result/1</c>.</summary>
+/// <summary>Results as JSON for scripts: schemas <c>trimfit-fit/1</c>, <c>trimfit-compare/1</c>, <c>trimfit-inspect/1</c>, <c>trimfit-rig-result/1</c>.</summary>
 /// <remarks>Always English, metric and culture-free. Numbers are finite or null and carry nine significant digits: more would only show
 /// the last bits of one processor. The text ends with a line feed.</remarks>
-public static class ReportJson
+public static partial class ReportJson
 {
     private const double DegPerRad = 180 / Math.PI;
     private const double MmPerM = 1000;
@@ -33,9 +35,14 @@ public static class ReportJson
     public static string Fit(FitReport report)
     {
         ArgumentNullException.ThrowIfNull(report);
+        return JsonSerializer.Serialize(FitResult(report), _context.FitJson) + "\n";
+    }
+
+    private static FitJson FitResult(FitReport report)
+    {
         TrimAnalysis a = report.Analysis;
         ControlUnit brake = report.Import.Flight.BrakeUnit, trimmer = report.Import.Flight.TrimmerUnit;
-        var json = new FitJson
+        return new FitJson
         {
             Inputs = Inputs(report.Import.Diagnostics, report.RigFile, report.SheetFile, report.Provenance),
             Sampling = Sampling(report.Import.Diagnostics),
@@ -62,10 +69,10 @@ public static class ReportJson
             },
             Assumptions = Assumptions(a.Assumptions),
             SpansLeftOut = [.. a.Fit.SpansLeftOut.Select(x => new SpanJson(Number(x.StartSec), Number(x.EndSec), x.Reason))],
-            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Findings(a.Warnings)],
+            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. GroundReports.Faults(a.RigReport.GroundFaults), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
+            Card = report.CardOutcome is CardOutcome outcome ? CardOutcomeOf(outcome) : null,
         };
-        return JsonSerializer.Serialize(json, _context.FitJson) + "\n";
     }
 
     /// <summary>The result of <c>inspect</c>.</summary>
@@ -111,10 +118,11 @@ public static class ReportJson
             TwistStiffnessNmPerRad = Number(r.TwistStiffnessNmPerRad),
             TorqueBalancingMm = Number(r.TorqueBalancingOffsetM, MmPerM),
             HangCheck = new(Number(r.HangCheckLeftKg), Number(r.HangCheckRightKg)),
+            HangCheckMeasured = GroundReports.Measured(r),
             At = [.. r.At.Select(RigAt)],
             Adjustments = [.. r.Adjustments.Select(RigAdjustment)],
             Assumptions = Assumptions(report.Rig.Assumptions()),
-            Warnings = Findings(r.Findings),
+            Warnings = [.. Findings(r.Findings), .. GroundReports.Faults(r.GroundFaults)],
             Cautions = CautionList(Wording.Cautions.For(Wording.Cautions.PlacesOf(r.Adjustments.Select(x => x.Kind)))),
         };
         return JsonSerializer.Serialize(json, _context.RigJson) + "\n";
@@ -194,8 +202,26 @@ public static class ReportJson
             Disturbance = new() { Rms = Number(fit.DisturbanceRmsRadPerSec, DegPerRad), TauS = Number(fit.DisturbanceTauSec) },
             EffectiveSamples = Number(fit.EffectiveSamples),
             Condition = Number(fit.Condition),
+            Noise = Noise(fit),
         };
     }
+
+    private static NoiseJson? Noise(TurnFit fit) => fit.Noise is not NoiseParameters n ? null : new()
+    {
+        Response = Snake.Of(n.Order.ToString()),
+        LagS = n.Order == ResponseOrder.First ? Number(n.LagSec) : null,
+        FrequencyRadS = n.Order == ResponseOrder.Second ? Number(n.NaturalFrequency) : null,
+        Damping = n.Order == ResponseOrder.Second ? Number(n.Damping) : null,
+        DisturbanceDegS = Number(n.DisturbanceRms, DegPerRad),
+        DisturbanceTauS = Number(n.DisturbanceTauSec),
+        QuickDegSRootS = Number(n.QuickDisturbance, DegPerRad),
+        GyroDegS = fit.GyroRowsPerSec > 0 ? Number(n.GyroNoise, DegPerRad) : null,
+        HeadingDeg = fit.HeadingRowsPerSec > 0 ? Number(n.HeadingNoise, DegPerRad) : null,
+        GustDeg = fit.HeadingRowsPerSec > 0 ? Number(n.GustRms, DegPerRad) : null,
+        GustTauS = fit.HeadingRowsPerSec > 0 ? Number(n.GustTauSec) : null,
+        GyroRowsPerS = Number(fit.GyroRowsPerSec),
+        HeadingRowsPerS = Number(fit.HeadingRowsPerSec),
+    };
 
     private static CrossCheckJson? CrossCheck(TrimAnalysis analysis, ControlUnit brake, ControlUnit trimmer)
     {
@@ -372,6 +398,6 @@ public static class ReportJson
     private static MessageJson[] Findings(ImmutableArray<Finding> findings, TravelUnit unit = TravelUnit.Meter) =>
         [.. findings.Select(f => new MessageJson(Snake.Of(f.Code.ToString()), Words.Finding(f, Numbers.Invariant, unit)))];
 
-    private static MessageJson[] CautionList(IEnumerable<CautionCode> codes) =>
+    internal static MessageJson[] CautionList(IEnumerable<CautionCode> codes) =>
         [.. codes.Select(c => new MessageJson(Wording.Cautions.CodeOf(c), Words.Caution(c, Numbers.Invariant)))];
 }

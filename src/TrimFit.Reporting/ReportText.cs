@@ -7,22 +7,41 @@ namespace TrimFit.Reporting;
 public static class ReportText
 {
     /// <summary>The result of <c>fit</c>.</summary>
-    public static string Fit(FitReport report, ReportStyle style) => TextRenderer.Render(Reports.Fit(report, style, figures: false));
+    public static string Fit(FitReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Fit(report, style, figures: false));
 
     /// <summary>The first sentence of <c>fit</c> with the caution that stands everywhere, for scripts and quiet people.</summary>
-    public static string FitBrief(FitReport report, ReportStyle style) => Brief(Reports.Fit(report, style, figures: false), style);
+    public static string FitBrief(FitReport report, ReportStyle style) => Brief(ReportDocuments.Fit(report, style, figures: false), style);
+
+    /// <summary>The result of <c>compare</c>.</summary>
+    public static string Compare(CompareReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Compare(report, style, figures: false));
+
+    /// <summary>The first sentence of <c>compare</c> with the caution that stands everywhere.</summary>
+    public static string CompareBrief(CompareReport report, ReportStyle style) => Brief(ReportDocuments.Compare(report, style, figures: false), style);
 
     /// <summary>The result of <c>inspect</c>.</summary>
-    public static string Inspect(InspectReport report, ReportStyle style) => TextRenderer.Render(Reports.Inspect(report, style));
+    public static string Inspect(InspectReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Inspect(report, style));
 
     /// <summary>The first sentence of <c>inspect</c> with the caution that stands everywhere.</summary>
-    public static string InspectBrief(InspectReport report, ReportStyle style) => Brief(Reports.Inspect(report, style), style);
+    public static string InspectBrief(InspectReport report, ReportStyle style) => Brief(ReportDocuments.Inspect(report, style), style);
 
     /// <summary>The result of <c>rig</c>.</summary>
-    public static string Rig(RigSheetReport report, ReportStyle style) => TextRenderer.Render(Reports.Rig(report, style, figures: false));
+    public static string Rig(RigSheetReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Rig(report, style, figures: false));
 
     /// <summary>The first sentence of <c>rig</c> with the caution that stands everywhere.</summary>
-    public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(Reports.Rig(report, style, figures: false), style);
+    public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(ReportDocuments.Rig(report, style, figures: false), style);
+
+    /// <summary>A test card.</summary>
+    public static string Card(CardReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Card(report, style));
+
+    /// <summary>The first sentence of a card with the caution that stands everywhere.</summary>
+    public static string CardBrief(CardReport report, ReportStyle style) => Brief(ReportDocuments.Card(report, style), style);
+
+    /// <summary>The summary of <c>batch</c>.</summary>
+    public static string Batch(BatchSummary summary, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(summary);
+        return TextRenderer.Render(BatchDocument.Build(summary, Words.English, new Numbers(style)));
+    }
 
     private static string Brief(ReportDocument document, ReportStyle style) =>
         TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";

@@ -38,6 +38,9 @@ internal static class BuiltProgram
         return new(process.ExitCode, output.GetAwaiter().GetResult(), error.GetAwaiter().GetResult());
     }
 
+    /// <summary>Starts the program and does not wait for it.</summary>
+    public static Process Start(params ReadOnlySpan<string> args) => Process.Start(new ProcessStartInfo(Executable, args.ToArray()))!;
+
     /// <summary>What a run left behind.</summary>
     public sealed record Outcome(int ExitCode, string Output, string Error);
 

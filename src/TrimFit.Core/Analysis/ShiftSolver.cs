@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
@@ -46,13 +47,13 @@ internal static class ShiftSolver
             constantPart[k] = -posterior.Constant[k] / posterior.Sensitivity[k];
             powerPart[k] = shift[k] - constantPart[k];
         }
-        double median = WeightedQuantile.Of(shift, posterior.Weight, 0.5);
+        (double median, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(shift, posterior.Weight);
         return new ShiftReport
         {
             BalanceThrustN = signals.ThrustBasis == ThrustBasis.Newton ? levels.Balance * signals.FullThrust : null,
             BalanceThrustFraction = levels.Balance,
             CgShiftM = median,
-            Interval95 = TrimPosterior.Interval95(shift, posterior.Weight),
+            Interval95 = interval,
             ConstantPartM = WeightedQuantile.Of(constantPart, posterior.Weight, 0.5),
             PowerPartM = WeightedQuantile.Of(powerPart, posterior.Weight, 0.5),
             TurnLeftAt = TurnLeft(posterior, levels, signals, (k, _) => posterior.Sensitivity[k] * median),
@@ -124,7 +125,7 @@ internal static class ShiftSolver
         if (Math.Min(positive, total - positive) > LargestSignShare * total)
             return null; // which way a travel works is not known well enough
 
-        double median = WeightedQuantile.Of(travel, posterior.Weight, 0.5);
+        (double median, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(travel, posterior.Weight);
         AdjustmentLimit? limit = rig.Limits.GetValueOrDefault(adjustment.Kind);
         double step = limit?.Step ?? adjustment.DefaultStep;
         double rounded = Math.Round(median / step) * step;
@@ -143,7 +144,7 @@ internal static class ShiftSolver
         {
             if (!(posterior.Weight[k] > 0))
                 continue;
-            double sine = RigStatics.Solve(effect.Moved(posterior.Rigs[k], rounded), posterior.Rigs[k].FullThrustN).TwistSine;
+            double sine = effect.TwistSineAtFull(k, rounded);
             ratio[k] = Math.Abs(sine);
             if (sine < 0)
                 left += posterior.Weight[k];
@@ -152,7 +153,9 @@ internal static class ShiftSolver
             if (travel[k] * sign < first * sign)
                 wrongSide += posterior.Weight[k];
         }
-        double high = WeightedQuantile.Of(ratio, posterior.Weight, 0.975);
+        Span<double> ratios = stackalloc double[2];
+        WeightedQuantile.Of(ratio, posterior.Weight, [0.5, 0.975], ratios);
+        double high = ratios[1];
         StaticState full = RigStatics.Solve(moved, nominal.FullThrustN);
         bool? within = limit is null || (limit.Min is null && limit.Max is null) ? null
             : !(rounded < limit.Min - 1e-9) && !(rounded > limit.Max + 1e-9);
@@ -173,12 +176,12 @@ internal static class ShiftSolver
             Kind = adjustment.Kind,
             Unit = adjustment.Unit,
             Travel = median,
-            Interval95 = TrimPosterior.Interval95(travel, posterior.Weight),
+            Interval95 = interval,
             Rounded = rounded,
             FirstStep = first,
             Efficiency = adjustment.CgOffsetPerTravel(nominal),
             ThrustLineOffsetM = moved.ThrustLineOffsetM,
-            TwistRatio = newtons ? WeightedQuantile.Of(ratio, posterior.Weight, 0.5) : null,
+            TwistRatio = newtons ? ratios[0] : null,
             TwistRatioHigh95 = newtons ? high : null,
             TwistDirection = left > DirectionShare * (left + right) ? TwistDirection.Left
                 : right > DirectionShare * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
@@ -186,6 +189,8 @@ internal static class ShiftSolver
             RiserLoadRightN = newtons ? full.RiserLoadRightN : null,
             HangCheckLeftKg = firstMoved.SuspendedKg * (0.5 - (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
             HangCheckRightKg = firstMoved.SuspendedKg * (0.5 + (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
+            HangCheckPlusMinusKg = 1.96 * (RigHang.Of(rig)?.NextFlightSdM ?? LateralGeometry.Of(rig).StandardDeviation) * firstMoved.SuspendedKg / firstMoved.CarabinerSpacingM,
+            HangCheckDifferenceKg = 2 * ((firstMoved.SuspendedKg * firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM) - (nominal.SuspendedKg * nominal.CgOffsetM / nominal.CarabinerSpacingM)),
             TurnLeftAt = TurnLeft(posterior, levels, signals, (k, fraction) => effect.TurnChange(k, fraction, rounded)),
             WithinLimits = within,
             ProbabilityWrongSide = total > 0 ? wrongSide / total : 1,
@@ -210,13 +215,14 @@ internal static class ShiftSolver
             };
             for (int k = 0; k < count; k++)
                 left[k] = posterior.Weight[k] > 0 ? posterior.RateAt(k, fraction) + change(k, fraction) : 0;
+            (double rate, ConfidenceInterval interval) = TrimPosterior.MedianAndInterval95(left, posterior.Weight);
             result.Add(new PullAtSetting
             {
                 Setting = setting,
                 ThrustFraction = fraction,
                 ThrustN = signals.ThrustBasis == ThrustBasis.Newton ? fraction * signals.FullThrust : null,
-                RateRadPerSec = WeightedQuantile.Of(left, posterior.Weight, 0.5),
-                Interval95 = TrimPosterior.Interval95(left, posterior.Weight),
+                RateRadPerSec = rate,
+                Interval95 = interval,
             });
         }
         return result.ToImmutable();

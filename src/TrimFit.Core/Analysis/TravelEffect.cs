@@ -25,7 +25,7 @@ internal abstract class TravelEffect
             };
         bool certain = coefficient.Value > StudentT.TwoSidedFactor(0.95, fit.DegreesOfFreedom) * coefficient.StandardError;
         return metersPerUnit is double scale && certain
-            ? new OfControls(new Estimate(coefficient.Value / scale, coefficient.StandardError / scale), posterior.Count)
+            ? new OfControls(new Estimate(coefficient.Value / scale, coefficient.StandardError / scale), posterior)
             : null;
     }
 
@@ -37,6 +37,9 @@ internal abstract class TravelEffect
 
     /// <summary>Change of turn rate by a travel in one draw at a fraction of full thrust, rad/s.</summary>
     public abstract double TurnChange(int draw, double fraction, double travel);
+
+    /// <summary>Sine of the riser twist at full thrust after a travel in one draw; beyond ±1 there is no equilibrium.</summary>
+    public abstract double TwistSineAtFull(int draw, double travel);
 
     /// <summary>Moves parts of the rig: the whole statics are solved again.</summary>
     private sealed class OfRig(Adjustment adjustment, TrimPosterior posterior) : TravelEffect
@@ -75,10 +78,26 @@ internal abstract class TravelEffect
         public override double TurnChange(int draw, double fraction, double travel) =>
             posterior.Sensitivity[draw] * (Offset(draw, fraction, travel) - Offset(draw, fraction, 0));
 
+        public override double TwistSineAtFull(int draw, double travel)
+        {
+            ref readonly RigValues rig = ref posterior.Rigs[draw];
+            RigValues moved = adjustment.Move!(rig, travel);
+            return (RigStatics.HangAlike(moved, rig)
+                ? RigStatics.Solve(moved, rig.FullThrustN, posterior.Leans.At(draw, 1).Lean)
+                : RigStatics.Solve(moved, rig.FullThrustN)).TwistSine;
+        }
+
         private double Offset(int draw, double fraction, double travel)
         {
-            RigValues rig = travel == 0 ? posterior.Rigs[draw] : adjustment.Move!(posterior.Rigs[draw], travel);
-            return RigStatics.TurningOffset(rig, fraction * posterior.Rigs[draw].FullThrustN, posterior.YawRatio[draw]);
+            ref readonly KnownLeans.Entry known = ref posterior.Leans.At(draw, fraction);
+            if (travel == 0)
+                return known.TurningOffsetM;
+            ref readonly RigValues rig = ref posterior.Rigs[draw];
+            double thrust = fraction * rig.FullThrustN, yawRatio = posterior.YawRatio[draw];
+            RigValues moved = adjustment.Move!(rig, travel);
+            return RigStatics.HangAlike(moved, rig)
+                ? RigStatics.TurningOffset(moved, thrust, yawRatio, known.Lean)
+                : RigStatics.TurningOffset(moved, thrust, yawRatio);
         }
     }
 
@@ -86,9 +105,12 @@ internal abstract class TravelEffect
     private sealed class OfControls : TravelEffect
     {
         private readonly double[] _perMeter;
+        private readonly TrimPosterior _posterior;
 
-        public OfControls(Estimate perMeter, int draws)
+        public OfControls(Estimate perMeter, TrimPosterior posterior)
         {
+            _posterior = posterior;
+            int draws = posterior.Count;
             var random = new SeededRandom(5); // its own stream: the posterior's draws stay what they are
             _perMeter = new double[draws];
             for (int k = 0; k < draws; k++)
@@ -101,5 +123,8 @@ internal abstract class TravelEffect
             (Math.Clamp(-rateRadPerSec / _perMeter[draw], -1, 1), _perMeter[draw]);
 
         public override double TurnChange(int draw, double fraction, double travel) => _perMeter[draw] * travel;
+
+        public override double TwistSineAtFull(int draw, double travel) =>
+            RigStatics.Solve(_posterior.Rigs[draw], _posterior.Rigs[draw].FullThrustN, _posterior.Leans.At(draw, 1).Lean).TwistSine;
     }
 }

@@ -46,6 +46,7 @@ internal sealed class TrimPosterior
         Curvature = new double[count];
         Weight = new double[count];
         BalanceError = new double[count];
+        Leans = new KnownLeans(Rigs, YawRatio);
     }
 
     public RigValues[] Rigs { get; }
@@ -56,6 +57,8 @@ internal sealed class TrimPosterior
     public double[] Slope { get; }
     public double[] Curvature { get; }
     public double[] Weight { get; }
+    /// <summary>Hang-back and riser load of each draw, solved once for each thrust.</summary>
+    public KnownLeans Leans { get; }
     /// <summary>Standard normal of each draw for the thrust of level flight.</summary>
     public double[] BalanceError { get; }
     public required SensitivityReport Report { get; init; }
@@ -146,7 +149,7 @@ internal sealed class TrimPosterior
             for (int k = 0; k < count; k++)
             {
                 (double constant, double slope, double curvature) = c.Draw(random);
-                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature);
+                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature, k);
                 values[k] = (best + (double.IsFinite(sd) ? sd * random.NextNormal() : 0)) * Math.Exp(ModelErrorLogSd * random.NextNormal());
             }
             directAlone.Add(SourceAlone.Of(evidence.Kind, values));
@@ -188,7 +191,7 @@ internal sealed class TrimPosterior
             }
             foreach (SensitivityEvidence evidence in direct)
             {
-                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k]);
+                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k], k);
                 double a = DrawFactor(best, sd, out double logProposal);
                 if (a > 0 && double.IsFinite(logWeight[k]))
                 {
@@ -310,8 +313,15 @@ internal sealed class TrimPosterior
     }
 
     /// <summary>95 % interval of a weighted sample.</summary>
-    public static ConfidenceInterval Interval95(double[] values, double[] weights) =>
-        new(WeightedQuantile.Of(values, weights, 0.025), WeightedQuantile.Of(values, weights, 0.975), 0.95);
+    public static ConfidenceInterval Interval95(double[] values, double[] weights) => MedianAndInterval95(values, weights).Interval;
+
+    /// <summary>Median and 95 % interval of weighted draws.</summary>
+    public static (double Median, ConfidenceInterval Interval) MedianAndInterval95(double[] values, double[] weights)
+    {
+        Span<double> quantiles = stackalloc double[3];
+        WeightedQuantile.Of(values, weights, [0.025, 0.5, 0.975], quantiles);
+        return (quantiles[1], new ConfidenceInterval(quantiles[0], quantiles[2], 0.95));
+    }
 
     private static (double LogMedian, double LogSd) Combine(double logPrior, double priorSd, double userMedian, double userSd)
     {

@@ -28,6 +28,21 @@ public readonly record struct StaticState
     public double? TwistRad => Math.Abs(TwistSine) <= 1 ? Math.Asin(TwistSine) : null;
 }
 
+/// <summary>How frame and risers hang at one thrust: all of the statics that a sideways move of a part leaves as it is.</summary>
+internal readonly record struct RiserLean
+{
+    /// <summary>th: hang-back of the thrust axis from square to the risers.</summary>
+    public double HangBackRad { get; init; }
+    /// <summary>cos(th).</summary>
+    public double Cos { get; init; }
+    /// <summary>sin(th).</summary>
+    public double Sin { get; init; }
+    /// <summary>R: sum of the riser loads.</summary>
+    public double RiserLoadN { get; init; }
+    /// <summary>sin(th - th0): how far power has swung the CG back.</summary>
+    public double SwingSine { get; init; }
+}
+
 /// <summary>Solves the statics of model page section 1; derived in DEVELOPERS.md, "Rig statics".</summary>
 public static class RigStatics
 {
@@ -40,10 +55,17 @@ public static class RigStatics
     /// <param name="rig">The rig's numbers.</param>
     /// <param name="thrustN">Thrust, N, not negative.</param>
     /// <returns>The state; the twist's sine is clamped to ±1 inside the roll moments when there is no equilibrium.</returns>
-    public static StaticState Solve(in RigValues rig, double thrustN)
+    public static StaticState Solve(in RigValues rig, double thrustN) => Solve(rig, thrustN, Lean(rig, thrustN));
+
+    /// <summary>Whether two rigs hang alike at any thrust, so that one's <see cref="RiserLean"/> serves the other.</summary>
+    internal static bool HangAlike(in RigValues a, in RigValues b) =>
+        a.PilotKg == b.PilotKg && a.PowerUnitKg == b.PowerUnitKg && a.BallastKg == b.BallastKg
+        && a.HangBackRad == b.HangBackRad && a.CgDepthM == b.CgDepthM && a.ThrustDepthM == b.ThrustDepthM;
+
+    /// <summary>Hang-back and riser load at one thrust, solved together.</summary>
+    internal static RiserLean Lean(in RigValues rig, double thrustN)
     {
         double weight = rig.WeightN;
-        double torque = rig.TorqueArmM * thrustN;
         double hangBack = rig.HangBackRad, riserLoad = weight;
         double previous = 0, previousMiss = 0;
         double cos = 1, sin = 0;
@@ -62,6 +84,14 @@ public static class RigStatics
             (previous, previousMiss) = (hangBack, miss);
             hangBack -= miss / slope;
         }
+        return new RiserLean { HangBackRad = hangBack, Cos = cos, Sin = sin, RiserLoadN = riserLoad, SwingSine = Math.Sin(hangBack - rig.HangBackRad) };
+    }
+
+    /// <summary>Statics at one thrust, with the lean of a rig that hangs alike.</summary>
+    internal static StaticState Solve(in RigValues rig, double thrustN, in RiserLean lean)
+    {
+        double weight = rig.WeightN, torque = rig.TorqueArmM * thrustN;
+        double cos = lean.Cos, sin = lean.Sin, hangBack = lean.HangBackRad, riserLoad = lean.RiserLoadN;
         double cgOffset = rig.CgOffsetM, signedTorque = rig.RotationSign * torque;
         // y_T is where the thrust line passes the carabiners' station, so a canted axis needs no term of its own about the riser axis.
         double yawMoment = (-thrustN * cos * (rig.ThrustLineOffsetM - cgOffset)) + (signedTorque * sin);
@@ -69,7 +99,7 @@ public static class RigStatics
         double sinTwist = Math.Clamp(twistSine, -1, 1);
         double sideways = sinTwist + Math.Sin(rig.CantRad); // the thrust points sideways by twist and cant alike
         // Square to the risers the weight counts with the riser load; swung back under power, its CG is carried sideways by the twist.
-        double swing = rig.CgDepthM * Math.Sin(hangBack - rig.HangBackRad);
+        double swing = rig.CgDepthM * lean.SwingSine;
         double roll = (riserLoad * (cgOffset + (swing * sinTwist))) - (signedTorque * cos);
         double rollAtCarabiners = roll + (rig.ThrustAboveCgM * thrustN * sideways);
         roll -= (rig.ThrustDepthM - rig.WholeCgDepthM) * thrustN * sideways;
@@ -92,15 +122,18 @@ public static class RigStatics
     /// <param name="rig">The rig's numbers.</param>
     /// <param name="thrustN">Thrust, N.</param>
     /// <param name="yawRatio">rho_y, turn per yaw moment over turn per roll moment.</param>
-    public static double TurningOffset(in RigValues rig, double thrustN, double yawRatio)
+    public static double TurningOffset(in RigValues rig, double thrustN, double yawRatio) => TurningOffset(rig, thrustN, yawRatio, Lean(rig, thrustN));
+
+    /// <summary>The same with the lean of a rig that hangs alike.</summary>
+    internal static double TurningOffset(in RigValues rig, double thrustN, double yawRatio, in RiserLean lean)
     {
-        StaticState state = Solve(rig, thrustN);
+        StaticState state = Solve(rig, thrustN, lean);
         return (state.RollMomentNm + (yawRatio * state.YawMomentNm)) / rig.WeightN;
     }
 
     /// <summary>The CG offset that balances a torque at hang-back <paramref name="hangBackRad"/>: e = Q cos(th)/W, the trade's rule of thumb.</summary>
     /// <remarks>Torque's roll and weight's roll about the carabiners' mid-point cancel. Yaw and the risers' lean under power are left out:
-    /// <see cref="Solve"/> has both (DEVELOPERS.md, "Torque is a CG offset").</remarks>
+    /// <see cref="Solve(in RigValues, double)"/> has both (DEVELOPERS.md, "Torque is a CG offset").</remarks>
     /// <param name="signedTorqueNm">rot Q: positive for a propeller that turns clockwise seen from behind, N·m.</param>
     /// <param name="suspendedKg">Suspended mass, above 0 kg.</param>
     /// <param name="hangBackRad">Hang-back of the thrust axis, rad.</param>

@@ -20,11 +20,11 @@ public sealed class CsvLogFormat : ILogFormat
         if (CsvLongRows.Layout(head) is { } layout)
             return ReadLong(source, options, head, layout);
         CsvPlan plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
-        var rows = new CsvRows(source.Name, head, plan, options.Strict);
+        var rows = new CsvRows(source, head, plan, options.Strict);
         if (!rows.Read(source, lineBreaksInQuotes: true, options.Progress))
         {
             plan = CsvPlan.Create(source.Name, head, options, source.Recording is not null);
-            rows = new CsvRows(source.Name, head, plan, options.Strict);
+            rows = new CsvRows(source, head, plan, options.Strict);
             rows.Read(source, lineBreaksInQuotes: false, options.Progress);
         }
         rows.Finish();

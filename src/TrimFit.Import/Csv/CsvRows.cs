@@ -22,6 +22,9 @@ internal sealed class CsvRows : ICsvRows
     /// <summary>Longest record, bytes; an unclosed quote must not swallow the memory.</summary>
     private const int LongestRecord = 1 << 20;
 
+    /// <summary>Bytes from which counting the lines first is cheaper than copying the columns later.</summary>
+    private const long LongFile = 1 << 23;
+
     /// <summary>Rows to start with when the file's length is not known.</summary>
     private const int FirstRows = 1024;
 
@@ -49,8 +52,9 @@ internal sealed class CsvRows : ICsvRows
     private int _repeats, _firstRepeatLine;
     private bool _restart;
 
-    public CsvRows(string file, CsvHead head, CsvPlan plan, bool strict)
+    public CsvRows(LogSource source, CsvHead head, CsvPlan plan, bool strict)
     {
+        string file = source.Name;
         _file = file;
         _head = head;
         _time = plan.Time;
@@ -66,15 +70,35 @@ internal sealed class CsvRows : ICsvRows
         _isPosition = [.. _wanted.Select(c => c.Role == ChannelRole.Position)];
         _suffix = new string?[_wanted.Length];
         _suffixFactor = [.. Enumerable.Repeat(1.0, _wanted.Length)];
-        int capacity = head.EstimatedRows > 0 ? (int)Math.Min(head.EstimatedRows * 1.02 + 16, Array.MaxLength) : FirstRows;
-        _timeSec = new double[capacity];
+        int capacity = Capacity(source, head);
+        _timeSec = HugePages.Column(capacity);
         foreach (CsvColumn column in _wanted)
         {
-            column.Values = new double[capacity];
+            column.Values = HugePages.Column(capacity);
             if (column.Role == ChannelRole.Position)
-                column.SecondValues = new double[capacity];
+                column.SecondValues = HugePages.Column(capacity);
         }
         _values = [.. _wanted.Select(c => c.Values)];
+    }
+
+    /// <summary>Rows to make room for: exactly as many as a long file has lines, so that its columns need not be copied to their length at the end.</summary>
+    private static int Capacity(LogSource source, CsvHead head)
+    {
+        if (source.Length is not > LongFile)
+            return head.EstimatedRows > 0 ? (int)Math.Min((head.EstimatedRows * 1.02) + 16, Array.MaxLength) : FirstRows;
+        using Stream stream = source.Open();
+        byte[] block = new byte[1 << 16];
+        long lines = 0;
+        byte last = 0;
+        int read;
+        while ((read = stream.Read(block)) > 0)
+        {
+            lines += block.AsSpan(0, read).Count((byte)'\n');
+            last = block[read - 1];
+        }
+        lines += last == (byte)'\n' ? 0 : 1;
+        long rows = lines - (head.DataLine - 1);
+        return rows > 1 ? (int)Math.Min(rows, Array.MaxLength) : (int)Math.Min((head.EstimatedRows * 1.02) + 16, Array.MaxLength); // one line: line ends of another kind
     }
 
     /// <summary>Rows of data in the file.</summary>

@@ -29,7 +29,17 @@ internal sealed class DocumentBuilder(Words words)
         return list.Length == 0 ? this : Add(new TableBlock(columns, list));
     }
 
-    public DocumentBuilder Figure(string? svg, string caption) => svg is null ? this : Add(new FigureBlock(svg, caption));
+    public DocumentBuilder Figure(string? svg, string caption, FigureKind kind = FigureKind.Plot) => svg is null ? this : Add(new FigureBlock(svg, caption, kind));
+
+    public DocumentBuilder Steps(IEnumerable<string> items) => Add(new StepsBlock([.. items]));
+
+    public DocumentBuilder Checks(IEnumerable<CheckItem> items) => Add(new ChecksBlock([.. items]));
+
+    public DocumentBuilder Fields(IEnumerable<FieldItem> items) => Add(new FieldsBlock([.. items]));
+
+    public DocumentBuilder Signatures(IEnumerable<string> names) => Add(new SignaturesBlock([.. names]));
+
+    public DocumentBuilder PageBreak() => Add(new PageBreakBlock());
 
     public DocumentBuilder Cautions(IEnumerable<CautionCode> codes, Numbers numbers) =>
         Heading(Words.Labels.Cautions).Add(new CautionsBlock([.. codes.Select(c => (Wording.Cautions.CodeOf(c), Words.Caution(c, numbers)))]));
@@ -46,7 +56,7 @@ internal sealed class DocumentBuilder(Words words)
         return new(Words.Language, title, subtitle, kept);
     }
 
-    private DocumentBuilder Add(Block block)
+    public DocumentBuilder Add(Block block)
     {
         _blocks.Add(block);
         return this;

@@ -28,10 +28,12 @@ internal static class FitDocument
         {
             bool after = FitAnswer.Best(a) is not null;
             document.Heading(labels.Drawing);
-            document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, FitAnswer.Best(a), words, numbers), words.DrawingDescription(after) + " " + labels.DrawingNote);
+            document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, FitAnswer.Best(a), words, numbers), words.DrawingDescription(after) + " " + labels.DrawingNote, FigureKind.Drawing);
             document.Heading(labels.TurnPlot);
             document.Figure(TurnPlot.Draw(a, words, numbers), words.TurnPlotDescription(a.Fit.Points.Length));
         }
+        if (report.CardOutcome is Core.Planning.CardOutcome card)
+            document.Heading(words.Card.OutcomeTitle).Paragraph(words.Card.Outcome(card, numbers)).Paragraph(words.Card.NextLegs(card, numbers));
         Pull(document, a, brake, numbers);
         if (figures)
         {
@@ -49,6 +51,7 @@ internal static class FitDocument
         document.Heading(labels.Warnings);
         document.List([
             .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
+            .. a.RigReport.GroundFaults.Select(f => words.Ground.Fault(f, numbers)),
             .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
         document.Cautions(Cautions.Of(a), numbers);
         return document.Build($"{labels.ReportTitle}: {a.Rig.Name}", string.Join(", ", report.Import.Diagnostics.Files.Select(f => f.Name)));
@@ -177,7 +180,7 @@ internal static class FitDocument
 
     private static string Finite(double value, Numbers numbers, int digits, Labels l) => double.IsFinite(value) ? numbers.Significant(value, digits) : l.NotKnown;
 
-    private static void Sensitivity(DocumentBuilder document, SensitivityReport s, Numbers numbers)
+    internal static void Sensitivity(DocumentBuilder document, SensitivityReport s, Numbers numbers)
     {
         Words words = document.Words;
         Labels l = words.Labels;

@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text;
 
 namespace TrimFit.Reporting.Documents;
@@ -29,6 +30,30 @@ internal static class MarkdownRenderer
                 case ListBlock list:
                     foreach (string item in list.Items)
                         text.Append("- ").Append(Escape(item)).Append('\n');
+                    break;
+                case StepsBlock steps:
+                    for (int i = 0; i < steps.Items.Count; i++)
+                        text.Append(CultureInfo.InvariantCulture, $"{i + 1}. ").Append(Escape(steps.Items[i])).Append('\n');
+                    break;
+                case ChecksBlock checks:
+                    foreach (CheckItem item in checks.Items)
+                        text.Append(item.Done == true ? "- [x] " : "- [ ] ").Append(Escape(item.Text)).Append('\n');
+                    break;
+                case FieldsBlock fields:
+                    foreach (FieldItem item in fields.Items)
+                        text.Append("- ").Append(Escape(item.Name)).Append(": ").Append(Escape(item.Value ?? TextRenderer.Line)).Append('\n');
+                    break;
+                case DrawnReadingsBlock drawn:
+                    text.Append("### ").Append(Escape(drawn.Title)).Append("\n\n").Append(Escape(drawn.Text)).Append('\n');
+                    foreach (ReadingRow row in drawn.Rows)
+                        text.Append("- ").Append(Escape(row.Name)).Append(": ").AppendJoin(' ', Enumerable.Repeat(Escape(TextRenderer.Line), row.Cells)).Append('\n');
+                    break;
+                case SignaturesBlock signatures:
+                    foreach (string name in signatures.Names)
+                        text.Append("- ").Append(Escape(name)).Append(": ").Append(Escape(TextRenderer.Line)).Append('\n');
+                    break;
+                case PageBreakBlock:
+                    text.Append("---\n");
                     break;
                 case TableBlock table:
                     Row(text, table.Columns.Select(c => c.Head));

@@ -6,6 +6,9 @@ namespace TrimFit.Reporting.Documents;
 /// <summary>A report for the terminal: plain text without colour, so that it can be piped and read aloud.</summary>
 internal static class TextRenderer
 {
+    /// <summary>A line to write on.</summary>
+    public const string Line = "____________________";
+
     private const int MostHeadLines = 3;
     private const int Width = 100; // fits a terminal beside another window; tables may be wider when their cells are
 
@@ -31,6 +34,34 @@ internal static class TextRenderer
                 case ListBlock list:
                     foreach (string item in list.Items)
                         Wrap(text, Safe(item), "- ", "  ");
+                    break;
+                case StepsBlock steps:
+                    for (int i = 0; i < steps.Items.Count; i++)
+                    {
+                        string number = string.Create(CultureInfo.InvariantCulture, $"{i + 1}. ");
+                        Wrap(text, Safe(steps.Items[i]), number, new string(' ', number.Length));
+                    }
+                    break;
+                case ChecksBlock checks:
+                    foreach (CheckItem item in checks.Items)
+                        Wrap(text, Safe(item.Text), item.Done == true ? "[x] " : "[ ] ", "    ");
+                    break;
+                case FieldsBlock fields:
+                    foreach (FieldItem item in fields.Items)
+                        Wrap(text, $"{Safe(item.Name)}: {Safe(item.Value ?? Line)}", "", "  ");
+                    break;
+                case DrawnReadingsBlock drawn:
+                    text.Append('\n').Append(Safe(drawn.Title)).Append('\n');
+                    Wrap(text, Safe(drawn.Text), "", "");
+                    foreach (ReadingRow row in drawn.Rows)
+                        Wrap(text, $"{Safe(row.Name)} ({Safe(row.Key)}): {string.Join(' ', Enumerable.Repeat("________", row.Cells))}", "- ", "  ");
+                    break;
+                case SignaturesBlock signatures:
+                    foreach (string name in signatures.Names)
+                        Wrap(text, $"{Safe(name)}: {Line}", "", "  ");
+                    break;
+                case PageBreakBlock:
+                    text.Append('\n');
                     break;
                 case TableBlock table:
                     Table(text, table);

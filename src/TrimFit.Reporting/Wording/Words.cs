@@ -15,6 +15,17 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
+
+    /// <summary>Words of the summary of many flights.</summary>
+    public abstract Batch.BatchWords Batch { get; }
+
+    /// <summary>Words of before and after.</summary>
+    public abstract Comparing.CompareWords Comparing { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 

@@ -39,5 +39,5 @@ public static class FlightSimulator
         return new(s, recorder.ToLog(), truth, flown.DrainToImmutable());
     }
 
-    private const double LongestSec = 6 * 3600; // memory: six hours at 50 Hz are a million rows
+    private const double LongestSec = 12 * 3600; // memory: twelve hours at 50 Hz are two million rows
 }

@@ -2,6 +2,7 @@ using System.Text.RegularExpressions;
 using System.Xml.Linq;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Turns;
+using TrimFit.Pages;
 using TrimFit.Reporting;
 
 namespace TrimFit.Tests.Reporting;

@@ -326,7 +326,7 @@ public class FlightSimulatorTests
     {
         Assert.Equal("The scenario has no legs: add at least one [[leg]] with duration_s and power.",
             Assert.Throws<SimulationException>(() => FlightSimulator.Fly(new Scenario())).Message);
-        Assert.Equal("The legs last up to 50000 s; a flight may last 21600 s.",
+        Assert.Equal("The legs last up to 50000 s; a flight may last 43200 s.",
             Assert.Throws<SimulationException>(() => FlightSimulator.Fly(Calm(new FlightLeg { DurationSec = 50_000 }))).Message);
         Scenario deaf = Calm(new FlightLeg()) with { Sensors = new() { GyroHz = 0, GpsHz = 0, BarometerHz = 0, RpmHz = 0, ThrottleHz = 0, BrakesHz = 0 } };
         Assert.Equal("The scenario's sensors log nothing: give at least one of them a rate.",

@@ -363,6 +363,9 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             BrakeFeedbackShare = BrakeFeedback.Share(flight),
             DisturbanceRmsRadPerSec = noise.DisturbanceRms,
             DisturbanceTauSec = noise.DisturbanceTauSec,
+            Noise = noise,
+            GyroRowsPerSec = RowsPerSec(flight, FlightColumns.Gyro),
+            HeadingRowsPerSec = RowsPerSec(flight, FlightColumns.Heading),
             EffectiveSamples = covariance.EffectiveSamples,
             Condition = covariance.Condition,
             GyroBiasRadPerSec = gyroBias,
@@ -389,6 +392,9 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         filter.Run(noise);
         return shift;
     }
+
+    private static double RowsPerSec(FlightColumns flight, byte flag) =>
+        flight.UsedSec > 0 ? flight.Flags.Count(f => (f & flag) != 0) / flight.UsedSec : 0;
 
     private static double MeanThrust(FlightColumns flight)
     {

@@ -1,0 +1,14 @@
+namespace TrimFit.Pages;
+
+/// <summary>How a page lies on paper; screens do not care.</summary>
+public sealed record PageOptions
+{
+    /// <summary>Paper it is made for. Default A4; a printer with other paper scales it.</summary>
+    public PaperSize Paper { get; init; } = PaperSize.A4;
+
+    /// <summary>Wider than high.</summary>
+    public bool Landscape { get; init; }
+
+    /// <summary>Small print and narrow margins, for what must fit on one side.</summary>
+    public bool Compact { get; init; }
+}

@@ -1,0 +1,5 @@
+namespace TrimFit.Reporting.Documents;
+
+/// <summary>A paragraph.</summary>
+/// <param name="Text">Whole sentences.</param>
+public sealed record ParagraphBlock(string Text) : Block;
