@@ -1,5 +1,6 @@
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Pages;
 using TrimFit.Reporting;
@@ -10,11 +11,11 @@ namespace TrimFit.Cli;
 
 internal static class FitCommand
 {
-    public static int Run(IReadOnlyList<string> logs, string? rigPath, string? sheetPath, string? customerPath, bool forgetPlace, CommonChoices choices, TextWriter output, TextWriter error)
+    public static int Run(IReadOnlyList<string> logs, string? rigPath, string? sheetPath, string? cardPath, string? customerPath, bool forgetPlace, CommonChoices choices, TextWriter output, TextWriter error)
     {
         FitInputs inputs = FitInputs.Read(logs, rigPath, sheetPath, forgetPlace, choices);
         FitReport report = Fit(inputs.Import, (inputs.Rig, FitInputs.Source(inputs.RigFile)),
-            inputs.Sheet is FlightSheet sheet ? (sheet, FitInputs.Source(inputs.SheetFile!)) : null, inputs.Options);
+            inputs.Sheet is FlightSheet sheet ? (sheet, FitInputs.Source(inputs.SheetFile!)) : null, cardPath is null ? null : InputFiles.Card(cardPath), inputs.Options);
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.FitBrief(report, choices.Style) : ReportText.Fit(report, choices.Style),
             () => ReportJson.Fit(report),
@@ -32,9 +33,9 @@ internal static class FitCommand
 
     /// <summary>One flight from its files to its result.</summary>
     public static FitReport Fit(IReadOnlyList<string> logs, (Rig Rig, SourceFile File) machine, string? sheetPath, CommonChoices choices) =>
-        Fit(InputFiles.Flight(logs, choices, machine.Rig.Log), machine, sheetPath is null ? null : InputFiles.Sheet(sheetPath), choices.TrimOptions);
+        Fit(InputFiles.Flight(logs, choices, machine.Rig.Log), machine, sheetPath is null ? null : InputFiles.Sheet(sheetPath), null, choices.TrimOptions);
 
-    private static FitReport Fit(FlightImport import, (Rig Rig, SourceFile File) machine, (FlightSheet Sheet, SourceFile File)? sheet, TrimOptions options)
+    private static FitReport Fit(FlightImport import, (Rig Rig, SourceFile File) machine, (FlightSheet Sheet, SourceFile File)? sheet, CardPromise? promise, TrimOptions options)
     {
         if (sheet is (FlightSheet Sheet, SourceFile) given)
         {
@@ -47,7 +48,15 @@ internal static class FitCommand
             };
         }
         TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, machine.Rig, options, import.Legs.AsSpan());
-        return new FitReport { Analysis = analysis, Import = import, RigFile = machine.File, SheetFile = sheet?.File, Provenance = ProgramVersion.Provenance };
+        return new FitReport
+        {
+            Analysis = analysis,
+            Import = import,
+            RigFile = machine.File,
+            SheetFile = sheet?.File,
+            CardOutcome = promise is null ? null : CardOutcome.Of(promise, analysis),
+            Provenance = ProgramVersion.Provenance,
+        };
     }
 
     private static void WriteCustomerPage(string path, FitReport report, CommonChoices choices)

@@ -30,6 +30,8 @@ internal static class FitDocument
             Cautioned(document, a, numbers); // on the first screen; in a terminal the end is what people see
         if (figures)
             TurnPicture(document, a, numbers);
+        if (report.CardOutcome is Core.Planning.CardOutcome card)
+            document.Heading(words.Card.OutcomeTitle).Paragraph(words.Card.Outcome(card, numbers)).Paragraph(words.Card.NextLegs(card, numbers));
         Pull(document, a, brake, numbers);
         if (figures)
         {

@@ -37,6 +37,27 @@ public static class ReportDocuments
         return RigDocument.Build(report, Words.English, new Numbers(style), figures);
     }
 
+    /// <summary>The report of <c>compare</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
+    public static ReportDocument Compare(CompareReport report, ReportStyle style, bool figures)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
+    }
+
+    /// <summary>A test card.</summary>
+    /// <param name="report">The card.</param>
+    /// <param name="style">Units and culture.</param>
+    public static ReportDocument Card(CardReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return CardDocument.Build(report, Words.English, new Numbers(style));
+    }
+
     /// <summary>The page a workshop hands over.</summary>
     /// <param name="page">What goes into it; what is missing becomes a line to write on.</param>
     /// <param name="style">Units and culture.</param>
@@ -55,16 +76,5 @@ public static class ReportDocuments
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
         return CustomerDocument.Of(report, Words.English, new Numbers(style));
-    }
-
-    /// <summary>The report of <c>compare</c>.</summary>
-    /// <param name="report">The result.</param>
-    /// <param name="style">Units and culture.</param>
-    /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
-    public static ReportDocument Compare(CompareReport report, ReportStyle style, bool figures)
-    {
-        ArgumentNullException.ThrowIfNull(report);
-        ArgumentNullException.ThrowIfNull(style);
-        return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
     }
 }

@@ -15,23 +15,25 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
-    /// <summary>The job book.</summary>
-    public abstract JobWords Jobs { get; }
-
     /// <summary>Texts of the written report.</summary>
     public abstract ReportWords Report { get; }
 
     /// <summary>Texts of the customer's page.</summary>
     public abstract CustomerWords Customer { get; }
 
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 
-    /// <summary>Texts of the ground work.</summary>
-    public abstract GroundWords Ground { get; }
-
     /// <summary>Words of before and after.</summary>
     public abstract Comparing.CompareWords Comparing { get; }
+
+    /// <summary>The job book.</summary>
+    public abstract JobWords Jobs { get; }
 
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
