@@ -32,6 +32,9 @@ internal abstract record Words
     /// <summary>Words of before and after.</summary>
     public abstract Comparing.CompareWords Comparing { get; }
 
+    /// <summary>The job book.</summary>
+    public abstract JobWords Jobs { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
