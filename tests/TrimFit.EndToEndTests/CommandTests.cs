@@ -51,7 +51,7 @@ public class CommandTests
         Assert.NotEmpty(result.RootElement.GetProperty("verdict").GetProperty("reasons").EnumerateArray());
         // It asks for legs to be flown again, so the cautions of a card apply.
         string[] cautions = [.. result.RootElement.GetProperty("cautions").EnumerateArray().Select(c => c.GetProperty("code").GetString()!)];
-        Assert.Superset(new HashSet<string> { "hands-off", "engine-off", "eyes-out", "calm-air", "strong-pull", "twist", "estimate", "limits", "causes-first" }, [.. cautions]);
+        Assert.Subset(cautions.ToHashSet(), new HashSet<string> { "hands-off", "engine-off", "eyes-out", "calm-air", "strong-pull", "twist", "estimate", "limits", "causes-first" });
     }
 
     [Fact]
