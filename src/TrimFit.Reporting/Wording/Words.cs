@@ -126,7 +126,7 @@ internal abstract record Words
     public abstract string DrawingDescription(bool after);
 
     /// <summary>What the turn plot shows, for those who cannot see it.</summary>
-    public abstract string TurnPlotDescription(int points);
+    public abstract string TurnPlotDescription(int points, bool fitted);
 
     /// <summary>What the flight plot shows, for those who cannot see it.</summary>
     public abstract string FlightPlotDescription(double durationSec, Numbers numbers);
