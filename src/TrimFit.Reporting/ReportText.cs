@@ -28,9 +28,9 @@ public static class ReportText
     public static string Batch(BatchSummary summary, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(summary);
-        return TextRenderer.Render(BatchDocument.Build(summary, Words.English, new Numbers(style)));
+        return TextRenderer.Render(BatchDocument.Build(summary, style.Words, new Numbers(style)));
     }
 
     private static string Brief(ReportDocument document, ReportStyle style) =>
-        TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
+        TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + style.Words.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
 }
