@@ -66,6 +66,8 @@ internal static partial class GermanSayings
         ("inferred from the data", "aus den Daten erschlossen"),
         ("not known", "nicht bekannt"),
         ("16-bit number put right", "16-Bit-Zahl berichtigt"),
+        ("{0:s}; unit {1:s}", "{0}; Einheit {1}"),
+        ("{0:s}; unit {1:s}, 16-bit number put right", "{0}; Einheit {1}, 16-Bit-Zahl berichtigt"),
         ("standard atmosphere", "Standardatmosphäre"),
         ("IGC B record", "IGC-B-Satz"),
         ("IGC I record", "IGC-I-Satz"),

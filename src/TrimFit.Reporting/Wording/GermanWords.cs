@@ -13,8 +13,6 @@ namespace TrimFit.Reporting.Wording;
 /// <summary>The German texts. Its terms stand in DEVELOPERS.md, "German".</summary>
 internal sealed record GermanWords : Words
 {
-    private const string ToYourLeft = "zu Ihrer linken Seite hin", ToYourRight = "zu Ihrer rechten Seite hin";
-
     private static readonly Labels _labels = new()
     {
         ReportTitle = "Bericht zur Geradeausflug-Einstellung",
@@ -155,7 +153,7 @@ internal sealed record GermanWords : Words
 
     public override Labels Labels => _labels;
 
-    public override string Side(double rightPositive) => rightPositive < 0 ? "links" : "rechts";
+    public override string Side(double rightPositive) => GermanSides.Side(rightPositive);
 
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)
         ? numbers.Length(0)
@@ -479,7 +477,7 @@ internal sealed record GermanWords : Words
         if (rig.Propeller.RotationSign == 0)
             return now + "; die Drehmomente der Propeller heben sich auf, gegen sie ist also kein Versatz nötig.";
         return report.TorqueBalancingOffsetM is double needed
-            ? $"{now}; um das Drehmoment des Propellers im Horizontalflug auszugleichen, braucht es {Lateral(needed, numbers)}."
+            ? $"{now}; um das Drehmoment des Propellers im Horizontalflug auszugleichen, müsste er {Lateral(needed, numbers)} davon liegen."
             : now + "; wie viel das Drehmoment des Propellers braucht, lässt sich ohne Schub und Leistung nicht sagen.";
     }
 
@@ -555,21 +553,19 @@ internal sealed record GermanWords : Words
     /// <summary>What moves, how far, which way, as an instruction in the infinitive: never a part by half its name, always the side by the part.</summary>
     private static string Phrase(AdjustmentKind kind, double travel, string amount, string range)
     {
-        bool left = travel < 0;
-        string toYourSide = left ? ToYourLeft : ToYourRight, side = left ? "links" : "rechts";
-        string theDative = left ? "linken" : "rechten";
+        string toYourSide = GermanSides.ToYourSide(travel), theOne = GermanSides.Oblique(travel);
         return kind switch
         {
             AdjustmentKind.CarabinerPair => $"beide Karabiner der Tragegurte um {amount}{range} {toYourSide} verschieben",
-            AdjustmentKind.CarabinerOneSide => $"nur den {theDative} Karabiner der Tragegurte um {amount}{range} {toYourSide} verschieben",
+            AdjustmentKind.CarabinerOneSide => $"nur den {theOne} Karabiner der Tragegurte um {amount}{range} {toYourSide} verschieben",
             AdjustmentKind.BarSpacer => $"beide Aufhängearme mit ihren vorderen Aufhängepunkten des Gurtzeugs um {amount}{range} {toYourSide} verschieben",
             AdjustmentKind.HarnessFront => $"die vorderen Aufhängepunkte des Gurtzeugs um {amount}{range} {toYourSide} verschieben",
             AdjustmentKind.HarnessFrontRear => $"die vorderen und die hinteren Aufhängepunkte des Gurtzeugs um {amount}{range} {toYourSide} verschieben",
             AdjustmentKind.PowerUnit => $"die Antriebseinheit um {amount}{range} {toYourSide} verschieben",
             AdjustmentKind.EngineCant => $"die Schubachse des Motors um {amount}{range} im Grundriss so drehen, dass sie mehr {toYourSide} drückt",
-            AdjustmentKind.Ballast => $"{amount}{range} Ballast {side} am {theDative} Karabiner der Tragegurte anhängen",
-            AdjustmentKind.Trimmer => $"den {theDative} Trimmer um {amount}{range} weiter einstellen als den anderen, gezählt wie in der Aufzeichnung",
-            AdjustmentKind.BrakeLine => $"die {(left ? "linke" : "rechte")} Bremsleine um {amount}{range} kürzer machen als die andere",
+            AdjustmentKind.Ballast => $"{amount}{range} Ballast {GermanSides.Side(travel)} am {theOne} Karabiner der Tragegurte anhängen",
+            AdjustmentKind.Trimmer => $"den {theOne} Trimmer um {amount}{range} weiter einstellen als den anderen, gezählt wie in der Aufzeichnung",
+            AdjustmentKind.BrakeLine => $"die {GermanSides.Plain(travel)} Bremsleine um {amount}{range} kürzer machen als die andere",
         };
     }
 
@@ -578,7 +574,7 @@ internal sealed record GermanWords : Words
 
     /// <summary><c>14 mm (9 bis 20) zu Ihrer linken Seite hin</c>.</summary>
     private static string SignedRange(double m, ConfidenceInterval interval, Numbers numbers) =>
-        $"{numbers.Length(Math.Abs(m))} {Range(interval, TravelUnit.Meter, numbers)} {(m < 0 ? ToYourLeft : ToYourRight)}";
+        $"{numbers.Length(Math.Abs(m))} {Range(interval, TravelUnit.Meter, numbers)} {GermanSides.ToYourSide(m)}";
 
     /// <summary><c>(9 bis 20)</c>; with both sides named when the range spans zero.</summary>
     private static string Range(ConfidenceInterval interval, TravelUnit unit, Numbers numbers)
