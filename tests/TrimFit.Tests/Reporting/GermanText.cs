@@ -27,7 +27,7 @@ internal static partial class GermanText
     public static IEnumerable<string> Strings(object labels) =>
         labels.GetType().GetProperties(BindingFlags.Public | BindingFlags.Instance).Where(p => p.PropertyType == typeof(string) && p.GetIndexParameters().Length == 0).Select(p => (string)p.GetValue(labels)!);
 
-    /// <summary>What a reader of a page sees or hears.</summary>
+    /// <summary>What a reader of a page sees or hears, without the table of columns, whose roles and units are those of the command line.</summary>
     public static string OfPage(string html) => WebUtility.HtmlDecode(Tag().Replace(Unread().Replace(html, " "), " "));
 
     /// <summary>The words of a text, in lower case.</summary>
@@ -48,7 +48,7 @@ internal static partial class GermanText
     [GeneratedRegex(@"\b(?:links|rechts|linken?|rechten?)\b")]
     private static partial Regex Sides();
 
-    [GeneratedRegex("<style>.*?</style>|<script.*?</script>", RegexOptions.Singleline)]
+    [GeneratedRegex("<style>.*?</style>|<script.*?</script>|<h2[^>]*>(?:Spalten|Columns)</h2>.*?</table>", RegexOptions.Singleline)]
     private static partial Regex Unread();
 
     [GeneratedRegex("<[^>]*>")]
