@@ -153,6 +153,8 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override GroundWords Ground { get; } = new EnglishGroundWords();
+
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
     public override string Lateral(double m, Numbers numbers) => IsZero(m, numbers)
@@ -260,8 +262,18 @@ internal sealed record EnglishWords : Words
             ? "The hang check must then show the same as before: "
             : "The hang check must then show ";
         return $"First step: {Verb(adjustment.Kind)} {Phrase(adjustment.Kind, d, numbers.Travel(d, adjustment.Unit), "")}{seen}. "
-            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one. "
+            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one{HangCheckRange(adjustment, numbers)}. "
             + "Then fly again and fit again.";
+    }
+
+    /// <summary>How far the readings may be off, and the difference against a hang check before, which is known far better.</summary>
+    private static string HangCheckRange(AdjustmentReport a, Numbers numbers)
+    {
+        if (a.HangCheckPlusMinusKg is not double half || a.HangCheckDifferenceKg is not double more)
+            return "";
+        string within = $", each within {numbers.Mass(half)}";
+        return numbers.MassNumber(more) == numbers.MassNumber(0) ? within
+            : $"{within}; against a hang check before the step the {(more > 0 ? "right" : "left")} scale must gain {numbers.Mass(Math.Abs(more))} on the {(more > 0 ? "left" : "right")} one";
     }
 
     public override string Finding(Finding finding, Numbers numbers, TravelUnit unit = TravelUnit.Meter)

@@ -147,6 +147,8 @@ internal sealed record GermanWords : Words
         ProgramVersion = "TrimFit-Version",
     };
 
+    public override GroundWords Ground { get; } = new GermanGroundWords();
+
     public override Batch.BatchWords Batch { get; } = new Batch.GermanBatchWords();
 
     public override string Language => "de";
@@ -260,8 +262,18 @@ internal sealed record GermanWords : Words
             ? "Die Hängeprobe muss danach dasselbe zeigen wie vorher: "
             : "Die Hängeprobe muss danach zeigen: ";
         return $"Erster Schritt: {Phrase(adjustment.Kind, d, numbers.Travel(d, adjustment.Unit), "")}{seen}. "
-            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} auf der linken Waage und {numbers.Mass(adjustment.HangCheckRightKg)} auf der rechten. "
+            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} auf der linken Waage und {numbers.Mass(adjustment.HangCheckRightKg)} auf der rechten{HangCheckRange(adjustment, numbers)}. "
             + "Dann erneut fliegen und erneut auswerten.";
+    }
+
+    /// <summary>How far the readings may be off, and the difference against a hang check before, which is known far better.</summary>
+    private static string HangCheckRange(AdjustmentReport a, Numbers numbers)
+    {
+        if (a.HangCheckPlusMinusKg is not double half || a.HangCheckDifferenceKg is not double more)
+            return "";
+        string within = $", jede auf {numbers.Mass(half)} genau";
+        return numbers.MassNumber(more) == numbers.MassNumber(0) ? within
+            : $"{within}; gegenüber einer Hängeprobe vor dem Schritt muss die {GermanSides.Plain(more)} Waage {numbers.Mass(Math.Abs(more))} gegen die {GermanSides.Plain(-more)} gewinnen";
     }
 
     public override string Finding(Finding finding, Numbers numbers, TravelUnit unit = TravelUnit.Meter)

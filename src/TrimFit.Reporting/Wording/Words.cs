@@ -25,6 +25,9 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 
