@@ -39,7 +39,7 @@ internal static partial class GermanText
     [GeneratedRegex(@"Aufhängepunkt\w*\b(?! des Gurtzeugs)", RegexOptions.IgnoreCase)]
     private static partial Regex LoneHangPoint();
 
-    [GeneratedRegex(@"\b(?:Arm|Arme|Armen|Arms|Bügels?|Stange\w*)\b(?<!Bügels?)")]
+    [GeneratedRegex(@"\b(?:Arm|Arme|Armen|Arms|Stange\w*)\b")]
     private static partial Regex LoneBar();
 
     [GeneratedRegex(@"\bPods?\b", RegexOptions.IgnoreCase)]

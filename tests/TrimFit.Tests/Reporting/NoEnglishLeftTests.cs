@@ -1,14 +1,11 @@
 using System.Text.RegularExpressions;
-using TrimFit.Core.Analysis;
-using TrimFit.Core.Rigging;
 using TrimFit.Pages;
 using TrimFit.Reporting;
-using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Tests.Reporting;
 
 /// <summary>A German text holds no word of the English ones. The list is made, not written: every word of the English reports of the same flights,
-/// of all English findings, cautions and labels. What is the same in both languages stands in <see cref="_shared"/>, each word looked at.</summary>
+/// of everything the English words can say (<see cref="SpokenTexts"/>). What is the same in both languages stands in <see cref="_shared"/>, each word looked at.</summary>
 public partial class NoEnglishLeftTests
 {
     private static readonly ReportStyle _german = new() { Language = ReportLanguage.German };
@@ -16,8 +13,8 @@ public partial class NoEnglishLeftTests
     /// <summary>German words that are spelt as English ones.</summary>
     private static readonly string[] _shared =
     [
-        "an", "ballast", "band", "format", "hand", "in", "last", "likelihood", "logger", "maximum", "minus", "motor", "person", "pilot", "propeller", "propellers", "proportional",
-        "regression", "sank", "so", "start", "tandem", "test", "trimmer", "version", "was", "wind",
+        "all", "an", "ballast", "band", "format", "hand", "in", "last", "likelihood", "logger", "maximum", "minus", "motor", "name", "person", "pilot", "propeller", "propellers", "proportional",
+        "regression", "sank", "so", "start", "tandem", "tank", "test", "trimmer", "version", "warm", "was", "wind",
     ];
 
     /// <summary>Names, units and abbreviations that are no English words.</summary>
@@ -46,12 +43,7 @@ public partial class NoEnglishLeftTests
     }
 
     [Fact]
-    public void Findings_cautions_and_labels_have_no_English_word()
-    {
-        var numbers = new Numbers(_german);
-        Words german = Words.Of(ReportLanguage.German);
-        NoEnglish(Without(string.Join("\n", Vocabulary(german, numbers))));
-    }
+    public void Nothing_that_the_German_words_can_say_has_an_English_word() => NoEnglish(Without(string.Join("\n", SpokenTexts.Of(ReportLanguage.German))));
 
     [Fact]
     public void An_English_word_is_found() => Assert.Equal(["the", "thrust"], Left("Der Schub ist the thrust."));
@@ -86,7 +78,7 @@ public partial class NoEnglishLeftTests
     private static HashSet<string> EnglishVocabulary()
     {
         var style = new ReportStyle();
-        var texts = new List<string>(Vocabulary(Words.English, new Numbers(style)));
+        var texts = new List<string>(SpokenTexts.Of(ReportLanguage.English));
         foreach (string flight in BundledFlights.Names.Select(row => row.Data))
         {
             texts.Add(Without(ReportText.Fit(BundledFlights.Fit(flight), style)));
@@ -97,47 +89,11 @@ public partial class NoEnglishLeftTests
         return [.. texts.SelectMany(GermanText.Words)];
     }
 
-    private static IEnumerable<string> Vocabulary(Words words, Numbers numbers)
-    {
-        foreach (FindingCode code in Enum.GetValues<FindingCode>())
-        {
-            for (int i = 0; i < 10; i++)
-                yield return words.Finding(Finding.Of(code, i, 0.25, 0.75), numbers);
-            yield return words.Finding(Finding.Of(code), numbers);
-            yield return words.Finding(Finding.Of(code, 1, -1, -1, -1), numbers);
-        }
-        foreach (CautionCode code in Enum.GetValues<CautionCode>())
-            yield return words.Caution(code, numbers);
-        foreach (AdjustmentKind kind in Enum.GetValues<AdjustmentKind>())
-        {
-            yield return words.PartShort(kind);
-            yield return words.FirstStep(ReportFixture.Adjustment(kind), ReportFixture.Rig(), numbers);
-            yield return words.FirstStep(ReportFixture.Adjustment(kind, firstStep: 0), ReportFixture.Rig(), numbers);
-        }
-        foreach (VerdictCode code in Enum.GetValues<VerdictCode>())
-            yield return words.Verdict(code);
-        foreach (VerdictStrength strength in Enum.GetValues<VerdictStrength>())
-            yield return words.Strength(strength) + " " + words.StrengthWord(strength);
-        foreach (PowerSetting setting in Enum.GetValues<PowerSetting>())
-            yield return words.Setting(setting);
-        foreach (BalanceThrust thrust in new[] { BalanceThrust.Cruise, BalanceThrust.Full, BalanceThrust.Even, BalanceThrust.At(300) })
-            yield return words.AtPower(thrust, numbers);
-        foreach (PropellerRotation rotation in Enum.GetValues<PropellerRotation>())
-            yield return words.Propeller(rotation);
-        foreach (TwistDirection direction in Enum.GetValues<TwistDirection>())
-            yield return words.Twist(direction);
-        foreach (CruiseBasis basis in Enum.GetValues<CruiseBasis>())
-            yield return words.CruiseBasis(basis);
-        foreach (bool? agrees in new bool?[] { true, false, null })
-            yield return words.CrossCheck(agrees);
-        foreach (string label in GermanText.Strings(words.Labels))
-            yield return label;
-        yield return words.Batch.Title + " " + words.Batch.Note + " " + words.Batch.Answer(1, 1) + " " + words.Batch.Answer(3, 0) + " " + words.Batch.Answer(3, 2) + " " + words.Batch.Heads;
-    }
-
     [GeneratedRegex(@"(?<=^|\n)[#\s]*(?:Spalten|Columns)[ \t]*\r?\n.*?(?=\r?\n[ \t]*\r?\n(?![ \t]*\r?\n|[ \t]*\|)|$)", RegexOptions.Singleline)]
     private static partial Regex Columns();
 
-    [GeneratedRegex(@"--[a-z-]+(?: [a-z_]+=\S+)?|\b[a-z0-9]+_[a-z0-9_]+\b|flights\.(?:csv|parquet)|\b[0-9a-f]{64}\b")]
+    [GeneratedRegex(@"--[a-z-]+(?: [A-Za-z_-]+=\S+)?|\btrimfit [a-z]+(?: RIG)?\b|\b[a-z0-9]+_[a-z0-9_]+\b|\b[a-z_]+\.[a-z_]+\b|\[[a-z_]+\]|\b[0-9a-f]{64}\b"
+        + @"|\((?:clockwise|counter-clockwise|contra-rotating|direct|belt|gear|clutch|electric)\)" // words of the rig file behind the German ones
+        + @"|\b[a-z_]+ (?=\([A-Za-zäöüß ]+\))")] // words of the command line before the German ones
     private static partial Regex Typed();
 }
