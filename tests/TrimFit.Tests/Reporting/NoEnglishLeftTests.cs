@@ -94,6 +94,6 @@ public partial class NoEnglishLeftTests
 
     [GeneratedRegex(@"--[a-z-]+(?: [A-Za-z_-]+=\S+)?|\btrimfit [a-z]+(?: RIG)?\b|\b[a-z0-9]+_[a-z0-9_]+\b|\b[a-z_]+\.[a-z_]+\b|\[[a-z_]+\]|\b[0-9a-f]{64}\b"
         + @"|\((?:clockwise|counter-clockwise|contra-rotating|direct|belt|gear|clutch|electric)\)" // words of the rig file behind the German ones
-        + @"|\b[a-z_]+ (?=\([A-Za-zäöüß ]+\))")] // words of the command line before the German ones
+        + @"|\b(?:left|right|changing|launch|level|accelerator|always|gradually|suddenly|geometry|wing|trimmers|harness|propeller|ballast) (?=\([A-Za-zäöüß ]+\))")] // words of the command line before the German ones
     private static partial Regex Typed();
 }
