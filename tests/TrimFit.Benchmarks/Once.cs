@@ -1,7 +1,6 @@
 using System.Diagnostics;
 using System.Globalization;
 using DuckDB.NET.Data;
-using TrimFit.Core.Logs;
 using TrimFit.Core.Statistics;
 using TrimFit.Import;
 using TrimFit.Import.Csv;

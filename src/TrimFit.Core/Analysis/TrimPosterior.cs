@@ -149,7 +149,7 @@ internal sealed class TrimPosterior
             for (int k = 0; k < count; k++)
             {
                 (double constant, double slope, double curvature) = c.Draw(random);
-                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature);
+                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature, k);
                 values[k] = (best + (double.IsFinite(sd) ? sd * random.NextNormal() : 0)) * Math.Exp(ModelErrorLogSd * random.NextNormal());
             }
             directAlone.Add(SourceAlone.Of(evidence.Kind, values));
@@ -191,7 +191,7 @@ internal sealed class TrimPosterior
             }
             foreach (SensitivityEvidence evidence in direct)
             {
-                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k]);
+                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k], k);
                 double a = DrawFactor(best, sd, out double logProposal);
                 if (a > 0 && double.IsFinite(logWeight[k]))
                 {

@@ -149,6 +149,8 @@ internal sealed record EnglishWords : Words
 
     public override Batch.BatchWords Batch { get; } = new Batch.EnglishBatchWords();
 
+    public override Comparing.CompareWords Comparing { get; } = new Comparing.EnglishCompareWords();
+
     public override string Language => "en";
 
     public override Labels Labels => _labels;

@@ -31,6 +31,9 @@ internal abstract record Words
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 
+    /// <summary>Words of before and after.</summary>
+    public abstract Comparing.CompareWords Comparing { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
