@@ -45,6 +45,6 @@ public static class ReportDocuments
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
+        return CompareDocument.Build(report, style.Words, new Numbers(style), figures);
     }
 }

@@ -149,6 +149,8 @@ internal sealed record GermanWords : Words
 
     public override GroundWords Ground { get; } = new GermanGroundWords();
 
+    public override Comparing.CompareWords Comparing { get; } = new Comparing.GermanCompareWords();
+
     public override Batch.BatchWords Batch { get; } = new Batch.GermanBatchWords();
 
     public override string Language => "de";
