@@ -1,12 +1,14 @@
 using System.Collections.Immutable;
 using System.Reflection;
 using TrimFit.Core.Analysis;
+using TrimFit.Core.Comparing;
 using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Pages;
 using TrimFit.Reporting;
 using TrimFit.Reporting.Wording;
+using TrimFit.Tests.Comparing;
 
 namespace TrimFit.Tests.Reporting;
 
@@ -15,6 +17,8 @@ namespace TrimFit.Tests.Reporting;
 internal static class SpokenTexts
 {
     private const int MostCalls = 5000;
+
+    private static readonly Lazy<CompareReport[]> _comparisons = new(() => [.. Comparisons()]);
 
     /// <summary>Texts whose arguments need a whole result; documents of a result say them.</summary>
     public static IEnumerable<string> NotAskedFor(Words words) => Topics(words).SelectMany(t => Functions(t).Where(m => Arguments(m, words, new(new())) is null).Select(m => $"{t.GetType().BaseType!.Name}.{m.Name}"));
@@ -42,6 +46,8 @@ internal static class SpokenTexts
         }
         foreach (SheetKind kind in Enum.GetValues<SheetKind>())
             yield return GermanText.OfPage(GroundPage.Sheet(kind, ReportFixture.Rig(name: "7"), style));
+        foreach (CompareReport report in _comparisons.Value)
+            yield return GermanText.OfPage(ReportPage.Compare(report, style));
         foreach (AdjustmentKind kind in Enum.GetValues<AdjustmentKind>())
         {
             yield return words.FirstStep(ReportFixture.Adjustment(kind), ReportFixture.Rig(), numbers);
@@ -49,6 +55,22 @@ internal static class SpokenTexts
             yield return words.FirstStep(ReportFixture.Adjustment(kind, firstStep: 0), ReportFixture.Rig(), numbers);
         }
     }
+
+    /// <summary>Comparisons with each verdict and with three settings.</summary>
+    private static IEnumerable<CompareReport> Comparisons()
+    {
+        ComparedFlight Seven(double constant, double error, double slope = 0, double moved = 0) =>
+            MadeUpPair.Flight(moved == 0 ? "7" : "8", constant, error, slope, rig: moved == 0 ? null : MadeUpPair.Moved(moved), name: "9", curveError: 0.3);
+        ComparisonOptions known = MadeUpPair.Known(0.3, Core.Comparing.ChangedPart.Geometry), unknown = new() { WithNext = false };
+        yield return CompareReportTests.Report(known, Seven(-3, 0.1, -2), Seven(-1, 0.1, -2, -0.02)); // better
+        yield return CompareReportTests.Report(known, Seven(1, 0.1), Seven(3, 0.1, moved: 0.02)); // worse
+        yield return CompareReportTests.Report(MadeUpPair.Known(0), Seven(3, 0.1), Seven(0, 0.1, moved: 0.03)); // fixed
+        yield return CompareReportTests.Report(unknown, Seven(1.5, 0.9), Seven(1.2, 0.9, moved: 0.03)); // cannot tell
+        yield return CompareReportTests.Report(unknown, Seven(1.5, 0.1), Seven(1.5, 0.1)); // one setting
+        yield return CompareReportTests.Report(unknown, Seven(3, 0.1), Seven(1, 0.1, moved: 0.02), MadeUpPair.Flight("6", 0, 0.1, rig: MadeUpPair.Moved(0.04), name: "5")); // a trend
+    }
+
+    private static IEnumerable<CompareNotice> Notices() => Enum.GetValues<CompareNoticeCode>().SelectMany(code => new[] { CompareNotice.About(code, ["7", "8"], 0.3, 0.5, 0.01), CompareNotice.Of(code) });
 
     private static IEnumerable<object> Topics(Words words)
     {
@@ -97,6 +119,7 @@ internal static class SpokenTexts
             : type == typeof(BalanceThrust) ? [BalanceThrust.Cruise, BalanceThrust.Full, BalanceThrust.Even, BalanceThrust.At(300)]
             : type == typeof(Finding) ? [.. Findings()]
             : type == typeof(GroundFault) ? [.. Faults()]
+            : type == typeof(CompareNotice) ? [.. Notices()]
             : type == typeof(Complaint) ? [.. Complaints()]
             : null;
     }
@@ -132,7 +155,7 @@ internal static class SpokenTexts
             foreach (PullSince since in Enum.GetValues<PullSince>())
             {
                 foreach (OtherWing other in Enum.GetValues<OtherWing>())
-                    yield return new() { Side = side, When = when[^1], Since = since, Changed = [.. Enum.GetValues<ChangedPart>()], OtherWing = other };
+                    yield return new() { Side = side, When = when[^1], Since = since, Changed = [.. Enum.GetValues<Core.Ground.ChangedPart>()], OtherWing = other };
             }
         }
         yield return new();
