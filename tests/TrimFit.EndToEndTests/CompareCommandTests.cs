@@ -88,6 +88,36 @@ public class CompareCommandTests
         Assert.True(Assert.Single(result.RootElement.GetProperty("swap_backs").EnumerateArray()).GetProperty("agrees").GetBoolean());
     }
 
+    [Fact]
+    public void A_blind_card_seals_the_order_that_compare_opens_and_keeps_it_from_the_pilot()
+    {
+        using var folder = new TemporaryFolder();
+        BuiltProgram.Outcome card = BuiltProgram.Run(null, "card", "--rig", BuiltProgram.Sample("uncorrected-rig.toml"), "--minutes", "4", "--blind", folder["order.toml"], "--json", folder["card.json"]);
+        Assert.Equal((0, ""), (card.ExitCode, card.Error));
+        string commitment = Json(folder["card.json"]).RootElement.GetProperty("sealed_order").GetString()!;
+        string slip = File.ReadAllText(folder["order-helper.txt"]);
+        string[] order = [.. slip.Split('\n').Where(l => l.StartsWith("Before flight", StringComparison.Ordinal)).Select(l => l[^1..])];
+        Assert.True(order is ["A", "B", "B", "A"] or ["B", "A", "A", "B"]);
+        Assert.Contains(commitment, slip, StringComparison.Ordinal);
+        Assert.Contains(commitment, card.Output, StringComparison.Ordinal);
+        Assert.DoesNotContain("setting A", card.Output, StringComparison.Ordinal); // the slip's words for a flight
+        foreach (string name in new[] { "uncorrected-rig.toml", "balanced-rig.toml", "uncorrected.csv", "balanced.csv" })
+            folder.Write(name, File.ReadAllText(BuiltProgram.Sample(name)));
+        string list = folder.Write("trial.toml", $"""
+            changed = "geometry"
+            sealed_order = "order.toml"
+            [setups]
+            A = "uncorrected-rig.toml"
+            B = "balanced-rig.toml"
+            {string.Join('\n', order.Select(o => $"[[flight]]\nlogs = \"{(o == "A" ? "uncorrected" : "balanced")}.csv\""))}
+            """);
+        BuiltProgram.Outcome run = BuiltProgram.Run(null, "compare", list, "--json", folder["c.json"]);
+        Assert.Equal("", run.Error);
+        JsonElement opened = Json(folder["c.json"]).RootElement.GetProperty("sealed_order");
+        Assert.Equal(commitment, opened.GetProperty("commitment").GetString());
+        Assert.Equal(order, opened.GetProperty("setups").EnumerateArray().Select(x => x.GetString()));
+    }
+
     [Theory]
     [InlineData("trimfit: compare needs a list of flights, or --before LOG --before-rig RIG --after LOG --after-rig RIG. Try: trimfit compare --help\n", "compare")]
     [InlineData("trimfit: --changed: found \"wings\", expected geometry, wing, brake_lines, trimmers, harness, propeller, ballast.\n", "compare", "x.toml", "--changed", "wings")]

@@ -324,6 +324,8 @@ public enum FindingCode
     ClutchEngageAssumed,
     /// <summary>Thrust was taken from climb, W (climb + glide sink)/airspeed: standard error of a reading, N.</summary>
     ThrustFromClimb,
+    /// <summary>Thrust from the powers of the flight sheet: share of level flight, and 1 when climb gave it.</summary>
+    ThrustFromSheet,
     /// <summary>Thrust in flight by climb over thrust by the rig: ratio, its standard error, ratio by momentum theory (0 when unknown), 1 when they agree.</summary>
     ThrustScaleByClimb,
     /// <summary>No full thrust in the rig; this flight's climb gives one in flight: N, its standard error.</summary>

@@ -156,6 +156,7 @@ internal sealed record EnglishWords : Words
     public override Labels Labels => _labels;
 
     public override GroundWords Ground { get; } = new EnglishGroundWords();
+    public override CardWords Card { get; } = new EnglishCardWords();
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
@@ -369,6 +370,7 @@ internal sealed record EnglishWords : Words
             FindingCode.CurrentTakenAsPower => $"The log has a current without a voltage; it was taken as power at constant voltage, with full power at {Value(0, a => numbers.Plain(a, 0))} A. Log the voltage too.",
             FindingCode.ThrustFromMotorCurrent => $"Thrust was taken as proportional to motor current, with full power at {Value(0, a => numbers.Plain(a, 0))} A, the largest in the log.",
             FindingCode.ClutchEngageAssumed => $"The speed at which the clutch engages is not in the rig file; {Value(0, n => numbers.Plain(n * 60, 0))} rpm stands in, a quarter above the idle of the log. Give clutch_engage_rpm.",
+            FindingCode.ThrustFromSheet => $"The log says nothing about the engine, so thrust was taken from the powers on the flight sheet: level flight at {Value(0, numbers.Percent)} of full thrust, {(Sign(1) > 0 ? "by how the legs climbed" : "as is usual, since the climb of the legs does not tell")}.",
             FindingCode.ThrustFromClimb => $"The log says nothing about the engine, so thrust was taken from climb and glide sink, each reading good to {Value(0, n => numbers.Force(1.96 * n))}. Log rpm or throttle.",
             FindingCode.ThrustScaleByClimb => $"By its climb the machine has {Value(0, r => numbers.Plain(r, 2))} (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) times the thrust of the rig file"
                 + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is what momentum theory leaves of a static thrust in flight" : "")

@@ -183,6 +183,9 @@ internal static partial class GermanSayings
         ("The clock of {0} is taken to be {1:n} h behind that of {2}, as local time is; only so do the two overlap.", "Von der Uhr von {0} wird angenommen, dass sie der von {2} um {1} h nachgeht, wie Ortszeit es tut; nur so überschneiden sich beide."),
         ("{0}: taken from {1} ({2:n} Hz), not from {3}.", "{0}: kommt aus {1} ({2} Hz), nicht aus {3}."),
         // Flight sheet.
+        ("three quick throttle blips", "drei kurzen Gasstößen"),
+        ("a pause of the recorder", "einer Pause des Rekorders"),
+        ("The marks of the flight sheet are taken from {0:s}: {1:n} found, at {2} s.", "Die Marken des Flugprotokolls stammen aus {0}: {1} gefunden, bei {2} s."),
         ("The flight sheet is of {0}, the log of {1}: check that they belong together.", "Das Flugprotokoll ist vom {0}, die Aufzeichnung vom {1}: Prüfen Sie, ob beide zusammengehören."),
         ("The leg on line {0:n} of the flight sheet runs from mark {1:n} to mark {2:n}, which the log does not hold; it is left out.", "Der Abschnitt in Zeile {0} des Flugprotokolls reicht von Marke {1} bis Marke {2}, die in der Aufzeichnung nicht stehen; er ist ausgelassen."),
         ("The leg on line {0:n} of the flight sheet, {1:n} to {2:n} s, lies outside the log, which runs from {3:n} to {4:n} s; it is left out.", "Der Abschnitt in Zeile {0} des Flugprotokolls, {1} bis {2} s, liegt außerhalb der Aufzeichnung, die von {3} bis {4} s reicht; er ist ausgelassen."),

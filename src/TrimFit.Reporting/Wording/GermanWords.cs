@@ -151,6 +151,8 @@ internal sealed record GermanWords : Words
 
     public override Comparing.CompareWords Comparing { get; } = new Comparing.GermanCompareWords();
 
+    public override CardWords Card { get; } = new GermanCardWords();
+
     public override Batch.BatchWords Batch { get; } = new Batch.GermanBatchWords();
 
     public override string Language => "de";
@@ -371,6 +373,7 @@ internal sealed record GermanWords : Words
             FindingCode.ThrustFromMotorCurrent => $"Der Schub gilt als proportional zum Motorstrom, mit voller Leistung bei {Value(0, a => numbers.Plain(a, 0))} A, dem größten der Aufzeichnung.",
             FindingCode.ClutchEngageAssumed => $"Die Drehzahl, bei der die Kupplung greift, steht nicht in der Gerätedatei; {Value(0, n => numbers.Plain(n * 60, 0))} U/min vertreten sie, ein Viertel über dem Leerlauf der Aufzeichnung. Tragen Sie clutch_engage_rpm ein.",
             FindingCode.ThrustFromClimb => $"Die Aufzeichnung sagt nichts über den Motor, deshalb wurde der Schub aus Steigen und Gleitsinken gewonnen, jeder Wert auf {Value(0, n => numbers.Force(1.96 * n))} genau. Zeichnen Sie Drehzahl oder Gas auf.",
+            FindingCode.ThrustFromSheet => $"Die Aufzeichnung sagt nichts über den Motor, deshalb wurde der Schub aus den Leistungen des Flugprotokolls gewonnen: Horizontalflug bei {Value(0, numbers.Percent)} des vollen Schubs, {(Sign(1) > 0 ? "nach dem Steigen der Abschnitte" : "wie üblich, da das Steigen der Abschnitte nichts darüber sagt")}.",
             FindingCode.ThrustScaleByClimb => $"Nach seinem Steigen hat das Gerät das {Value(0, r => numbers.Plain(r, 2))}-Fache (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) des Schubs der Gerätedatei"
                 + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} bleibt nach der Impulstheorie von einem Standschub im Flug übrig" : "")
                 + (Sign(3) > 0 ? ". Der Schub der Gerätedatei wurde verwendet." : ". Der Schub der Gerätedatei wurde verwendet, aber prüfen Sie ihn zusammen mit Massen und Geschwindigkeiten."),

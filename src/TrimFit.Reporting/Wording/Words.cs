@@ -27,6 +27,8 @@ internal abstract record Words
 
     /// <summary>Texts of the ground work.</summary>
     public abstract GroundWords Ground { get; }
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
 
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }

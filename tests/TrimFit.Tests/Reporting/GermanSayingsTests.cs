@@ -79,6 +79,7 @@ public partial class GermanSayingsTests
     private static string Hole(string hole) => hole switch
     {
         _ when hole.Contains("because", StringComparison.Ordinal) => "nothing says otherwise",
+        "{what}" => "a pause of the recorder",
         _ when hole.Contains("why", StringComparison.Ordinal) => "the data do not decide it",
         _ when hole.Contains("Signals", StringComparison.Ordinal) => "turn rate",
         _ when hole.Contains("UnitBasis", StringComparison.Ordinal) => "from header",

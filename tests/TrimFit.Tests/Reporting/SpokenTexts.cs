@@ -3,12 +3,15 @@ using System.Reflection;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
 using TrimFit.Core.Ground;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Pages;
 using TrimFit.Reporting;
+using TrimFit.Reporting.Documents;
 using TrimFit.Reporting.Wording;
 using TrimFit.Tests.Comparing;
+using TrimFit.Tests.Planning;
 
 namespace TrimFit.Tests.Reporting;
 
@@ -46,6 +49,15 @@ internal static class SpokenTexts
         }
         foreach (SheetKind kind in Enum.GetValues<SheetKind>())
             yield return GermanText.OfPage(GroundPage.Sheet(kind, ReportFixture.Rig(name: "7"), style));
+        foreach (CardPlan plan in new[] { CardFixture.Plan, CardFixture.Phone, CardFixture.Ballast })
+        {
+            CardReport card = CardFixture.Report(plan) with { BlindCommitment = "7", Rig = CardFixture.Rig with { Name = "7" } };
+            yield return GermanText.OfPage(Page.Render(ReportDocuments.Card(card, style), new()));
+            yield return CardSheetText.Empty(card, style);
+            foreach (CardLeg leg in plan.Legs)
+                yield return words.Card.Say(leg, card.Rig, numbers);
+        }
+        yield return ReportText.HelperSlip(["7", "8"], "9", style);
         foreach (CompareReport report in _comparisons.Value)
             yield return GermanText.OfPage(ReportPage.Compare(report, style));
         foreach (AdjustmentKind kind in Enum.GetValues<AdjustmentKind>())
