@@ -155,6 +155,10 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override ReportWords Report { get; } = new EnglishReportWords();
+
+    public override CustomerWords Customer { get; } = new EnglishCustomerWords();
+
     public override GroundWords Ground { get; } = new EnglishGroundWords();
     public override CardWords Card { get; } = new EnglishCardWords();
 

@@ -153,6 +153,10 @@ internal sealed record GermanWords : Words
 
     public override CardWords Card { get; } = new GermanCardWords();
 
+    public override ReportWords Report { get; } = new GermanReportWords();
+
+    public override CustomerWords Customer { get; } = new GermanCustomerWords();
+
     public override Batch.BatchWords Batch { get; } = new Batch.GermanBatchWords();
 
     public override string Language => "de";

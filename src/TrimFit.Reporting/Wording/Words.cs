@@ -25,6 +25,12 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
+    /// <summary>Texts of the written report.</summary>
+    public abstract ReportWords Report { get; }
+
+    /// <summary>Texts of the customer's page.</summary>
+    public abstract CustomerWords Customer { get; }
+
     /// <summary>Texts of the ground work.</summary>
     public abstract GroundWords Ground { get; }
     /// <summary>Texts of test cards.</summary>

@@ -53,7 +53,8 @@ internal static class SpokenTexts
         {
             CardReport card = CardFixture.Report(plan) with { BlindCommitment = "7", Rig = CardFixture.Rig with { Name = "7" } };
             yield return GermanText.OfPage(Page.Render(ReportDocuments.Card(card, style), new()));
-            yield return CardSheetText.Empty(card, style);
+            foreach (string line in CardSheetText.Empty(card, style).Split('\n').Where(line => line.StartsWith('#') && !line.Split('{')[0].Contains('=', StringComparison.Ordinal)))
+                yield return line; // the others are keys and values
             foreach (CardLeg leg in plan.Legs)
                 yield return words.Card.Say(leg, card.Rig, numbers);
         }
