@@ -59,6 +59,11 @@ internal static class SpokenTexts
                 yield return words.Card.Say(leg, card.Rig, numbers);
         }
         yield return ReportText.HelperSlip(["7", "8"], "9", style);
+        foreach (double sign in new[] { -1.0, 1 })
+        {
+            FitReport fit = ReportFixture.Report(ReportFixture.Result(degPerSec: 2.1 * sign, rig: ReportFixture.Rig(name: "7")));
+            yield return GermanText.OfPage(Page.Render(ReportDocuments.Customer(ReportDocuments.CustomerOf(fit, style), style), new()));
+        }
         foreach (CompareReport report in _comparisons.Value)
             yield return GermanText.OfPage(ReportPage.Compare(report, style));
         foreach (AdjustmentKind kind in Enum.GetValues<AdjustmentKind>())

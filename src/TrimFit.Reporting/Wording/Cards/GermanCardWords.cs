@@ -34,7 +34,7 @@ internal sealed record GermanCardWords : CardWords
         "Fliegen Sie diese Karte viermal, wenn möglich an einem Tag, mit demselben Schirm, denselben Gurten, demselben Kraftstoff und derselben Luft.",
         "Ein Helfer stellt das Gerät vor jedem Flug auf A oder B, wie der Zettel sagt, macht dieselbe Arbeit, wenn nichts zu verstellen ist, macht die Hängeprobe ohne Sie und behält den Zettel.",
         "Sie fliegen, ohne zu wissen, welche es ist, und niemand sagt es Ihnen, bevor die Flüge verglichen sind.",
-        $"Nummer der versiegelten Reihenfolge: {commitment}. compare öffnet die Reihenfolge und zeigt dieselbe Nummer, wenn nichts geändert wurde.",
+        $"Nummer der versiegelten Reihenfolge: {commitment}. trimfit compare öffnet die Reihenfolge und zeigt dieselbe Nummer, wenn nichts geändert wurde.",
     ];
 
     public override IEnumerable<string> HelperSlip(IEnumerable<string> setups, string commitment) =>
