@@ -10,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommands.Create(output, error),
+            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error),
         };
         return root;
     }

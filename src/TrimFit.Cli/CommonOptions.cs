@@ -42,6 +42,15 @@ internal sealed class CommonOptions
         AddQuiet(command);
     }
 
+    /// <summary>For commands that answer in a few lines and write no report.</summary>
+    public void AddForAnswers(Command command)
+    {
+        command.Options.Add(_json);
+        command.Options.Add(_units);
+        command.Options.Add(_culture);
+        AddQuiet(command);
+    }
+
     public void AddForLogs(Command command)
     {
         command.Options.Add(_column);
@@ -115,7 +124,7 @@ internal sealed class CommonOptions
         }
     }
 
-    private static ColumnRule Column(string text)
+    internal static ColumnRule Column(string text)
     {
         int equals = text.IndexOf('=', StringComparison.Ordinal);
         if (equals <= 0 || equals == text.Length - 1)

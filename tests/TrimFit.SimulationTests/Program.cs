@@ -8,7 +8,8 @@ namespace TrimFit.SimulationTests;
 /// --minutes for each row, --flights-to a file with a line for each flight); `alarms` flies what may raise a false alarm (--flights, --only,
 /// --machine, --seed, --threads, --minutes); `timing` times fits (--hours at most); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `compare`
 /// the one of before and after (--pairs, --repeats, --swaps, --seed, --threads, --minutes, --fits); `card` that of test cards, `sheet` that of their
-/// sheets (--flights, --minutes of a card, --seed, --threads); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
+/// sheets (--flights, --minutes of a card, --seed, --threads); `ground N` runs the hang checks; `memory` that of the
+/// shop's memory (--shops, --flights, --seed, --minutes); `book` makes a job book of ten years (--out, --jobs, --flights); anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -23,6 +24,10 @@ internal static class Program
             return ShiftStudy.Run(args);
         if (args.Length > 0 && args[0] == "compare")
             return CompareStudy.Run(args);
+        if (args.Length > 0 && args[0] == "memory")
+            return MemoryStudy.Run(args);
+        if (args.Length > 0 && args[0] == "book")
+            return BookStudy.Run(args);
         if (args.Length > 0 && args[0] == "ground")
             return GroundStudy.Run(args.Length > 1 && int.TryParse(args[1], NumberStyles.None, CultureInfo.InvariantCulture, out int cases) && cases > 0 ? cases : 2000);
         if (args.Length > 0 && args[0] == "sheet")

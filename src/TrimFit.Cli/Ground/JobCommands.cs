@@ -2,13 +2,10 @@ using System.CommandLine;
 
 namespace TrimFit.Cli;
 
-/// <summary>The verbs of <c>job</c>.</summary>
+/// <summary>The verb <c>job checks</c>, with or without a job book.</summary>
 internal static class JobCommands
 {
-    public static Command Create(TextWriter output, TextWriter error) =>
-        new("job", "The work around the flight: complaint and checks.") { Checks(output, error) };
-
-    private static Command Checks(TextWriter output, TextWriter error)
+    public static Command Checks(TextWriter output, TextWriter error)
     {
         var side = new Option<string?>("--side") { Description = "Which way it pulls: left, right or changing.", HelpName = "SIDE" };
         var when = new Option<string[]>("--when") { Description = "When: launch, full_power, level, engine_off, accelerator; with commas or given more than once.", HelpName = "WHEN" };

@@ -12,7 +12,8 @@ internal enum SensitivitySources
     Torque = 1,
     Ballast = 2,
     Pair = 4,
-    All = Torque | Ballast | Pair,
+    Memory = 8,
+    All = Torque | Ballast | Pair | Memory,
 }
 
 /// <summary>A measured answer of the turn to a known shift: rate differences = a × (differences of turning offset), a = S times model error.</summary>

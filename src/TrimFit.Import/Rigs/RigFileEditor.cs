@@ -29,6 +29,21 @@ public static class RigFileEditor
         return text;
     }
 
+    /// <summary>The text with its hang check as comments: after a change it says where the weight sat before.</summary>
+    /// <param name="fileName">Name for messages; a folder in it is left out.</param>
+    /// <param name="text">A rig file that reads without faults.</param>
+    /// <exception cref="LogFormatException">The table is written in a form that cannot be edited line by line.</exception>
+    public static string WithoutHangCheck(string fileName, string text)
+    {
+        ArgumentNullException.ThrowIfNull(fileName);
+        ArgumentNullException.ThrowIfNull(text);
+        DocumentSyntax document = SyntaxParser.Parse(text.ReplaceLineEndings("\n"), fileName, validate: true);
+        string[] keys = [.. document.Tables.Where(t => t is TableSyntax && t.Name?.ToString().Trim() == "hang_check").SelectMany(t => t.Items).Select(i => i.Key!.ToString().Trim())];
+        foreach (string key in keys)
+            text = Edit(Path.GetFileName(fileName), text, "hang_check", key, null);
+        return text;
+    }
+
     /// <summary>Sets one key, or takes it out when the value is null; either way the earlier line stays as a comment.</summary>
     private static string Edit(string file, string text, string tableName, string key, string? value)
     {

@@ -42,6 +42,9 @@ internal abstract record Words
     /// <summary>Words of before and after.</summary>
     public abstract Comparing.CompareWords Comparing { get; }
 
+    /// <summary>The job book.</summary>
+    public abstract JobWords Jobs { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 
@@ -140,7 +143,7 @@ internal abstract record Words
     public abstract string DrawingDescription(bool after);
 
     /// <summary>What the turn plot shows, for those who cannot see it.</summary>
-    public abstract string TurnPlotDescription(int points);
+    public abstract string TurnPlotDescription(int points, bool fitted);
 
     /// <summary>What the flight plot shows, for those who cannot see it.</summary>
     public abstract string FlightPlotDescription(double durationSec, Numbers numbers);
