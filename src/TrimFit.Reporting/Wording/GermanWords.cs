@@ -153,6 +153,8 @@ internal sealed record GermanWords : Words
 
     public override CardWords Card { get; } = new GermanCardWords();
 
+    public override JobWords Jobs { get; } = new GermanJobWords();
+
     public override ReportWords Report { get; } = new GermanReportWords();
 
     public override CustomerWords Customer { get; } = new GermanCustomerWords();
