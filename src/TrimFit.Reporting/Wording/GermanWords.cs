@@ -546,8 +546,8 @@ internal sealed record GermanWords : Words
         ? "Das Gerät von oben gesehen: Mittellinie des Gestells, Schublinie, Karabiner der Tragegurte, Aufhängepunkte des Gurtzeugs und Schwerpunkt, jetzt (gefüllt) und nach dem gerundeten Weg (umrandet)."
         : "Das Gerät von oben gesehen: Mittellinie des Gestells, Schublinie, Karabiner der Tragegurte, Aufhängepunkte des Gurtzeugs und Schwerpunkt.";
 
-    public override string TurnPlotDescription(int points) =>
-        FormattableString.Invariant($"Drehrate über dem Schub: {points} Fenster des Flugs, der Anteil der Bremsen abgezogen, die angepasste Linie und ihr 95-%-Band.");
+    public override string TurnPlotDescription(int points, bool fitted) =>
+        FormattableString.Invariant($"Drehrate über dem Schub: {points} Fenster des Flugs, der Anteil der Bremsen abgezogen{(fitted ? ", die angepasste Linie und ihr 95-%-Band" : "; es ließ sich keine Linie anpassen")}.");
 
     public override string FlightPlotDescription(double durationSec, Numbers numbers) =>
         $"Schub, Bremsen und Drehrate über {numbers.Duration(durationSec)}; rechts ist positiv, ausgelassene Abschnitte sind schattiert, Balken sind die verwendeten Fenster.";
