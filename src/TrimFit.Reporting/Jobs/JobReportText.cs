@@ -9,8 +9,6 @@ namespace TrimFit.Reporting.Jobs;
 /// <summary>The job book as people read it: text for the terminal and Markdown, and the sentences of its actions.</summary>
 public static class JobReportText
 {
-    private static Words Words => Words.English;
-
     /// <summary>A job for the terminal.</summary>
     public static string Job(JobReport report, ReportStyle style) => TextRenderer.Render(JobDocuments.Job(report, style));
 
@@ -45,19 +43,21 @@ public static class JobReportText
     }
 
     /// <summary>Where the book is.</summary>
-    public static string BookAt(string path) => Line(Words.Jobs.BookAt(path));
+    public static string BookAt(string path, ReportStyle? style = null) => Line(Of(style).Jobs.BookAt(path));
 
     /// <summary>An export.</summary>
     public static string Exported(long job, string file, long bytes, ReportStyle style) => Line(style.Words.Jobs.Exported(job, file, bytes, new Numbers(style)));
 
     /// <summary>An import.</summary>
-    public static string Imported(long job, long numberThere) => Line(Words.Jobs.Imported(job, numberThere));
+    public static string Imported(long job, long numberThere, ReportStyle? style = null) => Line(Of(style).Jobs.Imported(job, numberThere));
 
     /// <summary>A delete.</summary>
-    public static string Deleted(long job, int flights, int files, bool roomGivenBack) => Line(Words.Jobs.Deleted(job, flights, files, roomGivenBack));
+    public static string Deleted(long job, int flights, int files, bool roomGivenBack, ReportStyle? style = null) => Line(Of(style).Jobs.Deleted(job, flights, files, roomGivenBack));
 
     /// <summary>Asks before a delete.</summary>
-    public static string AskDelete(JobRecord job) => Words.Jobs.AskDelete(job);
+    public static string AskDelete(JobRecord job, ReportStyle? style = null) => Of(style).Jobs.AskDelete(job);
+
+    private static Words Of(ReportStyle? style) => style?.Words ?? Words.English;
 
     private static string Line(string text) => TextRenderer.Safe(text) + "\n";
 }
