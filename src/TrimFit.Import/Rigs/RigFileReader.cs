@@ -418,7 +418,7 @@ internal sealed class RigTables
         Reading? left = Scaled(_hangCheck, "left_kg", Ranges.HangKg, ReadingSpread.ScaleKg, 1);
         Reading? right = Scaled(_hangCheck, "right_kg", Ranges.HangKg, ReadingSpread.ScaleKg, 1);
         Reading? spacing = Scaled(_hangCheck, "carabiner_spacing_mm", Ranges.SpacingMm, ReadingSpread.SpacingMm, 1 / MmPerM);
-        if (_hangCheck.Exists && (_hangCheck.Item("left_kg") is null || _hangCheck.Item("right_kg") is null))
+        if (_hangCheck.HasItems && (_hangCheck.Item("left_kg") is null || _hangCheck.Item("right_kg") is null))
             _faults.Add(_hangCheck.Line, $"[hang_check] without {(_hangCheck.Item("left_kg") is null ? "left_kg" : "right_kg")}", "the readings of both scales, kg", "Add the missing reading or leave the table out.");
         var hangs = ImmutableArray.CreateBuilder<HangReading>();
         AddHangs(hangs, "left_kg", "right_kg", exchanged: false);

@@ -10,6 +10,9 @@ internal sealed class TableReader(TomlTable? table, string name, FaultList fault
     /// <summary>Whether the file has the table at all.</summary>
     public bool Exists => table is not null;
 
+    /// <summary>Whether the table holds a key; one whose readings were all taken out again is as good as none.</summary>
+    public bool HasItems => table?.Items.Count > 0;
+
     /// <summary>The table in messages, such as <c>[mass]</c>.</summary>
     public string Label => table?.Label ?? $"[{name}]";
 

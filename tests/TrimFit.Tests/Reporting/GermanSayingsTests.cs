@@ -16,7 +16,9 @@ public partial class GermanSayingsTests
         Notice(), Said(), RowReason(), SpanReason(), TrackReason(), Basis(),
     ];
 
-    public static TheoryData<string> Sources => [.. new[] { "TrimFit.Core", "TrimFit.Import" }
+    private static readonly string[] _projects = ["TrimFit.Core", "TrimFit.Import"];
+
+    public static TheoryData<string> Sources => [.. _projects
         .SelectMany(project => Directory.EnumerateFiles(Path.Combine(RepositoryRoot.Path, "src", project), "*.cs", SearchOption.AllDirectories))
         .Where(path => _places.Any(p => p.IsMatch(File.ReadAllText(path))))
         .Select(path => Path.GetRelativePath(RepositoryRoot.Path, path).Replace('\\', '/')).Order(StringComparer.Ordinal)];

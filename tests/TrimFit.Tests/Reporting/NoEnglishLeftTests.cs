@@ -52,7 +52,7 @@ public partial class NoEnglishLeftTests
     public void No_word_stands_in_the_lists_for_nothing()
     {
         HashSet<string> english = _english.Value;
-        Assert.Empty(_shared.Concat(_names).Where(w => !english.Contains(w)));
+        Assert.DoesNotContain(_shared.Concat(_names), w => !english.Contains(w));
         Assert.Equal(_shared.Length + _names.Length, _shared.Concat(_names).Distinct().Count());
     }
 

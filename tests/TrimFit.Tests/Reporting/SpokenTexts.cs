@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Reflection;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
