@@ -10,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Rig(output), Synth(error), Batch(output, error),
+            Inspect(output), Fit(output, error), Rig(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error),
         };
         return root;
     }
@@ -40,14 +40,16 @@ internal static class CommandTree
         return command;
     }
 
-    private static Command Rig(TextWriter output)
+    private static Command Rig(TextWriter output, TextWriter error)
     {
         var rig = new Argument<string>("RIG") { Description = "The machine: a rig file (TOML)." };
         var common = new CommonOptions();
         var command = new Command("rig", "Statics and adjustment table of a machine without a flight.") { rig };
         common.AddForPeople(command);
         common.AddSeed(command);
-        command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, common.Choices(parsed), output));
+        var ground = new MeasureOptions();
+        ground.AddTo(command);
+        command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, ground.Choices(parsed), common.Choices(parsed), output, error));
         return command;
     }
 

@@ -38,6 +38,15 @@ internal sealed class CommonOptions
         AddQuiet(command);
     }
 
+    /// <summary>For commands that answer in a few lines and write no report.</summary>
+    public void AddForAnswers(Command command)
+    {
+        command.Options.Add(_json);
+        command.Options.Add(_units);
+        command.Options.Add(_culture);
+        AddQuiet(command);
+    }
+
     public void AddForLogs(Command command)
     {
         command.Options.Add(_column);

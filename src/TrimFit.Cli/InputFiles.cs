@@ -35,6 +35,27 @@ internal static class InputFiles
         return (FlightSheetReader.ReadFile(path), Source(path));
     }
 
+    /// <summary>The bytes of a file.</summary>
+    public static byte[] Bytes(string path)
+    {
+        MustExist(path);
+        return Readable(Path.GetFileName(path), () => File.ReadAllBytes(path));
+    }
+
+    /// <summary>A file to read from.</summary>
+    public static FileStream Open(string path)
+    {
+        MustExist(path);
+        return Readable(Path.GetFileName(path), () => File.OpenRead(path));
+    }
+
+    /// <summary>A flight sheet, read and checked, with its bytes.</summary>
+    public static Jobs.KeptFile SheetBytes(string path)
+    {
+        _ = Sheet(path);
+        return new(Core.Workshop.InputRecord.Sheet, Path.GetFileName(path), Bytes(path));
+    }
+
     public static string Text(string path)
     {
         MustExist(path);

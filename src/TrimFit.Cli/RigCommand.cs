@@ -6,9 +6,14 @@ namespace TrimFit.Cli;
 
 internal static class RigCommand
 {
-    public static int Run(string path, CommonChoices choices, TextWriter output)
+    public static int Run(string path, MeasureChoices ground, CommonChoices choices, TextWriter output, TextWriter error)
     {
+        if (ground.Measure)
+            return MeasureCommand.Write(path, ground, choices, output, error);
+        if (ground.Moved is not null)
+            return MeasureCommand.Compare(path, ground, choices, output, error);
         (Rig rig, SourceFile file) = InputFiles.Rig(path);
+        MeasureCommand.Sheets(rig, ground, choices);
         var report = new RigSheetReport { Rig = rig, Statics = RigReporter.Of(rig, choices.Seed ?? 1), RigFile = file, Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output,
             () => choices.Quiet ? ReportText.RigBrief(report, choices.Style) : ReportText.Rig(report, choices.Style),

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.Text;
 using TrimFit.Import;
+using TrimFit.Jobs;
 using TrimFit.Simulation;
 
 namespace TrimFit.Cli;
@@ -45,7 +46,7 @@ internal static class TrimFitProgram
             error.WriteLine("trimfit: " + e.Message);
             return ExitCode.CommandLine;
         }
-        catch (Exception e) when (e is LogFormatException or ScenarioFormatException or SimulationException)
+        catch (Exception e) when (e is LogFormatException or JobBookException or ScenarioFormatException or SimulationException)
         {
             error.WriteLine(e.Message);
             return ExitCode.Input;

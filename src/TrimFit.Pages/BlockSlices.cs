@@ -17,6 +17,7 @@ internal static class BlockSlices
         StepsBlock b => StepsSlice.Create(b),
         ChecksBlock b => ChecksSlice.Create(b),
         FieldsBlock b => FieldsSlice.Create(b),
+        DrawnReadingsBlock b => DrawnReadingsSlice.Create(b),
         SignaturesBlock b => SignaturesSlice.Create(b),
         TableBlock b => TableSlice.Create(b),
         FigureBlock b => FigureSlice.Create(b),

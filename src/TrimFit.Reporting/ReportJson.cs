@@ -62,7 +62,7 @@ public static class ReportJson
             },
             Assumptions = Assumptions(a.Assumptions),
             SpansLeftOut = [.. a.Fit.SpansLeftOut.Select(x => new SpanJson(Number(x.StartSec), Number(x.EndSec), x.Reason))],
-            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. Findings(a.Warnings)],
+            Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. GroundReports.Faults(a.RigReport.GroundFaults), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
         };
         return JsonSerializer.Serialize(json, _context.FitJson) + "\n";
@@ -111,10 +111,11 @@ public static class ReportJson
             TwistStiffnessNmPerRad = Number(r.TwistStiffnessNmPerRad),
             TorqueBalancingMm = Number(r.TorqueBalancingOffsetM, MmPerM),
             HangCheck = new(Number(r.HangCheckLeftKg), Number(r.HangCheckRightKg)),
+            HangCheckMeasured = GroundReports.Measured(r),
             At = [.. r.At.Select(RigAt)],
             Adjustments = [.. r.Adjustments.Select(RigAdjustment)],
             Assumptions = Assumptions(report.Rig.Assumptions()),
-            Warnings = Findings(r.Findings),
+            Warnings = [.. Findings(r.Findings), .. GroundReports.Faults(r.GroundFaults)],
             Cautions = CautionList(Wording.Cautions.For(Wording.Cautions.PlacesOf(r.Adjustments.Select(x => x.Kind)))),
         };
         return JsonSerializer.Serialize(json, _context.RigJson) + "\n";
@@ -372,6 +373,6 @@ public static class ReportJson
     private static MessageJson[] Findings(ImmutableArray<Finding> findings, TravelUnit unit = TravelUnit.Meter) =>
         [.. findings.Select(f => new MessageJson(Snake.Of(f.Code.ToString()), Words.Finding(f, Numbers.Invariant, unit)))];
 
-    private static MessageJson[] CautionList(IEnumerable<CautionCode> codes) =>
+    internal static MessageJson[] CautionList(IEnumerable<CautionCode> codes) =>
         [.. codes.Select(c => new MessageJson(Wording.Cautions.CodeOf(c), Words.Caution(c, Numbers.Invariant)))];
 }

@@ -1,5 +1,6 @@
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 
 namespace TrimFit.Core.Analysis;
 
@@ -11,7 +12,8 @@ internal enum SensitivitySources
     Torque = 1,
     Ballast = 2,
     Pair = 4,
-    All = Torque | Ballast | Pair,
+    Memory = 8,
+    All = Torque | Ballast | Pair | Memory,
 }
 
 /// <summary>A measured answer of the turn to a known shift: rate differences = a × (differences of turning offset), a = S times model error.</summary>
@@ -26,7 +28,8 @@ internal abstract class SensitivityEvidence
     /// <param name="constant">The draw's turn without thrust, rad/s.</param>
     /// <param name="slope">The draw's growth per full thrust.</param>
     /// <param name="curvature">The draw's curvature.</param>
-    public abstract (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature);
+    /// <param name="draw">The draw's number: evidence with an unknown of its own draws through that unknown's values in turn.</param>
+    public abstract (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature, int draw);
 
     /// <summary>Legs of this flight with a known CG shift.</summary>
     public sealed class OfBallast(FitDraws fit, double thrustFraction) : SensitivityEvidence
@@ -35,7 +38,7 @@ internal abstract class SensitivityEvidence
 
         public override string Kind => "ballast";
 
-        public override (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature)
+        public override (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature, int draw)
         {
             RigValues shifted = rig with { PostureM = rig.PostureM + (ProbeM * rig.SuspendedKg / rig.PilotKg) };
             double thrust = thrustFraction * rig.FullThrustN;
@@ -49,26 +52,37 @@ internal abstract class SensitivityEvidence
     public sealed class OfPair : SensitivityEvidence
     {
         private readonly KnownChange _change;
-        private readonly double[] _information;
+        private readonly double[][] _information; // one for each value of the flight scatter
+        private readonly double[] _logRoot;       // half the logarithm of its determinant
 
         public OfPair(KnownChange change)
         {
             _change = change;
-            int m = change.ThrustFractions.Length;
-            double[] covariance = [.. change.Covariance];
-            double mean = 0;
-            for (int i = 0; i < m; i++)
-                mean += covariance[(i * m) + i] / m;
-            for (int i = 0; i < m; i++)
-                covariance[(i * m) + i] += 1e-4 * mean; // three powers of two coefficients and a shrunk curve are nearly dependent
-            _information = SmallCovariance.TryInvert(covariance, m) ?? throw new ArgumentException("has no usable covariance", nameof(change));
+            int m = change.ThrustFractions.Length, nodes = change.ScatterVariances.Length;
+            _information = new double[nodes][];
+            _logRoot = new double[nodes];
+            for (int g = 0; g < nodes; g++)
+            {
+                double[] covariance = [.. change.OwnCovariance.Select(v => v + change.ScatterVariances[g])];
+                double mean = 0;
+                for (int i = 0; i < m; i++)
+                    mean += change.OwnCovariance[(i * m) + i] / m;
+                for (int i = 0; i < m; i++)
+                    covariance[(i * m) + i] += 1e-4 * mean; // three powers of two coefficients and a shrunk curve are nearly dependent
+                _information[g] = SmallCovariance.TryInvert(covariance, m) ?? throw new ArgumentException("has no usable covariance", nameof(change));
+                if (!SmallCholesky.Factor(covariance, m))
+                    throw new ArgumentException("has no usable covariance", nameof(change));
+                for (int i = 0; i < m; i++)
+                    _logRoot[g] -= Math.Log(covariance[(i * m) + i]);
+            }
         }
 
         public override string Kind => "pair";
 
-        public override (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature)
+        public override (double Best, double Sd, double LogPeak) Best(in RigValues rig, double yawRatio, double constant, double slope, double curvature, int draw)
         {
-            int m = _change.ThrustFractions.Length;
+            int m = _change.ThrustFractions.Length, node = draw % _information.Length;
+            double[] weight = _information[node];
             Span<double> gain = stackalloc double[m];
             Span<double> difference = stackalloc double[m];
             RigValues moved = _change.Move(rig);
@@ -83,15 +97,15 @@ internal abstract class SensitivityEvidence
             {
                 for (int j = 0; j < m; j++)
                 {
-                    double p = _information[(i * m) + j];
+                    double p = weight[(i * m) + j];
                     information += gain[i] * p * gain[j];
                     score += gain[i] * p * difference[j];
                     quadratic += difference[i] * p * difference[j];
                 }
             }
             if (!(information > 0))
-                return (0, double.PositiveInfinity, -0.5 * quadratic);
-            return (score / information, 1 / Math.Sqrt(information), -0.5 * (quadratic - (score * score / information)));
+                return (0, double.PositiveInfinity, _logRoot[node] - (0.5 * quadratic));
+            return (score / information, 1 / Math.Sqrt(information), _logRoot[node] - (0.5 * (quadratic - (score * score / information))));
         }
     }
 

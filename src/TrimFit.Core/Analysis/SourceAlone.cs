@@ -11,7 +11,7 @@ namespace TrimFit.Core.Analysis;
 internal sealed record SourceAlone(string Kind, double Median, double LogSd, double PositiveShare, ConfidenceInterval Interval95)
 {
     /// <summary>The words of sources, in the order a finding numbers them.</summary>
-    private static readonly string[] _kinds = ["prior", "torque", "ballast", "pair", "user"];
+    private static readonly string[] _kinds = ["prior", "torque", "ballast", "pair", "user", ShopMemory.Kind];
 
     public static SourceAlone Of(string kind, double[] values)
     {

@@ -15,6 +15,9 @@ public sealed record TrimOptions
     /// <summary>Other flights of the same machine with a part moved by a known amount; none by default.</summary>
     public ImmutableArray<KnownChange> KnownChanges { get; init => field = value.IsDefault ? [] : value; } = [];
 
+    /// <summary>What the workshop's own jobs say about this wing's sensitivity; null without a job book.</summary>
+    public ShopMemory? ShopMemory { get; init; }
+
     /// <summary>Seed of the posterior's draws; the same seed gives the same result.</summary>
     public ulong Seed { get; init; } = 1;
 

@@ -21,7 +21,7 @@ internal sealed class TrimPosterior
     private static readonly double _yawRatioLogSd = Math.Log(3) / 1.96;
 
     /// <summary>Model error of every source but the user's, log-sd (model page section 3).</summary>
-    private const double ModelErrorLogSd = 0.25;
+    internal const double ModelErrorLogSd = 0.25;
 
     /// <summary>Gates of the torque source (model page section 3).</summary>
     private const double SameSignShare = 0.975, PositiveShare = 0.995, LargestLogSd = 0.5;
@@ -149,11 +149,18 @@ internal sealed class TrimPosterior
             for (int k = 0; k < count; k++)
             {
                 (double constant, double slope, double curvature) = c.Draw(random);
-                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature);
+                (double best, double sd, _) = evidence.Best(rigs[k], yaw[k], constant, slope, curvature, k);
                 values[k] = (best + (double.IsFinite(sd) ? sd * random.NextNormal() : 0)) * Math.Exp(ModelErrorLogSd * random.NextNormal());
             }
             directAlone.Add(SourceAlone.Of(evidence.Kind, values));
         }
+
+        // The workshop's memory is log-normal, so with its model error it joins the prior, unless this flight's own evidence speaks against it.
+        ShopMemory? memory = allowed.HasFlag(SensitivitySources.Memory) ? options.ShopMemory : null;
+        MemoryConflict? against = memory is null ? null : MemoryConflict.Of(memory, userMedian, userLogSd, torque ? torqueAlone : null, directAlone, ConflictP);
+        (double ownLogMedian, double ownLogSd) = (logMedian, logSd);
+        if (memory is not null && against is null)
+            (logMedian, logSd) = Combine(logMedian, logSd, memory.RadPerSecPerM, Math.Sqrt((memory.LogSd * memory.LogSd) + (ModelErrorLogSd * ModelErrorLogSd)));
 
         var logWeight = new double[count];
         var sensitivity = new double[count];
@@ -191,7 +198,7 @@ internal sealed class TrimPosterior
             }
             foreach (SensitivityEvidence evidence in direct)
             {
-                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k]);
+                (double best, double sd, double peak) = evidence.Best(rigs[k], yaw[k], constants[k], slopes[k], curvatures[k], k);
                 double a = DrawFactor(best, sd, out double logProposal);
                 if (a > 0 && double.IsFinite(logWeight[k]))
                 {
@@ -247,7 +254,9 @@ internal sealed class TrimPosterior
         bool conflict = torque && p < ConflictP;
         if (conflict)
             findings.Add(Finding.Of(FindingCode.SensitivityConflict, p, c.Slope / (Math.Exp(logMedian) * QuantileType7.Of(g1, 0.5))));
-        var settled = new SourceAlone("prior", Math.Exp(logMedian), logSd, 1, new ConfidenceInterval());
+        if (against is not null)
+            findings.Add(Finding.Of(FindingCode.ShopMemoryConflict, SourceAlone.IndexOf(against.Kind), against.Ratio, against.P));
+        var settled = new SourceAlone("prior", Math.Exp(ownLogMedian), ownLogSd, 1, new ConfidenceInterval());
         SourceAlone[] together = [settled, .. torque ? [torqueAlone] : Array.Empty<SourceAlone>(), .. directAlone];
         foreach ((SourceAlone first, SourceAlone second, double clash) in SourceAlone.Clashes(together, ConflictP))
         {
@@ -259,6 +268,8 @@ internal sealed class TrimPosterior
         sources.Add(LogNormalSource("prior", Math.Log(PriorMedian), PriorLogSd, used: true));
         if (userMedian > 0)
             sources.Add(LogNormalSource("user", Math.Log(userMedian), userLogSd, used: true));
+        if (memory is not null)
+            sources.Add(new(ShopMemory.Kind, memory.RadPerSecPerM, memory.Interval95, against is null));
         if (c.SlopeKnown && plausible && positive > count / 2)
             sources.Add(new("torque", torqueAlone.Median, torqueAlone.Interval95, torque));
         sources.AddRange(directAlone.Select(d => new SensitivitySource(d.Kind, d.Median, d.Interval95, true)));

@@ -67,7 +67,7 @@ public sealed record SensitivityReport
 }
 
 /// <summary>One source of the sensitivity.</summary>
-/// <param name="Kind">prior, torque, pair, ballast, user.</param>
+/// <param name="Kind">prior, torque, pair, ballast, user, shop_memory.</param>
 /// <param name="RadPerSecPerM">Its median, (rad/s)/m.</param>
 /// <param name="Interval95">Its 95 % interval by itself.</param>
 /// <param name="Used">Whether it entered the posterior.</param>
@@ -336,4 +336,6 @@ public enum FindingCode
     RatioUnbounded,
     /// <summary>Measurements of the turn that were out of line with the rest and count less: how many, of how many.</summary>
     TurnOutliers,
+    /// <summary>This wing behaves otherwise than the workshop's others, so their memory is not used: number of the source that says so (1 torque, 2 ballast, 3 pair, 4 user), it over the memory, p.</summary>
+    ShopMemoryConflict,
 }

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using TrimFit.Core.Ground;
 
 namespace TrimFit.Core.Rigging;
 
@@ -137,6 +138,18 @@ public sealed record RigPropeller
     /// <summary>Engine revolutions per propeller revolution; default 1.</summary>
     public double ReductionRatio { get; init; } = 1;
 
+    /// <summary>Which way the crank turns, seen from behind; null when not given.</summary>
+    public PropellerRotation? CrankRotation { get; init; }
+
+    /// <summary>Whether gears between crank and propeller reverse the rotation; default yes: one pair of outside gears.</summary>
+    public bool GearReverses { get; init; } = true;
+
+    /// <summary>Engine revolutions per propeller revolution, counted by hand; null when not counted.</summary>
+    public double? CountedReduction { get; init; }
+
+    /// <summary>Engine revolutions per propeller revolution as written in the file; null when not given.</summary>
+    public double? GivenReduction { get; init; }
+
     /// <summary>What the rpm of this rig and its logs counts.</summary>
     public RpmMeaning RpmIs { get; init; } = RpmMeaning.Propeller;
 
@@ -236,6 +249,15 @@ public sealed record RigHangCheck
 
     /// <summary>Distance between the carabiners during the check, m; null is the rig's own.</summary>
     public Reading? CarabinerSpacingM { get; init; }
+
+    /// <summary>The single hangs; empty when the file gives one number a side.</summary>
+    public ImmutableArray<HangReading> Hangs { get; init => field = value.IsDefault ? [] : value; } = [];
+
+    /// <summary>Readings while the pilot leans to the right, which shows that the scales are not exchanged; null when not done.</summary>
+    public HangReading? LeanRight { get; init; }
+
+    /// <summary>The single hangs, or the two numbers as one.</summary>
+    public ImmutableArray<HangReading> AllHangs => Hangs.IsEmpty ? [new HangReading(LeftKg.Value, RightKg.Value)] : Hangs;
 }
 
 /// <summary>The wing.</summary>

@@ -40,6 +40,12 @@ public sealed record RigReport
     public required double HangCheckLeftKg { get; init; }
     /// <summary>Readings of two hanging scales to expect now, kg: right.</summary>
     public required double HangCheckRightKg { get; init; }
+    /// <summary>The hang check; null without one.</summary>
+    public Ground.HangCheckResult? HangCheck { get; init; }
+    /// <summary>CG offset that tape and weighing give without the hang check; null when not asked for.</summary>
+    public Ground.LateralGeometry? Tape { get; init; }
+    /// <summary>What the hang check contradicts.</summary>
+    public ImmutableArray<Ground.GroundFault> GroundFaults { get; init; } = [];
     /// <summary>CG offset that would balance the torque at cruise thrust, m; null without torque.</summary>
     public double? TorqueBalancingOffsetM { get; init; }
     /// <summary>Things to say about the rig.</summary>

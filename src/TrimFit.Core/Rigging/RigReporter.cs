@@ -67,6 +67,9 @@ public static class RigReporter
                 ? RigStatics.TorqueBalancingOffset(values.RotationSign * propulsion.FullTorqueNm * AssumedCruiseFraction, mass,
                     RigStatics.Solve(values, AssumedCruiseFraction * full).HangBackRad)
                 : null,
+            HangCheck = Ground.RigHang.Of(rig),
+            Tape = Ground.LateralGeometry.Of(rig),
+            GroundFaults = Ground.EntryChecks.OfHangCheck(rig),
             Findings = findings,
         };
     }

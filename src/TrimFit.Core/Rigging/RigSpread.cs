@@ -1,3 +1,4 @@
+using TrimFit.Core.Ground;
 using TrimFit.Core.Statistics;
 
 namespace TrimFit.Core.Rigging;
@@ -10,6 +11,7 @@ public sealed class RigSpread
 
     private readonly Rig _rig;
     private readonly Propulsion _propulsion;
+    private readonly HangCheckResult? _hang;
 
     /// <summary>Prepares a rig.</summary>
     public RigSpread(Rig rig)
@@ -17,6 +19,7 @@ public sealed class RigSpread
         ArgumentNullException.ThrowIfNull(rig);
         _rig = rig;
         _propulsion = Propulsion.Of(rig);
+        _hang = RigHang.Of(rig);
         Nominal = Build(static reading => reading.Value, _propulsion.FullThrustN, _propulsion.TorqueArmM, stiffnessFactor: 1, hangCheckError: 0);
     }
 
@@ -77,26 +80,16 @@ public sealed class RigSpread
             FullThrustN = thrust,
             TorqueArmM = torqueArm,
         };
-        return _rig.HangCheck is RigHangCheck check ? WithHangCheck(values, check, hangCheckError) : values;
+        return _hang is null ? values : WithHangCheck(values, hangCheckError);
     }
 
-    /// <summary>A hang check that is better than the tape replaces the geometry's CG offset: the pilot's seat takes up the difference.</summary>
-    private static RigValues WithHangCheck(RigValues values, RigHangCheck check, double standardNormal)
+    /// <summary>The hang check gives the CG offset in place of tape and seat: the pilot's seat, which nobody measured, takes up the difference.</summary>
+    /// <remarks>Not averaged with the geometry: a straight seat is an assumption, and averaging would pull every check towards it (DEVELOPERS.md, "Ground checks").
+    /// A draw is one more seating, so it scatters by the check's own error and by one seating.</remarks>
+    private RigValues WithHangCheck(RigValues values, double standardNormal)
     {
-        (double offset, double sd) = HangCheckOffset(values, check);
-        double wanted = offset + (sd * standardNormal);
+        double wanted = _hang!.OffsetM + (_hang.NextFlightSdM * standardNormal);
         double postureShift = (wanted - values.CgOffsetM) * values.SuspendedKg / values.PilotKg;
         return values with { PostureM = values.PostureM + postureShift };
-    }
-
-    /// <summary>e = s (F_R - F_L)/(2 W) from two hanging scales, and its standard deviation, m.</summary>
-    internal static (double Offset, double StandardDeviation) HangCheckOffset(in RigValues values, RigHangCheck check)
-    {
-        double spacing = check.CarabinerSpacingM?.Value ?? values.CarabinerSpacingM;
-        double sum = check.LeftKg.Value + check.RightKg.Value;
-        double offset = spacing * (check.RightKg.Value - check.LeftKg.Value) / (2 * sum);
-        double scaleSd = Math.Sqrt((check.LeftKg.StandardDeviation * check.LeftKg.StandardDeviation)
-            + (check.RightKg.StandardDeviation * check.RightKg.StandardDeviation));
-        return (offset, spacing * scaleSd / (2 * sum));
     }
 }

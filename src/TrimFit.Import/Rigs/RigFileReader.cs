@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using TrimFit.Core.Ground;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Import.Toml;
@@ -58,7 +59,7 @@ internal sealed class RigTables
     };
 
     private readonly FaultList _faults;
-    private readonly TableReader _root, _machine, _mass, _propeller, _carabiners, _hangPoints, _hangCheck, _brakes, _weighing, _wing, _limits, _log;
+    private readonly TableReader _root, _machine, _mass, _propeller, _carabiners, _hangPoints, _hangCheck, _brakes, _weighing, _thrustTest, _wing, _limits, _log;
 
     public RigTables(TomlTable root, FaultList faults)
     {
@@ -72,6 +73,7 @@ internal sealed class RigTables
         _hangCheck = Table("hang_check");
         _brakes = Table("brakes");
         _weighing = Table("weighing");
+        _thrustTest = Table("thrust_test");
         _wing = Table("wing");
         _limits = Table("limits");
         _log = Table("log");
@@ -96,7 +98,7 @@ internal sealed class RigTables
         ImmutableDictionary<AdjustmentKind, AdjustmentLimit> limits = Limits();
         LogSettings log = Log();
 
-        TableReader[] tables = [_machine, _mass, _propeller, _carabiners, _hangPoints, _hangCheck, _brakes, _weighing, _wing];
+        TableReader[] tables = [_machine, _mass, _propeller, _carabiners, _hangPoints, _hangCheck, _brakes, _weighing, _thrustTest, _wing];
         foreach (TableReader table in tables)
             table.ReportUnknown(key => tables.FirstOrDefault(other => other != table && other.Known.Contains(key))?.Label.Trim('[', ']'));
         _root.ReportUnknown(key => tables.FirstOrDefault(other => other.Known.Contains(key))?.Label.Trim('[', ']'));
@@ -191,6 +193,14 @@ internal sealed class RigTables
             _faults.Add(_propeller.LineOf("power_uncertainty_percent"), "power_uncertainty_percent beside a shaft_power_kw with its own spread", "one of the two", "Leave power_uncertainty_percent out.");
         Reading? thrust = Scaled(_propeller, "static_thrust_n", Ranges.ThrustN, ReadingSpread.Thrust, 1);
         Reading? density = Scaled(_propeller, "static_thrust_air_density", Ranges.AirDensity, ReadingSpread.None, 1);
+        if (PulledThrust() is (Reading pulled, double testDensity))
+        {
+            if (_propeller.Item("static_thrust_n") is not null)
+                _faults.Add(_propeller.LineOf("static_thrust_n"), "static_thrust_n beside [thrust_test]", "one of the two", "Leave static_thrust_n out; the pull gives it.");
+            if (_propeller.Item("static_thrust_air_density") is not null)
+                _faults.Add(_propeller.LineOf("static_thrust_air_density"), "static_thrust_air_density beside [thrust_test]", "one of the two", "Leave it out; temperature and height of the test give it.");
+            (thrust, density) = (pulled, Reading.Measured(testDensity));
+        }
         Reading? fullPower = Scaled(_propeller, "full_power_rpm", Ranges.Rpm, ReadingSpread.None, 1 / SecondsPerMinute);
         Reading? hangBack = Scaled(_propeller, "hang_back_deg", Ranges.HangBackDeg, ReadingSpread.AngleDeg, Math.PI / 180);
         Reading? cant = Scaled(_propeller, "cant_deg", Ranges.CantDeg, ReadingSpread.AngleDeg, Math.PI / 180);
@@ -201,6 +211,9 @@ internal sealed class RigTables
             ("clutch", PropellerDrive.Clutch), ("electric", PropellerDrive.Electric)) ?? PropellerDrive.Unknown;
         Reading? clutch = Scaled(_propeller, "clutch_engage_rpm", Ranges.Rpm, ReadingSpread.None, 1 / SecondsPerMinute);
         Reading? ratio = Scaled(_propeller, "reduction_ratio", Ranges.ReductionRatio, ReadingSpread.None, 1);
+        PropellerRotation? crank = _propeller.Word("crank_rotation", ("clockwise", PropellerRotation.Clockwise), ("counter-clockwise", PropellerRotation.CounterClockwise));
+        bool gearReverses = Flag(_propeller, "gear_reverses") ?? true;
+        double? counted = CountedReduction();
         RpmMeaning rpmIs = _propeller.Word("rpm_is", ("propeller", RpmMeaning.Propeller), ("engine", RpmMeaning.Engine),
             ("electrical", RpmMeaning.Electrical)) ?? RpmMeaning.Propeller;
         double? polePairs = _propeller.Number("pole_pairs", Ranges.PolePairs);
@@ -208,7 +221,7 @@ internal sealed class RigTables
             _faults.Add(_propeller.LineOf("pole_pairs"), $"{_propeller.Item("pole_pairs")!.Found} for pole_pairs", "a whole number", "Count the magnets and divide by two.");
         if (rpmIs == RpmMeaning.Electrical && _propeller.Item("pole_pairs") is null)
             _faults.Add(_propeller.LineOf("rpm_is"), "rpm_is = \"electrical\" without pole_pairs", "the motor's pole pairs", "Add pole_pairs: the number of magnets divided by two.");
-        if (rpmIs == RpmMeaning.Engine && _propeller.Item("reduction_ratio") is null && drive != PropellerDrive.Direct)
+        if (rpmIs == RpmMeaning.Engine && _propeller.Item("reduction_ratio") is null && _propeller.Item("crank_turns") is null && drive != PropellerDrive.Direct)
             _faults.Add(_propeller.LineOf("rpm_is"), "rpm_is = \"engine\" without reduction_ratio", "engine turns per propeller turn", "Add reduction_ratio, or drive = \"direct\" when the propeller sits on the crankshaft.");
         Reading? kv = Scaled(_propeller, "motor_kv", Ranges.MotorKv, ReadingSpread.None, 1 / SecondsPerMinute);
         ImmutableArray<(double Throttle, double Thrust)> table = ThrottleThrust();
@@ -234,11 +247,52 @@ internal sealed class RigTables
             ThrottleThrust = table,
             Drive = drive,
             ClutchEngageRevPerSec = clutch?.Value,
-            ReductionRatio = ratio?.Value ?? assumed.ReductionRatio,
+            ReductionRatio = ratio?.Value ?? counted ?? assumed.ReductionRatio,
+            GivenReduction = ratio?.Value,
+            CountedReduction = counted,
+            CrankRotation = crank,
+            GearReverses = gearReverses,
             RpmIs = rpmIs,
             PolePairs = (int?)polePairs,
             MotorRevPerSecPerVolt = kv?.Value,
         };
+    }
+
+    /// <summary>Crank turns over propeller turns, counted with the plug out.</summary>
+    private double? CountedReduction()
+    {
+        double? crank = _propeller.Number("crank_turns", Ranges.Turns), propeller = _propeller.Number("propeller_turns", Ranges.Turns);
+        if ((_propeller.Item("crank_turns") is null) != (_propeller.Item("propeller_turns") is null))
+        {
+            string missing = crank is null ? "propeller_turns without crank_turns" : "crank_turns without propeller_turns";
+            _faults.Add(_propeller.LineOf(crank is null ? "propeller_turns" : "crank_turns"), missing, "both counts", "Add the missing count.");
+        }
+        return crank / propeller;
+    }
+
+    /// <summary>Thrust off a scale in the tether, and the density of the air it was pulled in.</summary>
+    private (Reading Thrust, double Density)? PulledThrust()
+    {
+        Reading? pull = Scaled(_thrustTest, "pull_kg", Ranges.PullKg, ReadingSpread.Thrust, 1);
+        double? temperature = _thrustTest.Number("temperature_c", Ranges.TemperatureC), height = _thrustTest.Number("height_m", Ranges.HeightM);
+        double rope = _thrustTest.Number("rope_angle_deg", Ranges.RopeAngleDeg) ?? 0;
+        string[] missing = [.. new[] { "pull_kg", "temperature_c", "height_m" }.Where(key => _thrustTest.Item(key) is null)];
+        if (_thrustTest.Exists && missing.Length > 0)
+            _faults.Add(_thrustTest.Line, $"[thrust_test] without {string.Join(" and ", missing)}", "pull, air temperature and height above the sea", "Add the missing reading or leave the table out.");
+        if (pull is not { } p || temperature is not double t || height is not double h)
+            return null;
+        double newtonsPerKg = StaticThrust.FromPull(1, double.DegreesToRadians(rope));
+        return (Reading.Measured(p.Value * newtonsPerKg, p.StandardDeviation * newtonsPerKg), StaticThrust.AirDensity(t, h));
+    }
+
+    private bool? Flag(TableReader table, string key)
+    {
+        if (table.Item(key) is not TomlItem item)
+            return null;
+        if (item.Value is bool flag)
+            return flag;
+        _faults.Add(item.Line, $"{item.Found} for {key}", "true or false", $"Write {key} = false, without quotes.");
+        return null;
     }
 
     private ImmutableArray<(double Throttle, double Thrust)> ThrottleThrust()
@@ -306,6 +360,8 @@ internal sealed class RigTables
         Reading? share = Scaled(_hangPoints, "front_share", Ranges.Share, ReadingSpread.Share, 1);
         Reading? front = Scaled(_hangPoints, "front_offset_mm", Ranges.LateralMm, ReadingSpread.LateralMm, 1 / MmPerM);
         Reading? rear = Scaled(_hangPoints, "rear_offset_mm", Ranges.LateralMm, ReadingSpread.LateralMm, 1 / MmPerM);
+        front = Pair("front", front);
+        rear = Pair("rear", rear);
         Reading? strap = Scaled(_weighing, "rear_strap_kg", Ranges.RearStrapKg, ReadingSpread.ScaleKg, 1);
         if (strap is { } r)
         {
@@ -333,6 +389,28 @@ internal sealed class RigTables
         };
     }
 
+    /// <summary>Mean place of a left and a right harness hang point; null without them.</summary>
+    private Reading? Pair(string which, Reading? offset)
+    {
+        string leftKey = $"{which}_left_mm", rightKey = $"{which}_right_mm", offsetKey = $"{which}_offset_mm";
+        Reading? left = Scaled(_hangPoints, leftKey, Ranges.CarabinerMm, ReadingSpread.LateralMm, 1 / MmPerM);
+        Reading? right = Scaled(_hangPoints, rightKey, Ranges.CarabinerMm, ReadingSpread.LateralMm, 1 / MmPerM);
+        if (_hangPoints.Item(leftKey) is null && _hangPoints.Item(rightKey) is null)
+            return offset;
+        if (_hangPoints.Item(leftKey) is null || _hangPoints.Item(rightKey) is null)
+            _faults.Add(_hangPoints.Line, $"[hang_points] with only one of {leftKey} and {rightKey}", "both harness hang points of the pair", "Add the missing reading.");
+        if (offset is not null)
+            _faults.Add(_hangPoints.LineOf(offsetKey), $"{offsetKey} beside {leftKey} and {rightKey}", "one of the two", $"Leave {offsetKey} out; the two places give it.");
+        if (left is not { } l || right is not { } r)
+            return null;
+        if (l.Value >= r.Value)
+        {
+            _faults.Add(_hangPoints.LineOf(leftKey), $"{Millimeters(l)} for {leftKey} and {Millimeters(r)} for {rightKey}", "the left one left of the right one", "Positive is to the seated pilot's right, so the left one is usually negative; swap the two or the sign.");
+            return null;
+        }
+        return Reading.Measured((l.Value + r.Value) / 2, Math.Sqrt((l.StandardDeviation * l.StandardDeviation) + (r.StandardDeviation * r.StandardDeviation)) / 2);
+    }
+
     private RigHangCheck? HangCheck()
     {
         Reading? left = Scaled(_hangCheck, "left_kg", Ranges.HangKg, ReadingSpread.ScaleKg, 1);
@@ -340,7 +418,49 @@ internal sealed class RigTables
         Reading? spacing = Scaled(_hangCheck, "carabiner_spacing_mm", Ranges.SpacingMm, ReadingSpread.SpacingMm, 1 / MmPerM);
         if (_hangCheck.Exists && (_hangCheck.Item("left_kg") is null || _hangCheck.Item("right_kg") is null))
             _faults.Add(_hangCheck.Line, $"[hang_check] without {(_hangCheck.Item("left_kg") is null ? "left_kg" : "right_kg")}", "the readings of both scales, kg", "Add the missing reading or leave the table out.");
-        return left is null || right is null ? null : new() { LeftKg = left.Value, RightKg = right.Value, CarabinerSpacingM = spacing };
+        var hangs = ImmutableArray.CreateBuilder<HangReading>();
+        AddHangs(hangs, "left_kg", "right_kg", exchanged: false);
+        AddHangs(hangs, "exchanged_left_kg", "exchanged_right_kg", exchanged: true);
+        Reading? leanLeft = Scaled(_hangCheck, "lean_right_left_kg", Ranges.HangKg, ReadingSpread.ScaleKg, 1);
+        Reading? leanRight = Scaled(_hangCheck, "lean_right_right_kg", Ranges.HangKg, ReadingSpread.ScaleKg, 1);
+        if ((_hangCheck.Item("lean_right_left_kg") is null) != (_hangCheck.Item("lean_right_right_kg") is null))
+            _faults.Add(_hangCheck.Line, "one reading of the lean to the right", "lean_right_left_kg and lean_right_right_kg", "Add the missing reading.");
+        return left is null || right is null ? null : new()
+        {
+            LeftKg = left.Value,
+            RightKg = right.Value,
+            CarabinerSpacingM = spacing,
+            Hangs = hangs.ToImmutable(),
+            LeanRight = leanLeft is { } l && leanRight is { } r ? new HangReading(l.Value, r.Value) : null,
+        };
+    }
+
+    /// <summary>Hangs whose left and right readings belong together: two lists of one length, or two plain numbers with the scales exchanged.</summary>
+    private void AddHangs(ImmutableArray<HangReading>.Builder hangs, string leftKey, string rightKey, bool exchanged)
+    {
+        double[] left = Numbers(leftKey), right = Numbers(rightKey);
+        if (exchanged && left.Length != right.Length)
+        {
+            _faults.Add(_hangCheck.LineOf(left.Length > 0 ? leftKey : rightKey), $"{left.Length} readings for {leftKey} and {right.Length} for {rightKey}", "one of each for every hang", "Add the missing reading.");
+            return;
+        }
+        // Lists of different length, or a number with its spread, stay as the one mean that they are.
+        if (left.Length != right.Length || (!exchanged && left.Length < 2))
+            return;
+        for (int i = 0; i < left.Length; i++)
+            hangs.Add(new(left[i], right[i], exchanged));
+    }
+
+    private double[] Numbers(string key)
+    {
+        if (_hangCheck.Item(key) is not TomlItem item || Scaled(_hangCheck, key, Ranges.HangKg, ReadingSpread.ScaleKg, 1) is not Reading whole)
+            return [];
+        return item.Value switch
+        {
+            TomlList list => [.. list.Items.OfType<double>()],
+            double => [whole.Value],
+            _ => [],
+        };
     }
 
     private RigWing Wing()
@@ -507,6 +627,11 @@ internal sealed class RigTables
         public static readonly NumberRange FigureOfMerit = new(0.2, 1, "", "A figure of merit lies below 1; good propellers reach 0.75.");
         public static readonly NumberRange Share = new(0, 1, "", "A share is a fraction; 80 % is 0.8.");
         public static readonly NumberRange ReductionRatio = new(0.5, 10, "", "Give engine turns per propeller turn.");
+        public static readonly NumberRange Turns = new(0.5, 200, "turns", "Count whole turns, ten of the crank or more.");
+        public static readonly NumberRange PullKg = new(5, 500, "kg", "Give what the scale in the rope shows, kg.");
+        public static readonly NumberRange TemperatureC = new(-60, 60, "°C", "Give the air's temperature in degrees Celsius.");
+        public static readonly NumberRange HeightM = new(-500, 6000, "m", "Give the height above the sea in metres.");
+        public static readonly NumberRange RopeAngleDeg = new(-20, 20, "deg", "The rope should pull along the thrust axis, within 20 degrees.");
         public static readonly NumberRange PolePairs = new(1, 60, "", "Count the magnets and divide by two.");
         public static readonly NumberRange MotorKv = new(1, 5000, "rpm/V", "Give revolutions per minute and volt.");
         public static readonly NumberRange WingAreaM2 = new(5, 80, "m²", "Give the flat area in square metres.");

@@ -49,6 +49,7 @@ internal static class FitDocument
         document.Heading(labels.Warnings);
         document.List([
             .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
+            .. a.RigReport.GroundFaults.Select(f => words.Ground.Fault(f, numbers)),
             .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
         document.Cautions(Cautions.Of(a), numbers);
         return document.Build($"{labels.ReportTitle}: {a.Rig.Name}", string.Join(", ", report.Import.Diagnostics.Files.Select(f => f.Name)));

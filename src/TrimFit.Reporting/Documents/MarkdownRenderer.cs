@@ -43,6 +43,11 @@ internal static class MarkdownRenderer
                     foreach (FieldItem item in fields.Items)
                         text.Append("- ").Append(Escape(item.Name)).Append(": ").Append(Escape(item.Value ?? TextRenderer.Line)).Append('\n');
                     break;
+                case DrawnReadingsBlock drawn:
+                    text.Append("### ").Append(Escape(drawn.Title)).Append("\n\n").Append(Escape(drawn.Text)).Append('\n');
+                    foreach (ReadingRow row in drawn.Rows)
+                        text.Append("- ").Append(Escape(row.Name)).Append(": ").AppendJoin(' ', Enumerable.Repeat(Escape(TextRenderer.Line), row.Cells)).Append('\n');
+                    break;
                 case SignaturesBlock signatures:
                     foreach (string name in signatures.Names)
                         text.Append("- ").Append(Escape(name)).Append(": ").Append(Escape(TextRenderer.Line)).Append('\n');

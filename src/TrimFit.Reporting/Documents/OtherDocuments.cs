@@ -41,8 +41,13 @@ internal static class RigDocument
         RigTables.At(document, report.Statics, numbers);
         RigTables.Adjustments(document, report.Statics, numbers);
         FitDocument.AssumptionTable(document, report.Rig.Assumptions(), numbers);
+        if (report.Statics.HangCheck is not null)
+        {
+            document.Heading(words.Ground.Labels.HangCheck);
+            document.Paragraph(words.Ground.HangCheck(report.Statics.HangCheck, report.Statics.Tape, numbers));
+        }
         document.Heading(l.Warnings);
-        document.List(report.Statics.Findings.Select(f => words.Finding(f, numbers)));
+        document.List([.. report.Statics.GroundFaults.Select(f => words.Ground.Fault(f, numbers)), .. report.Statics.Findings.Select(f => words.Finding(f, numbers))]);
         document.Cautions(Cautions.For(Cautions.PlacesOf(report.Statics.Adjustments.Select(a => a.Kind))), numbers);
         return document.Build($"{l.RigTitle}: {report.Rig.Name}", report.RigFile.Name);
     }

@@ -50,6 +50,12 @@ internal static class TextRenderer
                     foreach (FieldItem item in fields.Items)
                         Wrap(text, $"{Safe(item.Name)}: {Safe(item.Value ?? Line)}", "", "  ");
                     break;
+                case DrawnReadingsBlock drawn:
+                    text.Append('\n').Append(Safe(drawn.Title)).Append('\n');
+                    Wrap(text, Safe(drawn.Text), "", "");
+                    foreach (ReadingRow row in drawn.Rows)
+                        Wrap(text, $"{Safe(row.Name)} ({Safe(row.Key)}): {string.Join(' ', Enumerable.Repeat("________", row.Cells))}", "- ", "  ");
+                    break;
                 case SignaturesBlock signatures:
                     foreach (string name in signatures.Names)
                         Wrap(text, $"{Safe(name)}: {Line}", "", "  ");

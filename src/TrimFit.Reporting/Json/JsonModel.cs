@@ -51,6 +51,7 @@ internal sealed record RigJson
     public required double? TwistStiffnessNmPerRad { get; init; }
     public required double? TorqueBalancingMm { get; init; }
     public required HangCheckJson HangCheck { get; init; }
+    public required HangResultJson? HangCheckMeasured { get; init; }
     public required RigAtJson[] At { get; init; }
     public required RigAdjustmentJson[] Adjustments { get; init; }
     public required AssumptionJson[] Assumptions { get; init; }

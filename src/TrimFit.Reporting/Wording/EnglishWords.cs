@@ -149,7 +149,11 @@ internal sealed record EnglishWords : Words
 
     public override string Language => "en";
 
+    public override JobWords Jobs { get; } = new EnglishJobWords();
+
     public override Labels Labels => _labels;
+
+    public override GroundWords Ground { get; } = new EnglishGroundWords();
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
@@ -279,6 +283,7 @@ internal sealed record EnglishWords : Words
             FindingCode.RotationConflict => $"The pull grows to the {Side(Sign(0))} with power, but the rig file predicts the other side in {Value(1, numbers.Percent)} of what is possible. Check first the propeller's rotation (stand behind, look the way it flies), then the signs of gyro and steering, then the thrust line.",
             FindingCode.SensitivityConflict => $"The growth of the pull with power is {Value(1, r => numbers.Significant(r, 2))} times what the torque explains (p = {Value(0, p => numbers.Plain(p, 3))}): look at the thrust line before moving anything, then at power, propeller speed and masses in the rig file.",
             FindingCode.SourcesConflict => $"Two sources of the sensitivity contradict each other: {Source(1)} gives {Value(2, r => numbers.Significant(r, 2))} times what {Source(0)} gives (p = {Value(3, p => numbers.Plain(p, 3))}). Check side and size of what was shifted before moving anything.",
+            FindingCode.ShopMemoryConflict => $"This wing behaves otherwise than the workshop's others: {Source(0)} gives {Value(1, r => numbers.Significant(r, 2))} times what they would (p = {Value(2, p => numbers.Plain(p, 3))}). Their memory was not used here.",
             FindingCode.RatioUnbounded => $"The turn by {Source(0)} cannot be told from no turn, so by itself it puts no bound on the shift. Shift more, or fly longer legs.",
             FindingCode.TwistByCarabiners => $"At full power moving the riser carabiners brings the twist ratio to {Value(0, q => numbers.Plain(q, 2))}, moving the harness hang points to {Value(1, q => numbers.Plain(q, 2))}: the thrust line passes near the height of the riser carabiners, so what twists is how far beside their middle the thrust pulls. Moving the riser carabiners takes them away from the thrust line; moving the harness hang points leaves both where they are.",
             FindingCode.TwistByHarness => $"At full power moving the harness hang points brings the twist ratio to {Value(1, q => numbers.Plain(q, 2))}, moving the riser carabiners to {Value(0, q => numbers.Plain(q, 2))}: the thrust line passes near the height of the CG, so what twists is how far beside the CG the thrust pulls. Moving the harness hang points takes the CG away from the thrust line; moving the riser carabiners leaves the two together.",
@@ -420,6 +425,7 @@ internal sealed record EnglishWords : Words
         "pair" => "two set-ups flown",
         "ballast" => "ballast leg",
         "user" => "rig file",
+        "shop_memory" => "the workshop's own jobs",
         _ => kind.Replace('_', ' '),
     };
 

@@ -15,8 +15,14 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
+    /// <summary>The job book.</summary>
+    public abstract JobWords Jobs { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
+
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
 
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);

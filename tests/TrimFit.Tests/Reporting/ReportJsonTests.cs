@@ -43,7 +43,7 @@ public class ReportJsonTests
         JsonElement rig = JsonDocument.Parse(ReportJson.Rig(ReportFixture.Sheet())).RootElement;
         Assert.Equal("trimfit-rig-result/1", rig.GetProperty("schema").GetString());
         Assert.Equal(["schema", "rig", "program_version", "masses", "e_mm", "t_mm", "carabiner_spacing_mm", "full_thrust_n", "full_torque_nm", "figure_of_merit",
-            "twist_stiffness_nm_per_rad", "torque_balancing_mm", "hang_check", "at", "adjustments", "assumptions", "warnings", "cautions"], Keys(rig));
+            "twist_stiffness_nm_per_rad", "torque_balancing_mm", "hang_check", "hang_check_measured", "at", "adjustments", "assumptions", "warnings", "cautions"], Keys(rig));
         Assert.Equal(["setting", "thrust_n", "torque_nm", "hang_back_deg", "yaw_moment_nm", "roll_moment_nm", "riser_load_left_n", "riser_load_right_n", "twist_deg",
             "twist_ratio", "twist_ratio_high95"], Keys(rig.GetProperty("at")[0]));
         JsonElement inspect = JsonDocument.Parse(ReportJson.Inspect(ReportFixture.Inspection())).RootElement;

@@ -106,7 +106,7 @@ public class RigStaticsTests
     {
         // By hand: e = 430 × 5.49/(2 × 118) = 10.003 mm.
         var check = new RigHangCheck { LeftKg = Reading.Measured(56.255), RightKg = Reading.Measured(61.745), CarabinerSpacingM = Reading.Measured(0.430) };
-        Accuracy.AgreesTo(4, 0.0100030, RigSpread.HangCheckOffset(HandRig(), check).Offset);
+        Accuracy.AgreesTo(4, 0.0100030, check.AllHangs.Single().OffsetM(check.CarabinerSpacingM!.Value.Value));
     }
 
     [Fact]

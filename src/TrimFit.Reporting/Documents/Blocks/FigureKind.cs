@@ -7,4 +7,6 @@ public enum FigureKind
     Plot,
     /// <summary>A drawing: narrower than the text, whole on every screen.</summary>
     Drawing,
+    /// <summary>A template to be printed true to scale: never shrunk; on a narrow screen it scrolls sideways.</summary>
+    FullSize,
 }

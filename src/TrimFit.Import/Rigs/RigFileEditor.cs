@@ -1,0 +1,94 @@
+using Tomlyn.Parsing;
+using Tomlyn.Syntax;
+
+namespace TrimFit.Import.Rigs;
+
+/// <summary>Writes readings into the text of a rig file: order, comments and line ends stay, an earlier value stays as a comment.</summary>
+public static class RigFileEditor
+{
+    /// <summary>The text with the readings in it.</summary>
+    /// <param name="fileName">Name for messages; a folder in it is left out.</param>
+    /// <param name="text">A rig file that reads without faults.</param>
+    /// <param name="readings">What was measured.</param>
+    /// <exception cref="LogFormatException">A table is written in a form that cannot be edited line by line.</exception>
+    public static string Write(string fileName, string text, GroundReadings readings)
+    {
+        ArgumentNullException.ThrowIfNull(fileName);
+        ArgumentNullException.ThrowIfNull(text);
+        ArgumentNullException.ThrowIfNull(readings);
+        string name = Path.GetFileName(fileName);
+        MeasuredKey[] keys = [.. readings.Keys];
+        HashSet<string> written = [.. keys.Select(k => k.Name)];
+        foreach (string old in keys.SelectMany(k => k.Supersedes).Where(s => !written.Contains(s)).Distinct())
+        {
+            int dot = old.IndexOf('.', StringComparison.Ordinal);
+            text = Edit(name, text, old[..dot], old[(dot + 1)..], null);
+        }
+        foreach (MeasuredKey key in keys)
+            text = Edit(name, text, key.Table, key.Key, readings.Toml(key));
+        return text;
+    }
+
+    /// <summary>The text with its hang check as comments: after a change it says where the weight sat before.</summary>
+    /// <param name="fileName">Name for messages; a folder in it is left out.</param>
+    /// <param name="text">A rig file that reads without faults.</param>
+    /// <exception cref="LogFormatException">The table is written in a form that cannot be edited line by line.</exception>
+    public static string WithoutHangCheck(string fileName, string text)
+    {
+        ArgumentNullException.ThrowIfNull(fileName);
+        ArgumentNullException.ThrowIfNull(text);
+        DocumentSyntax document = SyntaxParser.Parse(text.ReplaceLineEndings("\n"), fileName, validate: true);
+        string[] keys = [.. document.Tables.Where(t => t is TableSyntax && t.Name?.ToString().Trim() == "hang_check").SelectMany(t => t.Items).Select(i => i.Key!.ToString().Trim())];
+        foreach (string key in keys)
+            text = Edit(Path.GetFileName(fileName), text, "hang_check", key, null);
+        return text;
+    }
+
+    /// <summary>Sets one key, or takes it out when the value is null; either way the earlier line stays as a comment.</summary>
+    private static string Edit(string file, string text, string tableName, string key, string? value)
+    {
+        string newline = text.Contains("\r\n", StringComparison.Ordinal) ? "\r\n" : "\n";
+        bool mark = text.StartsWith('\uFEFF');
+        string body = mark ? text[1..] : text;
+        List<string> lines = [.. body.ReplaceLineEndings("\n").Split('\n')];
+        DocumentSyntax document = SyntaxParser.Parse(string.Join('\n', lines), file, validate: true);
+        TableSyntaxBase? table = document.Tables.FirstOrDefault(t => t is TableSyntax && t.Name?.ToString().Trim() == tableName);
+        if (table is null && document.KeyValues.FirstOrDefault(k => FirstName(k) == tableName) is KeyValueSyntax inline)
+        {
+            throw LogFormatException.At(file, inline.Span.Start.Line + 1, null, $"{tableName} written in one line", $"a line [{tableName}] with its keys below it",
+                "Write it so, then measure again.");
+        }
+        if (table?.Items.FirstOrDefault(k => k.Key!.ToString().Trim() == key) is KeyValueSyntax item)
+        {
+            int first = item.Key!.Span.Start.Line, last = item.Value!.Span.End.Line;
+            string indent = lines[first][..(lines[first].Length - lines[first].TrimStart().Length)];
+            string rest = lines[last][Math.Min(lines[last].Length, item.Value.Span.End.Column + 1)..].TrimEnd();
+            if (value is not null && SameValue(item.Value.ToString(), value))
+                return text;
+            IEnumerable<string> kept = lines.GetRange(first, last - first + 1).Select((l, i) => i == 0 ? $"{indent}# before: {l.Trim()}" : $"{indent}#   {l.Trim()}");
+            lines.RemoveRange(first, last - first + 1);
+            lines.InsertRange(first, value is null ? kept : [.. kept, $"{indent}{key} = {value}{rest}"]);
+        }
+        else if (value is null)
+        {
+            return text;
+        }
+        else if (table is not null)
+        {
+            int after = table.Items.Any() ? table.Items.Max(i => i.Value!.Span.End.Line) : table.Span.Start.Line;
+            lines.Insert(after + 1, $"{key} = {value}");
+        }
+        else
+        {
+            while (lines.Count > 0 && lines[^1].Trim().Length == 0)
+                lines.RemoveAt(lines.Count - 1);
+            lines.AddRange(["", $"[{tableName}]", $"{key} = {value}", ""]);
+        }
+        return (mark ? "\uFEFF" : "") + string.Join(newline, lines);
+    }
+
+    private static string FirstName(KeyValueSyntax item) => item.Key!.Key!.ToString().Trim();
+
+    private static bool SameValue(string old, string value) =>
+        string.Concat(old.Where(c => !char.IsWhiteSpace(c))) == string.Concat(value.Where(c => !char.IsWhiteSpace(c)));
+}
