@@ -10,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Rig(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error),
+            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error),
         };
         return root;
     }
@@ -37,6 +37,39 @@ internal static class CommandTree
         common.AddForLogs(command);
         common.AddForFit(command);
         command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), common.Choices(parsed), output, error));
+        return command;
+    }
+
+    private static Command Compare(TextWriter output, TextWriter error)
+    {
+        var list = new Argument<string?>("FLIGHTS") { Description = "A list of flights (TOML): [[flight]] with logs, rig, sheet, setup.", Arity = ArgumentArity.ZeroOrOne };
+        Option<string[]> Logs(string name, string which) => new(name) { Description = $"Logs of the flight {which} the change.", HelpName = "LOG", AllowMultipleArgumentsPerToken = true };
+        Option<string?> File(string name, string what, string help) => new(name) { Description = what, HelpName = help };
+        Option<string[]> before = Logs("--before", "before"), after = Logs("--after", "after");
+        Option<string?> beforeRig = File("--before-rig", "The machine before the change.", "RIG"), afterRig = File("--after-rig", "The machine after it; that before when left out.", "RIG");
+        Option<string?> beforeSheet = File("--before-sheet", "Flight sheet of the flight before.", "SHEET"), afterSheet = File("--after-sheet", "Flight sheet of the flight after.", "SHEET");
+        Option<string?> changed = File("--changed", "What was changed; the change is put down to it, everything else that differs is warned of.", "WHAT");
+        Option<string?> scatter = File("--flight-scatter", "Known scatter of an unchanged machine's pull from flight to flight, deg/s; without it what is usual is assumed.", "DEG_S");
+        var common = new CommonOptions();
+        var command = new Command("compare", "Before and after: did the change work, and what comes next. Two flights, or a list of more.")
+        {
+            list, before, beforeRig, beforeSheet, after, afterRig, afterSheet, changed, scatter,
+        };
+        common.AddForPeople(command);
+        common.AddForLogs(command);
+        common.AddForFit(command);
+        command.SetAction(parsed => CompareCommand.Run(new CompareRequest
+        {
+            List = parsed.GetValue(list),
+            Before = [.. parsed.GetValue(before) ?? []],
+            BeforeRig = parsed.GetValue(beforeRig),
+            BeforeSheet = parsed.GetValue(beforeSheet),
+            After = [.. parsed.GetValue(after) ?? []],
+            AfterRig = parsed.GetValue(afterRig),
+            AfterSheet = parsed.GetValue(afterSheet),
+            Changed = CommonOptions.Changed(parsed.GetValue(changed)),
+            Scatter = CommonOptions.Scatter(parsed.GetValue(scatter)),
+        }, common.Choices(parsed), output, error));
         return command;
     }
 

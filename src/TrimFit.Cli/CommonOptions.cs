@@ -2,10 +2,12 @@ using System.Collections.Immutable;
 using System.CommandLine;
 using System.Globalization;
 using TrimFit.Core.Analysis;
+using TrimFit.Core.Comparing;
 using TrimFit.Core.Logs;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Units;
 using TrimFit.Import;
+using TrimFit.Import.Flights;
 using TrimFit.Reporting;
 
 namespace TrimFit.Cli;
@@ -131,6 +133,27 @@ internal sealed class CommonOptions
         ? AngularRate.FromDegPerSec(1)
         : Number(text) is double d && d > 0 ? AngularRate.FromDegPerSec(d)
         : throw new CommandLineException($"--tolerance: found \"{text}\", expected a turn rate above 0 in deg/s, such as 1.5.");
+
+    /// <summary>What was changed between two settings.</summary>
+    /// <exception cref="CommandLineException">The word is none of those it may be.</exception>
+    public static ChangedPart? Changed(string? text)
+    {
+        if (text is null)
+            return null;
+        foreach ((string word, ChangedPart part) in FlightListReader.ChangedWords)
+        {
+            if (word == text)
+                return part;
+        }
+        throw new CommandLineException($"--changed: found \"{text}\", expected {string.Join(", ", FlightListReader.ChangedWords.Select(w => w.Word))}.");
+    }
+
+    /// <summary>Scatter of the pull from flight to flight.</summary>
+    /// <exception cref="CommandLineException">Not a turn rate of 0 or more.</exception>
+    public static FlightScatter Scatter(string? text) => text is null
+        ? FlightScatter.Usual
+        : Number(text) is double d && d >= 0 ? FlightScatter.Known(AngularRate.FromDegPerSec(d))
+        : throw new CommandLineException($"--flight-scatter: found \"{text}\", expected a turn rate of 0 or more in deg/s, such as 0.3.");
 
     private static ulong? Seed(string? text) => text is null
         ? null

@@ -62,6 +62,8 @@ internal static class InputFiles
         return Readable(Path.GetFileName(path), () => File.ReadAllText(path));
     }
 
+    public static (string Text, SourceFile File) TextWithSource(string path) => (Text(path), Source(path));
+
     private static SourceFile Source(string path) =>
         new(Path.GetFileName(path), Convert.ToHexStringLower(Readable(Path.GetFileName(path), () => SHA256.HashData(File.ReadAllBytes(path)))));
 

@@ -20,4 +20,9 @@ public static class ReportPage
     /// <param name="report">The result.</param>
     /// <param name="style">Units and culture.</param>
     public static string Rig(RigSheetReport report, ReportStyle style) => Page.Render(ReportDocuments.Rig(report, style, figures: true), new());
+
+    /// <summary>The result of <c>compare</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    public static string Compare(CompareReport report, ReportStyle style) => Page.Render(ReportDocuments.Compare(report, style, figures: true), new());
 }

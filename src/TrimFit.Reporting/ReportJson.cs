@@ -12,10 +12,10 @@ using TrimFit.Reporting.Wording;
 
 namespace TrimFit.Reporting;
 
-/// <summary>Results as JSON for scripts: schemas <c>trimfit-fit/1</c>, <c>trimfit-inspect/1</c>, <c>trimfit-rig-result/1</c>.</summary>
+/// <summary>Results as JSON for scripts: schemas <c>trimfit-fit/1</c>, <c>trimfit-compare/1</c>, <c>trimfit-inspect/1</c>, <c>trimfit-rig-result/1</c>.</summary>
 /// <remarks>Always English, metric and culture-free. Numbers are finite or null and carry nine significant digits: more would only show
 /// the last bits of one processor. The text ends with a line feed.</remarks>
-public static class ReportJson
+public static partial class ReportJson
 {
     private const double DegPerRad = 180 / Math.PI;
     private const double MmPerM = 1000;
@@ -33,9 +33,14 @@ public static class ReportJson
     public static string Fit(FitReport report)
     {
         ArgumentNullException.ThrowIfNull(report);
+        return JsonSerializer.Serialize(FitResult(report), _context.FitJson) + "\n";
+    }
+
+    private static FitJson FitResult(FitReport report)
+    {
         TrimAnalysis a = report.Analysis;
         ControlUnit brake = report.Import.Flight.BrakeUnit, trimmer = report.Import.Flight.TrimmerUnit;
-        var json = new FitJson
+        return new FitJson
         {
             Inputs = Inputs(report.Import.Diagnostics, report.RigFile, report.SheetFile, report.Provenance),
             Sampling = Sampling(report.Import.Diagnostics),
@@ -65,7 +70,6 @@ public static class ReportJson
             Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. GroundReports.Faults(a.RigReport.GroundFaults), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
         };
-        return JsonSerializer.Serialize(json, _context.FitJson) + "\n";
     }
 
     /// <summary>The result of <c>inspect</c>.</summary>

@@ -8,6 +8,9 @@ public static class ReportMarkdown
     /// <summary>The result of <c>fit</c>.</summary>
     public static string Fit(FitReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Fit(report, style, figures: true));
 
+    /// <summary>The result of <c>compare</c>.</summary>
+    public static string Compare(CompareReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Compare(report, style, figures: true));
+
     /// <summary>The result of <c>inspect</c>.</summary>
     public static string Inspect(InspectReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Inspect(report, style));
 

@@ -12,6 +12,12 @@ public static class ReportText
     /// <summary>The first sentence of <c>fit</c> with the caution that stands everywhere, for scripts and quiet people.</summary>
     public static string FitBrief(FitReport report, ReportStyle style) => Brief(ReportDocuments.Fit(report, style, figures: false), style);
 
+    /// <summary>The result of <c>compare</c>.</summary>
+    public static string Compare(CompareReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Compare(report, style, figures: false));
+
+    /// <summary>The first sentence of <c>compare</c> with the caution that stands everywhere.</summary>
+    public static string CompareBrief(CompareReport report, ReportStyle style) => Brief(ReportDocuments.Compare(report, style, figures: false), style);
+
     /// <summary>The result of <c>inspect</c>.</summary>
     public static string Inspect(InspectReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Inspect(report, style));
 

@@ -5,7 +5,8 @@ using Xunit.Runner.InProc.SystemConsole;
 namespace TrimFit.SimulationTests;
 
 /// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
-/// --minutes for each row); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
+/// --minutes for each row); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `compare`
+/// the one of before and after (--pairs, --repeats, --swaps, --seed, --threads, --minutes, --fits); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -16,6 +17,8 @@ internal static class Program
             return ShiftStudy.Run(args);
         if (args.Length > 0 && args[0] == "ground")
             return GroundStudy.Run(args.Length > 1 && int.TryParse(args[1], NumberStyles.None, CultureInfo.InvariantCulture, out int cases) && cases > 0 ? cases : 2000);
+        if (args.Length > 0 && args[0] == "compare")
+            return CompareStudy.Run(args);
         return args.Any(a => a is "--server" or "--internal-msbuild-node")
             ? Xunit.MicrosoftTestingPlatform.TestPlatformTestFramework.RunAsync(args, SelfRegisteredExtensions.AddSelfRegisteredExtensions).GetAwaiter().GetResult()
             : ConsoleRunner.Run(args).GetAwaiter().GetResult();

@@ -10,7 +10,7 @@ namespace TrimFit.Core.Comparing;
 internal sealed class FlightCircumstances
 {
     /// <summary>Differences from which a warning is due. Mass and density: model page section 4; the others are common practice, no source.</summary>
-    public const double MassKg = 5, DensityShare = 0.03, WindMPerSec = 4, HeightM = 300, LeastOverlap = 0.6, AirspeedShare = 0.02, SensorAngleRad = 0.09, TurnShare = 0.5;
+    public const double MassKg = 5, DensityShare = 0.03, WindMPerSec = 4, HeightM = 300, LeastOverlap = 0.6, AirspeedShare = 0.05, SensorAngleRad = 0.09, TurnShare = 0.5;
 
     private const double LeastTurnedRad = 2 * Math.PI;
 

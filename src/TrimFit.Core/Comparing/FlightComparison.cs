@@ -52,6 +52,12 @@ public sealed partial record FlightComparison
     /// could tell.</summary>
     public TrimAnalysis? Next { get; init; }
 
+    /// <summary>The fit behind <see cref="Next"/>; null with it.</summary>
+    internal TurnFit? NextFit { get; init; }
+
+    /// <summary>The options behind <see cref="Next"/>, with the known changes.</summary>
+    internal TrimOptions? NextOptions { get; init; }
+
     /// <summary>Whether the change between the settings entered the sensitivity.</summary>
     public bool PairUsed { get; init; }
 

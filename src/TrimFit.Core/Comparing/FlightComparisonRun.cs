@@ -11,6 +11,9 @@ public sealed partial record FlightComparison
     /// <summary>Thrusts at which two settings' turns are compared for the sensitivity, fractions of full.</summary>
     private static readonly double[] _pairThrusts = [0, 0.5, 1];
 
+    /// <summary>Brakes that answer otherwise warn at 5 %, but keep a pair from being used only when it is this sure.</summary>
+    private const double SureP = 0.01;
+
     /// <summary>Compares flights.</summary>
     /// <remarks>Never throws on thin data: a flight that could not tell its pull over power is named and left out.</remarks>
     /// <param name="flights">At least one, in the order flown. The first one's setting is "before", the setting that appears last for the first time
@@ -122,12 +125,17 @@ public sealed partial record FlightComparison
                     && UndeclaredDifferences.OfBrakes(brake.Before, brake.After, _options.Changed) is CompareNotice tightened)
                     _notices.Add(tightened);
             }
-            if (_options.WithNext)
+            ComparedFlight last = _empty.Flights[_used[_ofSetup[Last][^1]]];
+            TrimOptions options = _options.Trim with { KnownChanges = KnownChanges(last) };
+            TurnFit fit = Together(Last, withScatter: true);
+            return result with
             {
-                (TrimAnalysis next, bool pair) = NextOf();
-                result = result with { Next = next, PairUsed = pair };
-            }
-            return result with { Notices = [.. _notices] };
+                NextFit = fit,
+                NextOptions = options,
+                Next = _options.WithNext ? TrimAnalysis.Run(last.Analysis.Signals, fit, last.Analysis.Rig, options, last.Analysis.CrossCheck) : null,
+                PairUsed = !options.KnownChanges.IsEmpty,
+                Notices = [.. _notices],
+            };
         }
 
         private double ErrorOf(PowerSetting setting) => setting == PowerSetting.Cruise ? _cruiseError : 0;
@@ -287,11 +295,12 @@ public sealed partial record FlightComparison
             return new(slope, new(slope - half, slope + half, 0.95), zero, best, scale);
         }
 
-        /// <summary>The last setting with all its flights, the others as known changes of the rig where nothing but the rig's places changed.</summary>
-        private (TrimAnalysis Next, bool PairUsed) NextOf()
+        /// <summary>The other settings as known changes of the rig, where nothing but the rig's places changed.</summary>
+        private ImmutableArray<KnownChange> KnownChanges(ComparedFlight last)
         {
-            ComparedFlight last = _empty.Flights[_used[_ofSetup[Last][^1]]];
             bool declared = _options.Changed is null or ChangedPart.Geometry or ChangedPart.Harness or ChangedPart.Ballast;
+            bool otherwiseAlike = !_notices.Any(n => n.Code is CompareNoticeCode.TrimmersDiffer or CompareNoticeCode.AcceleratorDiffers
+                or CompareNoticeCode.AirspeedDiffers || (n.Code == CompareNoticeCode.BrakeResponseChanged && n.Values[2] < SureP));
             var known = ImmutableArray.CreateBuilder<KnownChange>();
             bool refused = false;
             for (int s = 0; s < Last; s++)
@@ -299,18 +308,15 @@ public sealed partial record FlightComparison
                 var difference = new RigDifference(last.Analysis.Rig, RigOf(s));
                 if (!difference.GeometryDiffers)
                     continue;
-                bool clean = declared && !difference.WingDiffers && !difference.PropellerDiffers && !difference.HangHeightDiffers
-                    && !_notices.Any(n => n.Code is CompareNoticeCode.BrakeResponseChanged or CompareNoticeCode.TrimmersDiffer or CompareNoticeCode.AcceleratorDiffers
-                        or CompareNoticeCode.AirspeedDiffers);
+                bool clean = declared && otherwiseAlike && !difference.WingDiffers && !difference.PropellerDiffers && !difference.HangHeightDiffers;
                 refused |= !clean;
-                TurnFit fit = Together(s, withScatter: false);
-                if (clean && KnownChange.Of(fit, last.Analysis.Signals.FullThrust, difference.Apply, ScatterFor(s), _ofSetup[s].Length, _pairThrusts) is KnownChange change)
+                if (clean && KnownChange.Of(Together(s, withScatter: false), last.Analysis.Signals.FullThrust, difference.Apply, ScatterFor(s),
+                    _ofSetup[s].Length, _pairThrusts) is KnownChange change)
                     known.Add(change);
             }
             if (refused)
                 _notices.Add(CompareNotice.Of(CompareNoticeCode.PairNotUsed));
-            TrimOptions options = _options.Trim with { KnownChanges = known.ToImmutable() };
-            return (TrimAnalysis.Run(last.Analysis.Signals, Together(Last, withScatter: true), last.Analysis.Rig, options, last.Analysis.CrossCheck), known.Count > 0);
+            return known.ToImmutable();
         }
 
         /// <summary>Once flights of one setting have told the scatter, their word counts.</summary>

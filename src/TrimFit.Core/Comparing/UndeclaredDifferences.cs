@@ -8,7 +8,7 @@ namespace TrimFit.Core.Comparing;
 internal static class UndeclaredDifferences
 {
     private const double ClearDeviations = 2.576; // 1 % two-sided: a warning on every twentieth pair would not be read
-    private const double BrakeShare = 0.1;        // a tightened line takes up slack, which changes the answer by far more than this
+    private const double BrakeDeviations = 1.96, BrakeShare = 0.1; // a tightened line takes up slack, which changes the answer by far more than a tenth
 
     /// <summary>Differences of the rig files, given what was declared.</summary>
     public static IEnumerable<CompareNotice> OfRigs(IReadOnlyList<Rig> rigs, ChangedPart? changed)
@@ -73,7 +73,7 @@ internal static class UndeclaredDifferences
         if (changed is ChangedPart.BrakeLines or ChangedPart.Wing)
             return null;
         double a = before.StandardError, b = after.StandardError, change = after.Mean - before.Mean, error = Math.Sqrt((a * a) + (b * b));
-        return Math.Abs(change) > ClearDeviations * error && Math.Abs(change) > BrakeShare * Math.Abs(before.Mean)
+        return Math.Abs(change) > BrakeDeviations * error && Math.Abs(change) > BrakeShare * Math.Abs(before.Mean)
             ? CompareNotice.Of(CompareNoticeCode.BrakeResponseChanged, before.Mean, after.Mean, 2 * StandardNormal.Cdf(-Math.Abs(change) / error))
             : null;
     }

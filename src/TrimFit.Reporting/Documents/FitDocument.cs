@@ -178,7 +178,7 @@ internal static class FitDocument
 
     private static string Finite(double value, Numbers numbers, int digits, Labels l) => double.IsFinite(value) ? numbers.Significant(value, digits) : l.NotKnown;
 
-    private static void Sensitivity(DocumentBuilder document, SensitivityReport s, Numbers numbers)
+    internal static void Sensitivity(DocumentBuilder document, SensitivityReport s, Numbers numbers)
     {
         Words words = document.Words;
         Labels l = words.Labels;

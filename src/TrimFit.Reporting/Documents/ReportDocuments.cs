@@ -36,4 +36,15 @@ public static class ReportDocuments
         ArgumentNullException.ThrowIfNull(style);
         return RigDocument.Build(report, Words.English, new Numbers(style), figures);
     }
+
+    /// <summary>The report of <c>compare</c>.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
+    public static ReportDocument Compare(CompareReport report, ReportStyle style, bool figures)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
+    }
 }

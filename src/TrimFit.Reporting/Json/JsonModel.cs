@@ -294,6 +294,7 @@ internal sealed record RigAdjustmentJson
 
 [JsonSourceGenerationOptions(WriteIndented = true, PropertyNamingPolicy = JsonKnownNamingPolicy.SnakeCaseLower, NewLine = "\n")]
 [JsonSerializable(typeof(FitJson))]
+[JsonSerializable(typeof(CompareJson))]
 [JsonSerializable(typeof(InspectJson))]
 [JsonSerializable(typeof(RigJson))]
 internal sealed partial class ResultJsonContext : JsonSerializerContext;

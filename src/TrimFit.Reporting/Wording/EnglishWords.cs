@@ -147,6 +147,8 @@ internal sealed record EnglishWords : Words
 
     public override Batch.BatchWords Batch { get; } = new Batch.EnglishBatchWords();
 
+    public override Comparing.CompareWords Comparing { get; } = new Comparing.EnglishCompareWords();
+
     public override string Language => "en";
 
     public override JobWords Jobs { get; } = new EnglishJobWords();

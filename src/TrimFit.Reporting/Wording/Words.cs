@@ -24,6 +24,9 @@ internal abstract record Words
     /// <summary>Texts of the ground work.</summary>
     public abstract GroundWords Ground { get; }
 
+    /// <summary>Words of before and after.</summary>
+    public abstract Comparing.CompareWords Comparing { get; }
+
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
 

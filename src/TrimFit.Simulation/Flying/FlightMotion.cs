@@ -204,7 +204,7 @@ internal sealed class FlightMotion
         double yaw = _row.Yaw + (stiffness * (_twist - _row.Twist));
         double input = (wing.SensitivityRadPerSecPerM * (_roll + (wing.YawRatio * yaw)) / _table.WeightN)
             + wing.ConstantPullRadPerSec
-            + (_s.Brakes.TurnPerMeter * (_s.Brakes.Effective(BrakeRightM) - _s.Brakes.Effective(BrakeLeftM)))
+            + _s.Brakes.Turn(BrakeLeftM, BrakeRightM)
             + (wing.TrimmerTurnPerMeter * (_leg.TrimmerRightM - _leg.TrimmerLeftM))
             + _disturbance.Step() + _second.Step() + thermalTurn;
         double before = TurnRateRadPerSec;

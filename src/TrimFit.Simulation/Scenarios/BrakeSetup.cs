@@ -14,6 +14,12 @@ public sealed record BrakeSetup
     /// <summary>Travel over which a brake hardly bites, m: the effect is x − d·tanh(x/d). 0 is linear.</summary>
     public double SoftStartM { get; init => field = Guard.NotNegative(value); }
 
+    /// <summary>How much shorter the right brake line is than the left one, m: travel that it has ahead of the handle.</summary>
+    public double RightLineShorterM { get; init => field = Guard.NotNegative(value); }
+
+    /// <summary>What a difference of the handles does, rad/s, right positive.</summary>
+    public double Turn(double leftM, double rightM) => TurnPerMeter * (Effective(rightM + RightLineShorterM) - Effective(leftM));
+
     /// <summary>What a brake travel is worth as linear travel, m.</summary>
     public double Effective(double travelM) => SoftStartM > 0 ? travelM - (SoftStartM * Math.Tanh(travelM / SoftStartM)) : travelM;
 }

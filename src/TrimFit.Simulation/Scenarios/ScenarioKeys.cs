@@ -121,6 +121,7 @@ internal static class ScenarioKeys
         {
             ["turn_deg_s_per_mm"] = ScenarioKey<Scenario>.Number(Deg / Mm, static (s, v) => s with { Brakes = s.Brakes with { TurnPerMeter = v } }),
             ["full_travel_mm"] = ScenarioKey<Scenario>.Number(Mm, static (s, v) => s with { Brakes = s.Brakes with { FullTravelM = v } }),
+            ["right_line_shorter_mm"] = ScenarioKey<Scenario>.Number(Mm, static (s, v) => s with { Brakes = s.Brakes with { RightLineShorterM = v } }),
             ["soft_start_mm"] = ScenarioKey<Scenario>.Number(Mm, static (s, v) => s with { Brakes = s.Brakes with { SoftStartM = v } }),
         },
         ["air"] = new()

@@ -17,7 +17,7 @@ public static class SteadyTurn
     {
         FrameEquilibrium frame = At(statics, thrustN);
         return (s.Wing.SensitivityRadPerSecPerM * (frame.RollMomentNm + (s.Wing.YawRatio * frame.YawMomentNm)) / statics.WeightN)
-            + s.Wing.ConstantPullRadPerSec;
+            + s.Wing.ConstantPullRadPerSec + s.Brakes.Turn(0, 0);
     }
 
     /// <summary>Riser twist at a thrust, rad, right positive.</summary>
