@@ -155,6 +155,8 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override Web.WebWords Web { get; } = new Web.EnglishWebWords();
+
     public override GroundWords Ground { get; } = new EnglishGroundWords();
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";

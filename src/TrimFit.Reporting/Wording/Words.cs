@@ -21,6 +21,9 @@ internal abstract record Words
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 
+    /// <summary>Texts of the local web page.</summary>
+    public abstract Web.WebWords Web { get; }
+
     /// <summary>Texts of the ground work.</summary>
     public abstract GroundWords Ground { get; }
 
