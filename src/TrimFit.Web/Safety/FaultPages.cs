@@ -45,7 +45,7 @@ internal static class FaultPages
 #pragma warning disable CA1031 // the last line of defence: people get a page, not a stack trace
         catch (Exception e)
         {
-            faults?.WriteLine($"trimfit: this is a fault of the program, please report it: {e.GetType().Name} in {e.TargetSite?.DeclaringType?.Name}");
+            faults?.WriteLine($"trimfit: this is a fault of the program, please report it: {e.GetType().Name}");
             status = StatusCodes.Status500InternalServerError;
         }
 #pragma warning restore CA1031
