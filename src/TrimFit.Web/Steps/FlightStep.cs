@@ -224,7 +224,7 @@ internal static class FlightStep
                 string role = use is null && told is not null ? ChannelRoles.NameOf(told.Role) : RoleOf(use);
                 int column = c;
                 yield return new(Key(f, c), flight.Previews.Length > 1 ? file?.Name ?? "" : "", name, role, use?.Unit ?? told?.Unit ?? "", use?.Basis ?? "",
-                    [.. preview.Rows.Where(r => r.Length > column).Select(r => r[column])], words.RoleOfColumn(name), words.UnitOfColumn(name));
+                    [.. preview.Rows.Where(r => r.Length > column && r[column].Length > 0).Select(r => r[column])], words.RoleOfColumn(name), words.UnitOfColumn(name));
             }
         }
     }
