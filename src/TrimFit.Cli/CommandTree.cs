@@ -10,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error), Serve(output, error),
+            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error), Serve(output, error),
         };
         return root;
     }
@@ -31,12 +31,13 @@ internal static class CommandTree
         Argument<string[]> logs = Logs();
         var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
         var sheet = new Option<string?>("--sheet") { Description = "What the pilot did: a flight sheet (TOML).", HelpName = "SHEET" };
+        var card = new Option<string?>("--card") { Description = "The test card that was flown (JSON): says whether its precision was reached, and the next best leg.", HelpName = "CARD" };
         var common = new CommonOptions();
-        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet };
+        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet, card };
         common.AddForPeople(command);
         common.AddForLogs(command);
         common.AddForFit(command);
-        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), common.Choices(parsed), output, error));
+        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), parsed.GetValue(card), common.Choices(parsed), output, error));
         return command;
     }
 
@@ -83,6 +84,18 @@ internal static class CommandTree
         var ground = new MeasureOptions();
         ground.AddTo(command);
         command.SetAction(parsed => RigCommand.Run(parsed.GetValue(rig)!, ground.Choices(parsed), common.Choices(parsed), output, error));
+        return command;
+    }
+
+    private static Command Card(TextWriter output, TextWriter error)
+    {
+        var options = new CardCommandOptions();
+        var common = new CommonOptions();
+        var command = new Command("card", "A test card: what to fly for a wanted precision, and the precision to expect.");
+        options.AddTo(command);
+        common.AddForPeople(command);
+        common.AddForFit(command);
+        command.SetAction(parsed => CardCommand.Run(options.Choices(parsed, common.Choices(parsed)), common.Choices(parsed), output, error));
         return command;
     }
 

@@ -1,9 +1,11 @@
 using System.Collections.Immutable;
 using System.Security.Cryptography;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Import;
 using TrimFit.Import.Joining;
+using TrimFit.Import.Results;
 using TrimFit.Import.Rigs;
 using TrimFit.Import.Sheets;
 using TrimFit.Reporting;
@@ -63,6 +65,32 @@ internal static class InputFiles
     }
 
     public static (string Text, SourceFile File) TextWithSource(string path) => (Text(path), Source(path));
+    /// <summary>Text of a file that another file names; null when there is none or it cannot be read.</summary>
+    public static string? TextOrNull(string path)
+    {
+        try
+        {
+            return File.Exists(path) ? File.ReadAllText(path) : null;
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            return null;
+        }
+    }
+
+    /// <summary>The last flight for a test card.</summary>
+    public static (PriorFlight Flight, SourceFile File) Prior(string path, Rig rig)
+    {
+        MustExist(path);
+        return (FitResultReader.Read(path, Text(path), rig.BrakeFullTravelM), Source(path));
+    }
+
+    /// <summary>What a flown test card promised.</summary>
+    public static CardPromise Card(string path)
+    {
+        MustExist(path);
+        return CardFileReader.Read(path, Text(path));
+    }
 
     private static SourceFile Source(string path) =>
         new(Path.GetFileName(path), Convert.ToHexStringLower(Readable(Path.GetFileName(path), () => SHA256.HashData(File.ReadAllBytes(path)))));

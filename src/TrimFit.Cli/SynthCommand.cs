@@ -6,7 +6,8 @@ internal static class SynthCommand
 {
     public static int Run(string path, string folder, CommonChoices choices, TextWriter error)
     {
-        Scenario scenario = Scenario.Read(Path.GetFileName(path), InputFiles.Text(path));
+        string beside = Path.GetDirectoryName(path) ?? "";
+        Scenario scenario = Scenario.Read(Path.GetFileName(path), InputFiles.Text(path), name => InputFiles.TextOrNull(Path.Combine(beside, name)));
         if (choices.Seed is ulong seed)
             scenario = scenario with { Seed = seed };
         SimulatedFlight flight = FlightSimulator.Fly(scenario);

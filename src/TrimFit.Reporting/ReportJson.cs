@@ -4,9 +4,11 @@ using System.Text.Encodings.Web;
 using System.Text.Json;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
+using TrimFit.Core.Turns.FilterError;
 using TrimFit.Reporting.Json;
 using TrimFit.Reporting.Wording;
 
@@ -69,6 +71,7 @@ public static partial class ReportJson
             SpansLeftOut = [.. a.Fit.SpansLeftOut.Select(x => new SpanJson(Number(x.StartSec), Number(x.EndSec), x.Reason))],
             Warnings = [.. Notices(report.Import.Diagnostics.Warnings), .. GroundReports.Faults(a.RigReport.GroundFaults), .. Findings(a.Warnings)],
             Cautions = CautionList(Wording.Cautions.Of(a)),
+            Card = report.CardOutcome is CardOutcome outcome ? CardOutcomeOf(outcome) : null,
         };
     }
 
@@ -199,8 +202,26 @@ public static partial class ReportJson
             Disturbance = new() { Rms = Number(fit.DisturbanceRmsRadPerSec, DegPerRad), TauS = Number(fit.DisturbanceTauSec) },
             EffectiveSamples = Number(fit.EffectiveSamples),
             Condition = Number(fit.Condition),
+            Noise = Noise(fit),
         };
     }
+
+    private static NoiseJson? Noise(TurnFit fit) => fit.Noise is not NoiseParameters n ? null : new()
+    {
+        Response = Snake.Of(n.Order.ToString()),
+        LagS = n.Order == ResponseOrder.First ? Number(n.LagSec) : null,
+        FrequencyRadS = n.Order == ResponseOrder.Second ? Number(n.NaturalFrequency) : null,
+        Damping = n.Order == ResponseOrder.Second ? Number(n.Damping) : null,
+        DisturbanceDegS = Number(n.DisturbanceRms, DegPerRad),
+        DisturbanceTauS = Number(n.DisturbanceTauSec),
+        QuickDegSRootS = Number(n.QuickDisturbance, DegPerRad),
+        GyroDegS = fit.GyroRowsPerSec > 0 ? Number(n.GyroNoise, DegPerRad) : null,
+        HeadingDeg = fit.HeadingRowsPerSec > 0 ? Number(n.HeadingNoise, DegPerRad) : null,
+        GustDeg = fit.HeadingRowsPerSec > 0 ? Number(n.GustRms, DegPerRad) : null,
+        GustTauS = fit.HeadingRowsPerSec > 0 ? Number(n.GustTauSec) : null,
+        GyroRowsPerS = Number(fit.GyroRowsPerSec),
+        HeadingRowsPerS = Number(fit.HeadingRowsPerSec),
+    };
 
     private static CrossCheckJson? CrossCheck(TrimAnalysis analysis, ControlUnit brake, ControlUnit trimmer)
     {

@@ -16,4 +16,7 @@ public static class ReportMarkdown
 
     /// <summary>The result of <c>rig</c>.</summary>
     public static string Rig(RigSheetReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Rig(report, style, figures: true));
+
+    /// <summary>A test card.</summary>
+    public static string Card(CardReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Card(report, style));
 }

@@ -30,6 +30,17 @@ public static class ReportText
     /// <summary>The first sentence of <c>rig</c> with the caution that stands everywhere.</summary>
     public static string RigBrief(RigSheetReport report, ReportStyle style) => Brief(ReportDocuments.Rig(report, style, figures: false), style);
 
+    /// <summary>A test card.</summary>
+    public static string Card(CardReport report, ReportStyle style) => TextRenderer.Render(ReportDocuments.Card(report, style));
+
+    /// <summary>The first sentence of a card with the caution that stands everywhere.</summary>
+    public static string CardBrief(CardReport report, ReportStyle style) => Brief(ReportDocuments.Card(report, style), style);
+
+    /// <summary>The slip of a blind trial for who sets the machine.</summary>
+    /// <param name="setups">Settings in the order of the flights.</param>
+    /// <param name="commitment">Number of the sealed order.</param>
+    public static string HelperSlip(IEnumerable<string> setups, string commitment) => string.Join('\n', Words.English.Card.HelperSlip(setups, commitment)) + "\n";
+
     /// <summary>The summary of <c>batch</c>.</summary>
     public static string Batch(BatchSummary summary, ReportStyle style)
     {

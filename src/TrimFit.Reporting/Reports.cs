@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Logs;
+using TrimFit.Core.Planning;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Turns;
 
@@ -20,6 +21,31 @@ public sealed record FitReport
 
     /// <summary>The flight sheet; null when none was given.</summary>
     public SourceFile? SheetFile { get; init; }
+
+    /// <summary>Whether the flight reached what its test card promised; null without a card.</summary>
+    public CardOutcome? CardOutcome { get; init; }
+
+    /// <summary>The program.</summary>
+    public required Provenance Provenance { get; init; }
+}
+
+/// <summary>Everything a test card shows.</summary>
+public sealed record CardReport
+{
+    /// <summary>The card, or why there is none.</summary>
+    public required CardPlan Plan { get; init; }
+
+    /// <summary>The rig.</summary>
+    public required Rig Rig { get; init; }
+
+    /// <summary>The rig file.</summary>
+    public required SourceFile RigFile { get; init; }
+
+    /// <summary>The result of the last flight it is planned from; null when none was given.</summary>
+    public SourceFile? FromFile { get; init; }
+
+    /// <summary>Number of the sealed order of a blind trial; null when it is none.</summary>
+    public string? BlindCommitment { get; init; }
 
     /// <summary>The program.</summary>
     public required Provenance Provenance { get; init; }

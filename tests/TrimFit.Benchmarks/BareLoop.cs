@@ -25,7 +25,7 @@ internal static class BareLoop
                 if (c == 0)
                     table[0][row] = Seconds(cell);
                 else
-                    Utf8Parser.TryParse(cell, out table[c][row], out _);
+                    _ = Utf8Parser.TryParse(cell, out table[c][row], out _);
                 rest = end < 0 ? default : rest[(end + 1)..];
             }
             row++;

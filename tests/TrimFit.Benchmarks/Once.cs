@@ -1,7 +1,6 @@
 using System.Diagnostics;
 using System.Globalization;
 using DuckDB.NET.Data;
-using TrimFit.Core.Logs;
 using TrimFit.Core.Statistics;
 using TrimFit.Import;
 using TrimFit.Import.Csv;
@@ -18,14 +17,17 @@ internal static class Once
             "csv-trimfit" => () => Sum(TrimFitColumns(path)),
             "csv-bare" => () => Sum(BareLoop.Read(path, 14)),
             "csv-duckdb" => () => DuckDbTable(path),
+            "turn-model" => TurnModelWork(path),
             "ls-trimfit" => LeastSquaresWork(),
             _ => throw new ArgumentException($"no contender \"{contender}\"", nameof(contender)),
         };
         work(); // compiled and settled
         GC.Collect();
+        TimeSpan before = Process.GetCurrentProcess().TotalProcessorTime;
         var time = Stopwatch.StartNew();
         double sum = work();
         time.Stop();
+        Console.Error.WriteLine(FormattableString.Invariant($"processor {(Process.GetCurrentProcess().TotalProcessorTime - before).TotalSeconds:F3} s"));
         Console.WriteLine(FormattableString.Invariant($"{time.Elapsed.TotalSeconds:F6} {sum:R}"));
         return 0;
     }
@@ -51,6 +53,20 @@ internal static class Once
         using DuckDBCommand command = connection.CreateCommand();
         command.CommandText = $"set threads = 1; create table log as select * from read_csv('{path}'); select cast(count(*) + sum(rpm) as double) from log";
         return Convert.ToDouble(command.ExecuteScalar(), CultureInfo.InvariantCulture);
+    }
+
+    /// <summary>The turn model of a log, ten times; its rig file stands beside it.</summary>
+    private static Func<double> TurnModelWork(string path)
+    {
+        Core.Rigging.Rig rig = Import.Rigs.RigFileReader.ReadFile(Path.ChangeExtension(path, null) + "-rig.toml");
+        Core.Turns.TurnSignals signals = Core.Turns.TurnSignals.From(FlightReader.Read([LogSource.FromFile(path)]).Flight, rig);
+        return () =>
+        {
+            double sum = 0;
+            for (int i = 0; i < 10; i++)
+                sum += new Core.Turns.FilterError.FilterErrorEstimator().Estimate(signals).PullAt(0.4 * signals.FullThrust)!.Value.Value;
+            return sum;
+        };
     }
 
     /// <summary>A million rows, five columns.</summary>

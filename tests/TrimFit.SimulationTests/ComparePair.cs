@@ -1,11 +1,9 @@
-using System.Collections.Immutable;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
 using TrimFit.Core.Turns.FilterError;
-using TrimFit.Core.Units;
 using TrimFit.Import.Rigs;
 using TrimFit.Simulation;
 

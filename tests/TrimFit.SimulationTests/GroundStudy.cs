@@ -19,7 +19,7 @@ internal sealed record GroundStudy(double SeatSdM = 0.005, int Hangs = 3, bool E
         public double OffsetM => (Share * HabitM) + ((1 - Share) * UnitLateralM);
     }
 
-    public Machine Draw(SeededRandom random) => new(
+    public static Machine Draw(SeededRandom random) => new(
         random.NextUniform(60, 120), random.NextUniform(22, 40), random.NextUniform(0.38, 0.50), random.NextNormal(0, HabitSdM), random.NextNormal(0, 0.01),
         random.NextUniform(0.65, 0.95), random.NextNormal(0, ScaleSdKg), random.NextNormal(0, ScaleSdKg), random.NextNormal(0, TapeSdM));
 

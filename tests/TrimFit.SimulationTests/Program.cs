@@ -6,7 +6,8 @@ namespace TrimFit.SimulationTests;
 
 /// <summary>`coverage` runs the study and prints its table (options: --flights, --hard, --seed, --threads, --only part of a row's name,
 /// --minutes for each row); `shift` runs the study from pull to millimetres (--flights, --wrong, --seed, --threads, --minutes); `compare`
-/// the one of before and after (--pairs, --repeats, --swaps, --seed, --threads, --minutes, --fits); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
+/// the one of before and after (--pairs, --repeats, --swaps, --seed, --threads, --minutes, --fits); `card` that of test cards, `sheet` that of their
+/// sheets (--flights, --minutes of a card, --seed, --threads); `ground N` runs the hang checks; anything else goes to the test runner.</summary>
 internal static class Program
 {
     public static int Main(string[] args)
@@ -15,13 +16,24 @@ internal static class Program
             return Coverage(args);
         if (args.Length > 0 && args[0] == "shift")
             return ShiftStudy.Run(args);
-        if (args.Length > 0 && args[0] == "ground")
-            return GroundStudy.Run(args.Length > 1 && int.TryParse(args[1], NumberStyles.None, CultureInfo.InvariantCulture, out int cases) && cases > 0 ? cases : 2000);
         if (args.Length > 0 && args[0] == "compare")
             return CompareStudy.Run(args);
+        if (args.Length > 0 && args[0] == "ground")
+            return GroundStudy.Run(args.Length > 1 && int.TryParse(args[1], NumberStyles.None, CultureInfo.InvariantCulture, out int cases) && cases > 0 ? cases : 2000);
+        if (args.Length > 0 && args[0] == "sheet")
+            return SheetStudy.Run((option, otherwise) => NumberOf(args, option, otherwise));
+        if (args.Length > 0 && args[0] == "card")
+            return CardStudy.Run((option, otherwise) => NumberOf(args, option, otherwise));
         return args.Any(a => a is "--server" or "--internal-msbuild-node")
             ? Xunit.MicrosoftTestingPlatform.TestPlatformTestFramework.RunAsync(args, SelfRegisteredExtensions.AddSelfRegisteredExtensions).GetAwaiter().GetResult()
             : ConsoleRunner.Run(args).GetAwaiter().GetResult();
+    }
+
+    private static double NumberOf(string[] args, string option, double otherwise)
+    {
+        int at = Array.IndexOf(args, option);
+        return at < 0 ? otherwise
+            : at + 1 < args.Length && double.TryParse(args[at + 1], NumberStyles.Float, CultureInfo.InvariantCulture, out double number) ? number : double.NaN;
     }
 
     private static int Coverage(string[] args)

@@ -30,7 +30,7 @@ internal static class ChecksCommand
             told = Ask(Console.In, error);
         Complaint complaint = told.Complaint();
         var report = new ChecksReport { Complaint = complaint, Checks = CheckOrder.Of(complaint), Provenance = ProgramVersion.Provenance };
-        OutputFiles.Deliver(choices, output, () => GroundReports.ChecksText(report, choices.Style), () => GroundReports.ChecksJson(report),
+        OutputFiles.Deliver(choices, output, () => choices.Quiet ? GroundReports.ChecksBrief(report, choices.Style) : GroundReports.ChecksText(report, choices.Style), () => GroundReports.ChecksJson(report),
             () => GroundPage.Checks(report, choices.Style), () => GroundReports.ChecksMarkdown(report, choices.Style));
         return ExitCode.Done;
     }

@@ -15,6 +15,8 @@ internal static class MeasureCommand
     /// <summary>Hangs after a change that the expected readings count on.</summary>
     private const double UsualHangs = 3;
 
+    private const string NothingWritten = "nothing was written. Read again, or write it --even-so.";
+
     /// <summary>Writes the readings into the rig file.</summary>
     /// <exception cref="LogFormatException">The readings contradict each other, or the file cannot take them; nothing is written.</exception>
     public static int Write(string path, MeasureChoices choices, CommonChoices common, TextWriter output, TextWriter error)
@@ -22,11 +24,13 @@ internal static class MeasureCommand
         string name = Path.GetFileName(path), text = InputFiles.Text(path);
         Rig earlier = RigFileReader.Read(path, text);
         GroundReadings readings = Readings(choices, error, only: null);
+        if (!choices.EvenSo) // before the file's ranges speak: a slip by ten should be called that
+            Refuse(name, EntryChecks.OfRepeats(readings.Repeats), common, NothingWritten);
         string written = RigFileEditor.Write(path, text, readings);
         Rig rig = RigFileReader.Read(path, written);
         ImmutableArray<GroundFault> faults = EntryChecks.Of(rig, earlier, readings.Repeats);
-        if (!faults.IsEmpty && !choices.EvenSo)
-            throw new LogFormatException(string.Join('\n', faults.Select(f => $"{name}: {GroundReports.Sentence(f, common.Style)}")) + $"\n{name}: nothing was written. Read again, or write it --even-so.");
+        if (!choices.EvenSo)
+            Refuse(name, faults, common, NothingWritten);
         OutputFiles.Write("--measure", path, written);
         foreach (GroundFault fault in faults)
             error.WriteLine($"{name}: {GroundReports.Sentence(fault, common.Style)}");
@@ -54,8 +58,8 @@ internal static class MeasureCommand
         ];
         if (adjustment.Unit == TravelUnit.Kilogram)
             faults = faults.RemoveAll(f => f.Code == GroundFaultCode.WeightMissing);
-        if (!faults.IsEmpty && !choices.EvenSo)
-            throw new LogFormatException(string.Join('\n', faults.Select(f => $"{name}: {GroundReports.Sentence(f, common.Style)}")));
+        if (!choices.EvenSo)
+            Refuse(name, faults, common, "nothing was compared. Read again, or compare it --even-so.");
 
         (double change, double sd, double spacing) = RigHang.Expected(rig, adjustment, travel);
         if (change == 0)
@@ -76,7 +80,7 @@ internal static class MeasureCommand
             Faults = faults,
             Provenance = ProgramVersion.Provenance,
         };
-        OutputFiles.Deliver(common, output, () => GroundReports.ChangeText(report, common.Style), () => GroundReports.ChangeJson(report),
+        OutputFiles.Deliver(common, output, () => common.Quiet ? GroundReports.ChangeBrief(report, common.Style) : GroundReports.ChangeText(report, common.Style), () => GroundReports.ChangeJson(report),
             () => GroundPage.Change(report, common.Style), () => GroundReports.ChangeMarkdown(report, common.Style));
         return report.Change.Verdict == HangChangeVerdict.Confirmed ? ExitCode.Done : ExitCode.NoAnswer;
     }
@@ -104,6 +108,12 @@ internal static class MeasureCommand
         if (readings.IsEmpty)
             throw new CommandLineException("no reading: give --reading NAME=V,V,V, --readings FILE, or answer the questions on a terminal.");
         return readings;
+    }
+
+    private static void Refuse(string name, ImmutableArray<GroundFault> faults, CommonChoices common, string ending)
+    {
+        if (!faults.IsEmpty)
+            throw new LogFormatException(string.Join('\n', [.. faults.Select(f => $"{name}: {GroundReports.Sentence(f, common.Style)}"), $"{name}: {ending}"]));
     }
 
     private static double Square(double x) => x * x;

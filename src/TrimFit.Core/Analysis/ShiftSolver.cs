@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;
@@ -174,6 +175,8 @@ internal static class ShiftSolver
             RiserLoadRightN = after.RiserLoadRightN,
             HangCheckLeftKg = firstMoved.SuspendedKg * (0.5 - (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
             HangCheckRightKg = firstMoved.SuspendedKg * (0.5 + (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
+            HangCheckPlusMinusKg = 1.96 * (RigHang.Of(rig)?.NextFlightSdM ?? LateralGeometry.Of(rig).StandardDeviation) * firstMoved.SuspendedKg / firstMoved.CarabinerSpacingM,
+            HangCheckDifferenceKg = 2 * ((firstMoved.SuspendedKg * firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM) - (nominal.SuspendedKg * nominal.CgOffsetM / nominal.CarabinerSpacingM)),
             TurnLeftAt = after.TurnLeftAt,
             WithinLimits = within,
             ProbabilityWrongSide = total > 0 ? wrongSide / total : 1,

@@ -109,7 +109,7 @@ public sealed partial record TrimAnalysis
     private static GyroReport? GyroOf(TurnSignals signals, TurnFit fit) =>
         signals.Gyro is null ? null : signals.Gyro with { BiasRadPerSec = fit.GyroBiasRadPerSec ?? signals.Gyro.BiasRadPerSec };
 
-    private static PullReport PullOf(TurnSignals signals, TurnFit fit, PowerLevels levels)
+    internal static PullReport PullOf(TurnSignals signals, TurnFit fit, PowerLevels levels)
     {
         Estimate? brake = fit[TurnCoefficient.BrakeDifference];
         PullAtSetting At(PowerSetting setting, double fraction, double fractionError)

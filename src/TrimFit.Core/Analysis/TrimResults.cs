@@ -128,6 +128,10 @@ public sealed record AdjustmentReport
     public required double HangCheckLeftKg { get; init; }
     /// <summary>Hang-check reading of the right scale to expect after the first step, kg.</summary>
     public required double HangCheckRightKg { get; init; }
+    /// <summary>Half of the 95 % range of each of the two readings, kg: seat, tape and, where it was done, the hang check before; null when not worked out.</summary>
+    public double? HangCheckPlusMinusKg { get; init; }
+    /// <summary>What the first step adds to right less left, kg, against a hang check before it; null when not worked out.</summary>
+    public double? HangCheckDifferenceKg { get; init; }
     /// <summary>Turn left at each power after the rounded travel.</summary>
     public required ImmutableArray<PullAtSetting> TurnLeftAt { get; init; }
     /// <summary>Inside the rig's limits; null when the rig gives none.</summary>
@@ -320,6 +324,8 @@ public enum FindingCode
     ClutchEngageAssumed,
     /// <summary>Thrust was taken from climb, W (climb + glide sink)/airspeed: standard error of a reading, N.</summary>
     ThrustFromClimb,
+    /// <summary>Thrust from the powers of the flight sheet: share of level flight, and 1 when climb gave it.</summary>
+    ThrustFromSheet,
     /// <summary>Thrust in flight by climb over thrust by the rig: ratio, its standard error, ratio by momentum theory (0 when unknown), 1 when they agree.</summary>
     ThrustScaleByClimb,
     /// <summary>No full thrust in the rig; this flight's climb gives one in flight: N, its standard error.</summary>

@@ -72,6 +72,4 @@ public enum CompareNoticeCode
     NoSteering,
     /// <summary>Some flights know newtons, others only shares of full thrust; all are compared by shares.</summary>
     ThrustBasesDiffer,
-    /// <summary>The order was sealed and is opened here: whether its seal fits (1) or not (0); names of the settings in the order flown.</summary>
-    BlindOrder,
 }

@@ -1,4 +1,3 @@
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
 
 namespace TrimFit.Core.Comparing;

@@ -33,12 +33,7 @@ public static class EntryChecks
         ArgumentNullException.ThrowIfNull(rig);
         ArgumentNullException.ThrowIfNull(repeats);
         var faults = ImmutableArray.CreateBuilder<GroundFault>();
-        foreach ((string key, ImmutableArray<double> values) in repeats.OrderBy(r => r.Key, StringComparer.Ordinal))
-        {
-            double smallest = key.EndsWith("_mm", StringComparison.Ordinal) ? SmallestLateralMm : key.EndsWith("_c", StringComparison.Ordinal) || key.EndsWith("_deg", StringComparison.Ordinal) ? double.PositiveInfinity : 0;
-            if (FactorTen.Find(values.AsSpan(), smallest) is (int index, double corrected))
-                faults.Add(new(GroundFaultCode.FactorTenInRepeats, key, index + 1, values[index], corrected));
-        }
+        faults.AddRange(OfRepeats(repeats));
         bool slipped = faults.Count > 0; // a mean with a slip in it contradicts everything else
         if (earlier is not null)
             AddSidesSwapped(faults, rig, earlier);
@@ -47,6 +42,21 @@ public static class EntryChecks
         {
             AddPowerUnit(faults, rig, repeats);
             faults.AddRange(OfHangCheck(rig));
+        }
+        return faults.ToImmutable();
+    }
+
+    /// <summary>Repeats of which one is off by ten against the others.</summary>
+    /// <param name="repeats">Raw repeats by key of the rig file, unit of the file.</param>
+    public static ImmutableArray<GroundFault> OfRepeats(IReadOnlyDictionary<string, ImmutableArray<double>> repeats)
+    {
+        ArgumentNullException.ThrowIfNull(repeats);
+        var faults = ImmutableArray.CreateBuilder<GroundFault>();
+        foreach ((string key, ImmutableArray<double> values) in repeats.OrderBy(r => r.Key, StringComparer.Ordinal))
+        {
+            double smallest = key.EndsWith("_mm", StringComparison.Ordinal) ? SmallestLateralMm : key.EndsWith("_c", StringComparison.Ordinal) || key.EndsWith("_deg", StringComparison.Ordinal) ? double.PositiveInfinity : 0;
+            if (FactorTen.Find(values.AsSpan(), smallest) is (int index, double corrected))
+                faults.Add(new(GroundFaultCode.FactorTenInRepeats, key, index + 1, values[index], corrected));
         }
         return faults.ToImmutable();
     }

@@ -37,8 +37,11 @@ public static class HangChange
         double spread = Guard.NotNegative(expectedSdM);
         double measured = after.OffsetM - before.OffsetM;
         // One pilot, one seating spread: the second check's own scatter joins what the first one knows.
-        double degrees = before.SeatingDegreesOfFreedom + after.OwnDegreesOfFreedom;
-        double seating = ((before.SeatingDegreesOfFreedom * before.SeatingSdM * before.SeatingSdM) + after.OwnSquares) / degrees;
+        // Where either check scatters more than pilots usually do, what is usual is left out.
+        bool alone = before.ScattersMore || after.ScattersMore;
+        double degrees = (alone ? before.OwnDegreesOfFreedom : before.SeatingDegreesOfFreedom) + after.OwnDegreesOfFreedom;
+        double earlier = alone ? before.OwnSquares : before.SeatingDegreesOfFreedom * before.SeatingSdM * before.SeatingSdM;
+        double seating = (earlier + after.OwnSquares) / degrees;
         double other = before.OtherVariance + after.OtherVariance;
         double bySeating = (seating / before.Hangs.Length) + (seating / after.Hangs.Length);
         double variance = bySeating + other + (spread * spread);

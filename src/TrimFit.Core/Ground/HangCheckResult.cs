@@ -21,6 +21,9 @@ public sealed record HangCheckResult
     /// <summary>Degrees of freedom of <see cref="SeatingSdM"/>.</summary>
     public required double SeatingDegreesOfFreedom { get; init; }
 
+    /// <summary>Whether the hangs scatter more than pilots usually do, so that they alone give the spread: few of them then say little.</summary>
+    public required bool ScattersMore { get; init; }
+
     /// <summary>Degrees of freedom of these hangs alone, without what pilots usually scatter by.</summary>
     public required double OwnDegreesOfFreedom { get; init; }
 

@@ -9,6 +9,7 @@ namespace TrimFit.Core.Logs;
 /// the throttle (or what follows it: rpm, power, current, engine noise). A change counts when the column's means on both sides differ by 15 % of
 /// its range over the flight and by two standard deviations of what is left; its place is the split with the least sum of squares.</para>
 /// <para>A hands-off leg whose edge shows in no control loses 5 s at that edge: what is called hands off must be.</para>
+/// <para>Marks are those of <see cref="FlightMarks"/>.</para>
 /// <para>Clock times are the log's own, or differ from it by whole quarters of an hour, as a watch on local time does.</para>
 /// </remarks>
 public static class SheetLegs
@@ -37,10 +38,16 @@ public static class SheetLegs
             warnings.Add(new("sheet_date", Invariant($"The flight sheet is of {date:yyyy-MM-dd}, the log of {start.UtcDateTime:yyyy-MM-dd}: check that they belong together.")));
         double? clockToLog = ClockToLog(flight, sheet, warnings);
         ReadOnlySpan<double> time = flight.TimeSec;
+        ImmutableArray<FlightMark> marks = sheet.Legs.Any(leg => leg.Start.Kind == SheetTimeKind.Marker) ? FlightMarks.Of(flight) : [];
+        if (!marks.IsEmpty && marks[0].Kind != FlightMarkKind.Channel)
+        {
+            string what = marks[0].Kind == FlightMarkKind.Blips ? "three quick throttle blips" : "a pause of the recorder";
+            warnings.Add(new("sheet_marks", Invariant($"The marks of the flight sheet are taken from {what}: {marks.Length} found, at {string.Join(", ", marks.Select(m => m.TimeSec.ToString("F0", System.Globalization.CultureInfo.InvariantCulture)))} s.")));
+        }
         var legs = ImmutableArray.CreateBuilder<FoundLeg>();
         foreach (SheetLeg leg in sheet.Legs)
         {
-            if (Stated(flight, leg, clockToLog) is not (double stated, double statedEnd))
+            if (Stated(leg, clockToLog, marks) is not (double stated, double statedEnd))
             {
                 if (leg.Start.Kind == SheetTimeKind.Marker)
                     warnings.Add(new("sheet_mark_missing", Invariant($"The leg on line {leg.Line} of the flight sheet runs from mark {leg.Start.Value} to mark {leg.End.Value}, which the log does not hold; it is left out.")));
@@ -172,14 +179,14 @@ public static class SheetLegs
         return finite[(int)(0.95 * (finite.Count - 1))] - finite[(int)(0.05 * (finite.Count - 1))];
     }
 
-    private static (double Start, double End)? Stated(FlightLog flight, SheetLeg leg, double? clockToLog)
+    private static (double Start, double End)? Stated(SheetLeg leg, double? clockToLog, ImmutableArray<FlightMark> marks)
     {
         switch (leg.Start.Kind)
         {
             case SheetTimeKind.Seconds:
                 return (leg.Start.Value, leg.End.Value);
             case SheetTimeKind.Marker:
-                return Mark(flight, leg.Start.Value) is double start && Mark(flight, leg.End.Value) is double end ? (start, end) : null;
+                return Mark(marks, leg.Start.Value) is double start && Mark(marks, leg.End.Value) is double end ? (start, end) : null;
             default:
                 return clockToLog is double shift ? ClockSpan(leg, shift) : null;
         }
@@ -224,33 +231,12 @@ public static class SheetLegs
         return null;
     }
 
-    /// <summary>Time of a mark: where the marker column first has its number, or, when every mark has the same number, the k-th mark.</summary>
-    private static double? Mark(FlightLog flight, double number)
+    private static double? Mark(ImmutableArray<FlightMark> marks, double number)
     {
-        ReadOnlySpan<double> time = flight.TimeSec, marker = flight[ChannelRole.Marker];
-        double? same = null;
-        bool counted = false, hasZeros = false; // without zeros an empty cell is what parts two marks
-        foreach (double value in marker)
+        foreach (FlightMark mark in marks)
         {
-            hasZeros |= value == 0;
-            if (double.IsFinite(value) && value != 0)
-            {
-                counted |= same is double s && s != value;
-                same = value;
-            }
-        }
-        int rises = 0;
-        bool up = false;
-        for (int i = 0; i < marker.Length; i++)
-        {
-            if (hasZeros && double.IsNaN(marker[i]))
-                continue;
-            bool set = double.IsFinite(marker[i]) && marker[i] != 0;
-            if (set && counted && marker[i] == number)
-                return time[i];
-            if (set && !up && !counted && ++rises == number)
-                return time[i];
-            up = set;
+            if (mark.Number == number)
+                return mark.TimeSec;
         }
         return null;
     }

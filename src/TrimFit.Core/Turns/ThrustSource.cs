@@ -8,7 +8,7 @@ namespace TrimFit.Core.Turns;
 
 /// <summary>Thrust over the flight's clock, from the best of what was logged.</summary>
 /// <remarks>In this order: motor current (follows torque, and torque over thrust hardly changes), speed of rotation squared, power to the
-/// two-thirds (momentum theory: T = (FM P)^⅔ (2ρA)^⅓), throttle by the rig's table, climb, throttle taken as thrust.</remarks>
+/// two-thirds (momentum theory: T = (FM P)^⅔ (2ρA)^⅓), throttle by the rig's table, throttle taken as thrust, the powers of a flight sheet, climb.</remarks>
 internal sealed class ThrustSource
 {
     /// <summary>Longest time a reading of rpm or throttle is held, s; beyond it the engine's state is unknown and the span is left out.</summary>
@@ -39,7 +39,7 @@ internal sealed class ThrustSource
 
     public required ImmutableArray<Finding> Findings { get; init; }
 
-    public static ThrustSource Of(FlightLog log, Rig rig, Propulsion propulsion)
+    public static ThrustSource Of(FlightLog log, Rig rig, Propulsion propulsion, params ReadOnlySpan<FoundLeg> legs)
     {
         RigPropeller propeller = rig.Propeller;
         var findings = new List<Finding>();
@@ -76,6 +76,11 @@ internal sealed class ThrustSource
         {
             findings.Add(Finding.Of(FindingCode.ThrottleTakenAsThrust));
             fraction = Held(log, ChannelRole.Throttle);
+        }
+        else if (SheetThrust.Of(log, rig, legs) is (double[] byLegs, double level, bool levelByClimb))
+        {
+            findings.Add(Finding.Of(FindingCode.ThrustFromSheet, level, levelByClimb ? 1 : 0));
+            fraction = byLegs;
         }
         else if (ClimbThrust.Readings(log, rig) is (double[] thrust, double error))
         {

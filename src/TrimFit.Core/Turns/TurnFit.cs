@@ -42,6 +42,16 @@ public sealed record TurnFit
     /// <summary>Correlation time of the slow disturbance, s; null when not estimated.</summary>
     public double? DisturbanceTauSec { get; init; }
 
+    /// <summary>Time constants and noise levels found, of rows as the estimator averaged them; null for a method without them. A test card is
+    /// planned from the last flight's.</summary>
+    public FilterError.NoiseParameters? Noise { get; init; }
+
+    /// <summary>Gyro rows a second of used flight; 0 without a gyro.</summary>
+    public double GyroRowsPerSec { get; init; }
+
+    /// <summary>Rows with an air heading from GPS a second of used flight; 0 without GPS.</summary>
+    public double HeadingRowsPerSec { get; init; }
+
     /// <summary>Independent observations the data are worth.</summary>
     public required double EffectiveSamples { get; init; }
 

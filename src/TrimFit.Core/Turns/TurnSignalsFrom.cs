@@ -25,7 +25,7 @@ public sealed partial class TurnSignals
         double[] time = log.TimeSec.ToArray();
         int count = time.Length;
         var findings = new List<Finding>();
-        var thrust = ThrustSource.Of(log, rig, Propulsion.Of(rig));
+        var thrust = ThrustSource.Of(log, rig, Propulsion.Of(rig), legs);
         findings.AddRange(thrust.Findings);
         double[] power = thrust.Known ? [.. thrust.Thrust.Select(t => t / thrust.FullThrust)] : [];
         PreparedSensors sensors = PreparedSensors.Of(log, power, rig.Log.GyroOrientation);

@@ -73,7 +73,8 @@ public static class RigFileEditor
             int first = item.Key!.Span.Start.Line, last = item.Value!.Span.End.Line;
             string indent = lines[first][..(lines[first].Length - lines[first].TrimStart().Length)];
             string rest = lines[last][Math.Min(lines[last].Length, item.Value.Span.End.Column + 1)..].TrimEnd();
-            if (value is not null && SameValue(item.Value.ToString(), value))
+            string old = string.Concat(lines.GetRange(first, last - first + 1))[item.Value.Span.Start.Column..];
+            if (value is not null && SameValue(old[..(old.Length - (lines[last].Length - Math.Min(lines[last].Length, item.Value.Span.End.Column + 1)))], value))
                 return text;
             IEnumerable<string> kept = !keepEarlier ? [] : lines.GetRange(first, last - first + 1).Select((l, i) => i == 0 ? $"{indent}# before: {l.Trim()}" : $"{indent}#   {l.Trim()}");
             lines.RemoveRange(first, last - first + 1);

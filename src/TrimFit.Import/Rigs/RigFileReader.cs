@@ -58,6 +58,8 @@ internal sealed class RigTables
         [AdjustmentKind.BrakeLine] = ("brake_line", "mm", 1 / MmPerM),
     };
 
+    private static readonly string[] _thrustTestKeys = ["pull_kg", "temperature_c", "height_m"];
+
     private readonly FaultList _faults;
     private readonly TableReader _root, _machine, _mass, _propeller, _carabiners, _hangPoints, _hangCheck, _brakes, _weighing, _thrustTest, _wing, _limits, _log;
 
@@ -276,7 +278,7 @@ internal sealed class RigTables
         Reading? pull = Scaled(_thrustTest, "pull_kg", Ranges.PullKg, ReadingSpread.Thrust, 1);
         double? temperature = _thrustTest.Number("temperature_c", Ranges.TemperatureC), height = _thrustTest.Number("height_m", Ranges.HeightM);
         double rope = _thrustTest.Number("rope_angle_deg", Ranges.RopeAngleDeg) ?? 0;
-        string[] missing = [.. new[] { "pull_kg", "temperature_c", "height_m" }.Where(key => _thrustTest.Item(key) is null)];
+        string[] missing = [.. _thrustTestKeys.Where(key => _thrustTest.Item(key) is null)];
         if (_thrustTest.Exists && missing.Length > 0)
             _faults.Add(_thrustTest.Line, $"[thrust_test] without {string.Join(" and ", missing)}", "pull, air temperature and height above the sea", "Add the missing reading or leave the table out.");
         if (pull is not { } p || temperature is not double t || height is not double h)

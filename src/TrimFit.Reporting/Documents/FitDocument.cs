@@ -32,6 +32,8 @@ internal static class FitDocument
             document.Heading(labels.TurnPlot);
             document.Figure(TurnPlot.Draw(a, words, numbers), words.TurnPlotDescription(a.Fit.Points.Length));
         }
+        if (report.CardOutcome is Core.Planning.CardOutcome card)
+            document.Heading(words.Card.OutcomeTitle).Paragraph(words.Card.Outcome(card, numbers)).Paragraph(words.Card.NextLegs(card, numbers));
         Pull(document, a, brake, numbers);
         if (figures)
         {

@@ -47,4 +47,14 @@ public static class ReportDocuments
         ArgumentNullException.ThrowIfNull(style);
         return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
     }
+
+    /// <summary>A test card.</summary>
+    /// <param name="report">The card.</param>
+    /// <param name="style">Units and culture.</param>
+    public static ReportDocument Card(CardReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return CardDocument.Build(report, Words.English, new Numbers(style));
+    }
 }

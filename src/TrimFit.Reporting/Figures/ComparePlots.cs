@@ -1,6 +1,5 @@
 using ScottPlot;
 using ScottPlot.Plottables;
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Turns;

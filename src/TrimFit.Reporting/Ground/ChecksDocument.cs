@@ -18,11 +18,11 @@ internal static class ChecksDocument
         document.Heading(l.Told);
         document.List(g.Told(report.Complaint));
         document.Heading(l.Checks);
-        document.Table([new(l.Number), new(l.Check, false), new(l.WriteDown, false), new(l.Why, false)],
-            report.Checks.Select((c, i) => (IReadOnlyList<string>)[numbers.Integer(i + 1), g.Cause(c.Cause), Field(c.Cause, g, numbers), string.Join(", ", c.Reasons.Select(g.Reason))]));
+        document.Table([new(l.Check, false), new(l.WriteDown, false), new(l.Why, false)],
+            report.Checks.Select((c, i) => (IReadOnlyList<string>)[$"{numbers.Integer(i + 1)}. {g.Cause(c.Cause)}", Field(c.Cause, g, numbers), string.Join(", ", c.Reasons.Select(g.Reason))]));
         document.Paragraph(l.MendFirst);
         document.Heading(l.HowTo);
-        document.List(report.Checks.Select((c, i) => $"{numbers.Integer(i + 1)}. {Capital(g.Cause(c.Cause))}: {g.LookFor(c.Cause)} ({g.NumberToWrite(c.Cause)}) → {g.IfItStays(c.Cause)}."));
+        document.Steps(report.Checks.Select(c => $"{Capital(g.Cause(c.Cause))}: {g.LookFor(c.Cause)} {l.WriteDown}: {g.NumberToWrite(c.Cause)}. {l.IfItStays}: {g.IfItStays(c.Cause)}."));
         document.Paragraph(l.ThenMeasure);
         document.Cautions(Wording.Cautions.For(CautionPlaces.ComplaintSheet), numbers);
         return document.Build(l.ChecksTitle, $"{l.Machine} {Room}{Room}   {l.DateAndName} {Room}{Room}");

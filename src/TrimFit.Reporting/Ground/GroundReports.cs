@@ -17,6 +17,22 @@ public static class GroundReports
     /// <summary>Checks for the terminal.</summary>
     public static string ChecksText(ChecksReport report, ReportStyle style) => TextRenderer.Render(Document(report, style));
 
+    /// <summary>The first sentence of the checks with their order in one line and the caution that stands everywhere.</summary>
+    public static string ChecksBrief(ChecksReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return Brief($"{Words.English.Ground.ChecksAnswer(report.Complaint)} {string.Join("; ", report.Checks.Select(c => Words.English.Ground.Cause(c.Cause)))}.", style);
+    }
+
+    /// <summary>The verdict on a change in one sentence with the caution that stands everywhere.</summary>
+    public static string ChangeBrief(HangChangeReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return Brief(Words.English.Ground.Change(report.Change, Words.English.PartShort(report.Adjustment.Kind), new Numbers(style)), style);
+    }
+
     /// <summary>Checks as Markdown.</summary>
     public static string ChecksMarkdown(ChecksReport report, ReportStyle style) => MarkdownRenderer.Render(Document(report, style));
 
@@ -153,6 +169,8 @@ public static class GroundReports
         document.Cautions(ChangeCautions(report), numbers);
         return document.Build(words.Ground.Labels.HangCheck, words.PartShort(report.Adjustment.Kind));
     }
+
+    private static string Brief(string sentence, ReportStyle style) => sentence + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
 
     private static IEnumerable<CautionCode> ChangeCautions(HangChangeReport report) =>
         Wording.Cautions.For(CautionPlaces.HangCheckSheet | Wording.Cautions.PlacesOf([report.Adjustment.Kind]));

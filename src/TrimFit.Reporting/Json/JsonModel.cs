@@ -23,6 +23,9 @@ internal sealed record FitJson
     public required SpanJson[] SpansLeftOut { get; init; }
     public required MessageJson[] Warnings { get; init; }
     public required MessageJson[] Cautions { get; init; }
+
+    /// <summary>Whether the flight reached what its test card promised; left out without a card.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] public CardOutcomeJson? Card { get; init; }
 }
 
 internal sealed record InspectJson
@@ -128,6 +131,26 @@ internal record TurnModelJson
     public required DisturbanceJson Disturbance { get; init; }
     [JsonPropertyName("n_eff")] public required double? EffectiveSamples { get; init; }
     public required double? Condition { get; init; }
+
+    /// <summary>What a test card is planned from; left out for a method that does not find it.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] public NoiseJson? Noise { get; init; }
+}
+
+internal sealed record NoiseJson
+{
+    public required string Response { get; init; }
+    public required double? LagS { get; init; }
+    public required double? FrequencyRadS { get; init; }
+    public required double? Damping { get; init; }
+    public required double? DisturbanceDegS { get; init; }
+    public required double? DisturbanceTauS { get; init; }
+    public required double? QuickDegSRootS { get; init; }
+    public required double? GyroDegS { get; init; }
+    public required double? HeadingDeg { get; init; }
+    public required double? GustDeg { get; init; }
+    public required double? GustTauS { get; init; }
+    public required double? GyroRowsPerS { get; init; }
+    public required double? HeadingRowsPerS { get; init; }
 }
 
 internal sealed record CrossCheckJson : TurnModelJson
@@ -297,4 +320,5 @@ internal sealed record RigAdjustmentJson
 [JsonSerializable(typeof(CompareJson))]
 [JsonSerializable(typeof(InspectJson))]
 [JsonSerializable(typeof(RigJson))]
+[JsonSerializable(typeof(CardJson))]
 internal sealed partial class ResultJsonContext : JsonSerializerContext;

@@ -158,6 +158,7 @@ internal sealed record EnglishWords : Words
     public override Web.WebWords Web { get; } = new Web.EnglishWebWords();
 
     public override GroundWords Ground { get; } = new EnglishGroundWords();
+    public override CardWords Card { get; } = new EnglishCardWords();
 
     public override string Side(double rightPositive) => rightPositive < 0 ? "left" : "right";
 
@@ -266,8 +267,18 @@ internal sealed record EnglishWords : Words
             ? "The hang check must then show the same as before: "
             : "The hang check must then show ";
         return $"First step: {Verb(adjustment.Kind)} {Phrase(adjustment.Kind, d, numbers.Travel(d, adjustment.Unit), "")}{seen}. "
-            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one. "
+            + $"{check}{numbers.Mass(adjustment.HangCheckLeftKg)} on the left scale and {numbers.Mass(adjustment.HangCheckRightKg)} on the right one{HangCheckRange(adjustment, numbers)}. "
             + "Then fly again and fit again.";
+    }
+
+    /// <summary>How far the readings may be off, and the difference against a hang check before, which is known far better.</summary>
+    private static string HangCheckRange(AdjustmentReport a, Numbers numbers)
+    {
+        if (a.HangCheckPlusMinusKg is not double half || a.HangCheckDifferenceKg is not double more)
+            return "";
+        string within = $", each within {numbers.Mass(half)}";
+        return numbers.MassNumber(more) == numbers.MassNumber(0) ? within
+            : $"{within}; against a hang check before the step the {(more > 0 ? "right" : "left")} scale must gain {numbers.Mass(Math.Abs(more))} on the {(more > 0 ? "left" : "right")} one";
     }
 
     public override string Finding(Finding finding, Numbers numbers, TravelUnit unit = TravelUnit.Meter)
@@ -362,6 +373,7 @@ internal sealed record EnglishWords : Words
             FindingCode.CurrentTakenAsPower => $"The log has a current without a voltage; it was taken as power at constant voltage, with full power at {Value(0, a => numbers.Plain(a, 0))} A. Log the voltage too.",
             FindingCode.ThrustFromMotorCurrent => $"Thrust was taken as proportional to motor current, with full power at {Value(0, a => numbers.Plain(a, 0))} A, the largest in the log.",
             FindingCode.ClutchEngageAssumed => $"The speed at which the clutch engages is not in the rig file; {Value(0, n => numbers.Plain(n * 60, 0))} rpm stands in, a quarter above the idle of the log. Give clutch_engage_rpm.",
+            FindingCode.ThrustFromSheet => $"The log says nothing about the engine, so thrust was taken from the powers on the flight sheet: level flight at {Value(0, numbers.Percent)} of full thrust, {(Sign(1) > 0 ? "by how the legs climbed" : "as is usual, since the climb of the legs does not tell")}.",
             FindingCode.ThrustFromClimb => $"The log says nothing about the engine, so thrust was taken from climb and glide sink, each reading good to {Value(0, n => numbers.Force(1.96 * n))}. Log rpm or throttle.",
             FindingCode.ThrustScaleByClimb => $"By its climb the machine has {Value(0, r => numbers.Plain(r, 2))} (± {Value(1, e => numbers.Plain(1.96 * e, 2))}) times the thrust of the rig file"
                 + (Sign(2) > 0 ? $"; {Value(2, r => numbers.Plain(r, 2))} is what momentum theory leaves of a static thrust in flight" : "")

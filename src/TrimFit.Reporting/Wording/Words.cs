@@ -27,6 +27,9 @@ internal abstract record Words
     /// <summary>Texts of the ground work.</summary>
     public abstract GroundWords Ground { get; }
 
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
+
     /// <summary>Words of before and after.</summary>
     public abstract Comparing.CompareWords Comparing { get; }
 

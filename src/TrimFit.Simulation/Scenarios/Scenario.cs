@@ -59,7 +59,18 @@ public sealed record Scenario
     /// <param name="fileName">Name for messages.</param>
     /// <param name="toml">Text of the file.</param>
     /// <exception cref="ScenarioFormatException">The text is no such file; each line of the message names file, line, what was found and expected.</exception>
-    public static Scenario Read(string fileName, string toml) => ScenarioReader.Read(fileName, toml);
+    public static Scenario Read(string fileName, string toml) => ScenarioReader.Read(fileName, toml, null);
+
+    /// <summary>The same for a scenario that may name a test card to fly, <c>[flight] card = "card.json"</c>.</summary>
+    /// <param name="fileName">Name for messages.</param>
+    /// <param name="toml">Text of the file.</param>
+    /// <param name="fileText">Text of a file named in the scenario; null when it cannot be read.</param>
+    /// <exception cref="ScenarioFormatException">The text is no such file; each line of the message names file, line, what was found and expected.</exception>
+    public static Scenario Read(string fileName, string toml, Func<string, string?> fileText)
+    {
+        ArgumentNullException.ThrowIfNull(fileText);
+        return ScenarioReader.Read(fileName, toml, fileText);
+    }
 
     /// <summary>The scenario with both riser carabiners moved by a travel, m, right positive.</summary>
     public Scenario WithCarabinerPair(double travelM) => this with

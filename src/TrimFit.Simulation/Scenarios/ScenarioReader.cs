@@ -12,7 +12,7 @@ internal static class ScenarioReader
 {
     private const int MaxNearest = 3; // letters a misspelt key may be off by to be offered another
 
-    public static Scenario Read(string fileName, string toml)
+    public static Scenario Read(string fileName, string toml, Func<string, string?>? fileText)
     {
         ArgumentNullException.ThrowIfNull(fileName);
         ArgumentNullException.ThrowIfNull(toml);
@@ -48,6 +48,7 @@ internal static class ScenarioReader
             faults.Add(Invariant($"{fileName}(1): found {found}, expected schema = \"{Scenario.Schema}\" at the top."));
         }
         var legs = new List<FlightLeg>();
+        (string Name, int Line)? card = null;
         foreach (TableSyntaxBase table in document.Tables)
         {
             string name = NameOf(table.Name!);
@@ -59,6 +60,19 @@ internal static class ScenarioReader
                     leg = Apply(ScenarioKeys.Leg, "leg", leg, item, fileName, faults);
                 legs.Add(leg);
             }
+            else if (name == "flight" && table is TableSyntax)
+            {
+                foreach (KeyValueSyntax item in table.Items)
+                {
+                    int at = item.Span.Start.Line + 1;
+                    if (NameOf(item.Key!) != "card")
+                        faults.Add(Invariant($"{fileName}({at}): unknown key \"{NameOf(item.Key!)}\" in [flight].{Nearest(NameOf(item.Key!), ["card"])}"));
+                    else if (item.Value is StringValueSyntax { Value: { Length: > 0 } file })
+                        card = (file, at);
+                    else
+                        faults.Add(Invariant($"{fileName}({at}): card = {item.Value!.ToString().Trim()}: expected the name of a test card's file."));
+                }
+            }
             else if (table is TableSyntax && name.Length > 0 && ScenarioKeys.Tables.TryGetValue(name, out Dictionary<string, ScenarioKey<Scenario>>? keys))
             {
                 foreach (KeyValueSyntax item in table.Items)
@@ -68,12 +82,18 @@ internal static class ScenarioReader
             {
                 string near = name == "leg"
                     ? " Write [[leg]], once for each leg."
-                    : Nearest(name, ScenarioKeys.Tables.Keys.Append("leg"));
+                    : Nearest(name, ScenarioKeys.Tables.Keys.Append("leg").Append("flight"));
                 faults.Add(Invariant($"{fileName}({line}): unknown table [{name}].{near}"));
             }
         }
+        if (card is { } both && legs.Count > 0)
+            faults.Add(Invariant($"{fileName}({both.Line}): a card beside [[leg]]; expected one of the two."));
+        string? text = card is { } wanted ? fileText?.Invoke(wanted.Name) : null;
+        if (card is { } missing && text is null)
+            faults.Add(Invariant($"{fileName}({missing.Line}): the test card \"{missing.Name}\" cannot be read. Name it as it lies beside the scenario."));
         Stop(faults);
-        return s with { Legs = [.. legs] };
+        // The whole scenario is known now: heading and brake travel may stand below the card.
+        return text is null ? s with { Legs = [.. legs] } : s with { Legs = CardFile.Legs(card!.Value.Name, text, s.Start.HeadingRad, s.Brakes.FullTravelM) };
     }
 
     private static T Apply<T>(Dictionary<string, ScenarioKey<T>> keys, string table, T target, KeyValueSyntax item, string fileName, List<string> faults)

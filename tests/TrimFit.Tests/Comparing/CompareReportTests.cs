@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Globalization;
 using System.Text.Json;
 using TrimFit.Core.Comparing;
@@ -44,6 +43,9 @@ public class CompareReportTests
         string straight = ReportText.Compare(Report(Known(0), Flight("a", 3, 0.1), Flight("b", 0, 0.1, rig: Moved(0.03))), new());
         Assert.StartsWith("Fixed: at idle, in level flight and at full power the turn left lies within 1.0 deg/s; in level\nflight it turned right at 3.0 deg/s before and hardly turns now", straight, StringComparison.Ordinal);
         Assert.DoesNotContain("> First step", straight, StringComparison.Ordinal); // what is fixed is left alone
+        // Before -3.5 without power, -1.1 in level flight, 0.5 at full power; after it -2, 0.4 and 2.
+        string elsewhere = ReportText.Compare(Report(Known(0), Flight("a", -3.5, 0.05, 4), Flight("b", -2, 0.05, 4, rig: Moved(-0.015))), new()).Replace('\n', ' ');
+        Assert.Contains("At full power it became larger: a fixed shift cannot null every power.", elsewhere, StringComparison.Ordinal);
         string open = ReportText.Compare(Report(Known(0), Flight("a", 1.5, 0.9), Flight("b", 1.2, 0.9, rig: Moved(0.03))), new());
         Assert.StartsWith("These flights cannot tell whether anything changed:", open, StringComparison.Ordinal);
         string one = ReportText.Compare(Report(Known(0), Flight("a", 1.5, 0.1), Flight("a", 1.5, 0.1)), new());

@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using MathNet.Numerics.LinearAlgebra;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Comparing;
@@ -105,13 +104,15 @@ public class FlightComparisonTests
     public void Three_flights_of_a_setting_are_random_effects_with_the_interval_of_Hartung_and_Knapp()
     {
         // Independent of the pooling: the tested RandomEffects by itself, factor not below 1.
-        double[] values = [Deg(0.2), Deg(0.9), Deg(0.5)], variances = [.. new[] { 0.1, 0.2, 0.1 }.Select(e => (Deg(e) * Deg(e)) + 1e-12)];
+        double[] values = [Deg(0.2), Deg(0.9), Deg(0.5)], variances = [Square(0.1), Square(0.2), Square(0.1)];
         FlightComparison c = Compare(new() { WithNext = false }, Flight("a", 0.2, 0.1), Flight("a", 0.9, 0.2), Flight("a", 0.5, 0.1));
         ConfidenceInterval wanted = RandomEffects.DerSimonianLaird(values, variances).HartungKnappInterval(0.95)!.Value;
         Assert.Equal(PoolingMethod.RandomEffects, c.Setups[0].Method);
         Accuracy.AgreesTo(4, wanted.Lower, c.Setups[0].At[0].Interval95.Lower);
         Accuracy.AgreesTo(4, wanted.Upper, c.Setups[0].At[0].Interval95.Upper);
         Assert.DoesNotContain(CompareNoticeCode.ScatterAssumed, Codes(c));
+
+        static double Square(double degPerSec) => (Deg(degPerSec) * Deg(degPerSec)) + 1e-12;
     }
 
     [Fact]

@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using CsCheck;
 using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
@@ -38,14 +37,25 @@ public class HangCheckTests
     [Fact]
     public void Three_hangs_by_hand()
     {
-        // e_i = 0.4 (R − L)/(2 × 100) = 2 mm/kg × 2, 5, 8 kg = 4, 10, 16 mm; mean 10, squares 72 mm². Pilot share 0.8: prior sd 3.52 mm with 8 degrees.
-        // Seat variance (8 × 12.3904 + 72)/10 = 17.11232 mm²; over 3 hangs 5.704107. Scales: 2 × √2 × 0.2 = 0.5656854 mm, squared 0.32. Sum 6.024107.
+        // e_i = 0.4 (R − L)/(2 × 100) = 2 mm/kg × 2, 5, 8 kg = 4, 10, 16 mm; mean 10, squares 72 mm². Pilot share 0.8: prior sd 3.6 mm with 8 degrees.
+        // Seat variance (8 × 12.96 + 72)/10 = 17.568 mm²; over 3 hangs 5.856. Scales: 2 × √2 × 0.2 = 0.5656854 mm, squared 0.32. Sum 6.176.
         HangCheckResult hang = HangCheck.Measure([new(49, 51), new(47.5, 52.5), new(46, 54)], 0.400, 0, 0.8);
         Accuracy.AgreesTo(10, 0.010, hang.OffsetM);
-        Accuracy.AgreesTo(6, Math.Sqrt(6.024107) / 1000, hang.StandardError);
-        Accuracy.AgreesTo(6, Math.Sqrt(17.11232) / 1000, hang.SeatingSdM);
-        Accuracy.AgreesTo(6, 10 * Math.Pow(6.024107 / 5.704107, 2), hang.DegreesOfFreedom);
+        Accuracy.AgreesTo(6, Math.Sqrt(6.176) / 1000, hang.StandardError);
+        Accuracy.AgreesTo(6, Math.Sqrt(17.568) / 1000, hang.SeatingSdM);
+        Accuracy.AgreesTo(6, 10 * Math.Pow(6.176 / 5.856, 2), hang.DegreesOfFreedom);
         Assert.Equal(10, hang.SeatingDegreesOfFreedom);
+    }
+
+    [Fact]
+    public void Hangs_that_scatter_more_than_pilots_do_speak_for_themselves()
+    {
+        // e_i = 2 mm/kg × −10, 0, 10 kg = −20, 0, 20 mm: squares 800 mm², variance 400 mm² against 12.96 of the usual pilot.
+        HangCheckResult hang = HangCheck.Measure([new(55, 45), new(50, 50), new(45, 55)], 0.400, 0, 0.8);
+        Assert.True(hang.ScattersMore);
+        Accuracy.AgreesTo(9, 0.020, hang.SeatingSdM);
+        Assert.Equal(2, hang.SeatingDegreesOfFreedom);
+        Assert.False(HangCheck.Measure([new(49, 51), new(47.5, 52.5), new(46, 54)], 0.400, 0, 0.8).ScattersMore);
     }
 
     [Fact]

@@ -145,10 +145,10 @@ public class RigFileEditorTests
     }
 
     [Theory]
-    [InlineData("[thrust_test]\npull_kg = 60\n", "r.toml(16): found [thrust_test] without temperature_c and height_m, expected pull, air temperature and height above the sea. Add the missing reading or leave the table out.")]
-    [InlineData("[hang_points]\nfront_left_mm = 180\nfront_right_mm = -190\n", "r.toml(17): found 180 for front_left_mm and -190 for front_right_mm, expected the left one left of the right one. Positive is to the seated pilot's right, so the left one is usually negative; swap the two or the sign.")]
-    [InlineData("[hang_points]\nrear_left_mm = -180\n", "r.toml(16): found [hang_points] with only one of rear_left_mm and rear_right_mm, expected both harness hang points of the pair. Add the missing reading.")]
-    [InlineData("[hang_check]\nleft_kg = 60\nright_kg = 58\nexchanged_left_kg = [60, 61]\nexchanged_right_kg = 58\n", "r.toml(19): found 2 readings for exchanged_left_kg and 1 for exchanged_right_kg, expected one of each for every hang. Add the missing reading.")]
+    [InlineData("[thrust_test]\npull_kg = 60\n", "r.toml(17): found [thrust_test] without temperature_c and height_m, expected pull, air temperature and height above the sea. Add the missing reading or leave the table out.")]
+    [InlineData("[hang_points]\nfront_left_mm = 180\nfront_right_mm = -190\n", "r.toml(18): found 180 for front_left_mm and -190 for front_right_mm, expected the left one left of the right one. Positive is to the seated pilot's right, so the left one is usually negative; swap the two or the sign.")]
+    [InlineData("[hang_points]\nrear_left_mm = -180\n", "r.toml(17): found [hang_points] with only one of rear_left_mm and rear_right_mm, expected both harness hang points of the pair. Add the missing reading.")]
+    [InlineData("[hang_check]\nleft_kg = 60\nright_kg = 58\nexchanged_left_kg = [60, 61]\nexchanged_right_kg = 58\n", "r.toml(20): found 2 readings for exchanged_left_kg and 1 for exchanged_right_kg, expected one of each for every hang. Add the missing reading.")]
     public void Incomplete_ground_readings_are_named(string table, string message) =>
         Assert.Equal(message, Assert.Throws<LogFormatException>(() => RigFileReader.Read("r.toml", Before + "\n" + table)).Message);
 }

@@ -281,7 +281,7 @@ public class RigFileTests
         { "[mass]", "[machine]\nseats = 1.5\n[mass]", "r.toml(2): found 1.5 for seats, expected 1 or 2. Write seats = 1 or seats = 2." },
         { "[mass]", "wing = 5\n[mass]", "r.toml(1): found 5 for wing, expected a table. Write a line [wing] and its keys below it." },
         { "[mass]", "name = 5\n[mass]", "r.toml(1): found 5 for name, expected text in quotes. Write name = \"my machine\"." },
-        { "[mass]", "colour = \"red\"\n[mass]", "r.toml(1): unknown key \"colour\" at the top of the file. Known here: brakes, carabiners, hang_check, hang_points, limits, log, machine, mass, name, propeller, schema, weighing, wing." },
+        { "[mass]", "colour = \"red\"\n[mass]", "r.toml(1): unknown key \"colour\" at the top of the file. Known here: brakes, carabiners, hang_check, hang_points, limits, log, machine, mass, name, propeller, schema, thrust_test, weighing, wing." },
         { "[mass]", "schema = \"trimfit-rig/2\"\n[mass]", "r.toml(1): found schema \"trimfit-rig/2\", expected \"trimfit-rig/1\". The file was written for a newer TrimFit; update the program." },
         { "[mass]", "schema = \"trimfit-flight/1\"\n[mass]", "r.toml(1): found \"trimfit-flight/1\" for schema, expected \"trimfit-rig/1\". Write schema = \"trimfit-rig/1\", or check that this is the right file." },
         { "[mass]", "[hang_check]\nleft_kg = 60\n[mass]", "r.toml(1): found [hang_check] without right_kg, expected the readings of both scales, kg. Add the missing reading or leave the table out." },

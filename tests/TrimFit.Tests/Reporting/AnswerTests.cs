@@ -92,6 +92,13 @@ public class AnswerTests
         + "The hang check must then show 60.2 kg on the left scale and 57.8 kg on the right one. Then fly again and fit again.",
         Words.English.FirstStep(Adjustment(AdjustmentKind.CarabinerPair, 0.010, 0.005, 0.015), Rig(), Numbers.Invariant));
 
+    [Theory]
+    [InlineData(2.4, "on the right one, each within 4.0 kg; against a hang check before the step the right scale must gain 2.4 kg on the left one. Then")]
+    [InlineData(-2.4, "on the right one, each within 4.0 kg; against a hang check before the step the left scale must gain 2.4 kg on the right one. Then")]
+    [InlineData(0.0, "on the right one, each within 4.0 kg. Then")]
+    public void The_readings_to_expect_come_with_their_range_and_with_what_must_change(double difference, string words) => Assert.Contains(words,
+        Words.English.FirstStep(Adjustment() with { HangCheckPlusMinusKg = 4, HangCheckDifferenceKg = difference }, Rig(), Numbers.Invariant), StringComparison.Ordinal);
+
     [Fact]
     public void A_step_too_small_to_set_is_not_asked_for() => Assert.Equal("The first step is smaller than can be set; leave the machine as it is.",
         Words.English.FirstStep(Adjustment(firstStep: 0.0003), Rig(), Numbers.Invariant));

@@ -73,7 +73,7 @@ public partial class WordsTests
 
     private static string[] Codes(CautionPlaces places) => [.. Cautions.For(places).Select(Cautions.CodeOf)];
 
-    private static void UsesTheTradesWords(string text)
+    internal static void UsesTheTradesWords(string text)
     {
         Assert.DoesNotMatch(LoneHangPoint(), text);
         Assert.DoesNotMatch(LoneBar(), text);

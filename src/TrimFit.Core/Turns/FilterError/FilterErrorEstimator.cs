@@ -332,6 +332,9 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             BrakeFeedbackShare = BrakeFeedback.Share(flight),
             DisturbanceRmsRadPerSec = noise.DisturbanceRms,
             DisturbanceTauSec = noise.DisturbanceTauSec,
+            Noise = noise,
+            GyroRowsPerSec = RowsPerSec(flight, FlightColumns.Gyro),
+            HeadingRowsPerSec = RowsPerSec(flight, FlightColumns.Heading),
             EffectiveSamples = covariance.EffectiveSamples,
             Condition = covariance.Condition,
             GyroBiasRadPerSec = gyroBias,
@@ -341,6 +344,9 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             Notices = [.. notices],
         };
     }
+
+    private static double RowsPerSec(FlightColumns flight, byte flag) =>
+        flight.UsedSec > 0 ? flight.Flags.Count(f => (f & flag) != 0) / flight.UsedSec : 0;
 
     private static double MeanThrust(FlightColumns flight)
     {

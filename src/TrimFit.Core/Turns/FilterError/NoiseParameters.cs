@@ -1,7 +1,7 @@
 namespace TrimFit.Core.Turns.FilterError;
 
 /// <summary>How the wing's turn follows its cause.</summary>
-internal enum ResponseOrder
+public enum ResponseOrder
 {
     /// <summary>dr/dt = (u + w − r)/τ.</summary>
     First,
@@ -10,8 +10,9 @@ internal enum ResponseOrder
 }
 
 /// <summary>Time constants and noise levels of the turn model: what the search moves, while everything linear is solved exactly.</summary>
-internal sealed record NoiseParameters
+public sealed record NoiseParameters
 {
+    /// <summary>First or second order.</summary>
     public required ResponseOrder Order { get; init; }
 
     /// <summary>First order: time constant τ, s. Not used by second order.</summary>

@@ -48,6 +48,23 @@ internal sealed class ParameterLayout
 
     public int Count => _slots.Length;
 
+    /// <summary>The priors' centres as parameters.</summary>
+    public static NoiseParameters Centre { get; } = new()
+    {
+        Order = ResponseOrder.First,
+        LagSec = Prior(Slot.Lag).Centre,
+        NaturalFrequency = Prior(Slot.Frequency).Centre,
+        Damping = Prior(Slot.Damping).Centre,
+        DisturbanceRms = Prior(Slot.DisturbanceRms).Centre,
+        DisturbanceTauSec = Prior(Slot.DisturbanceTau).Centre,
+        QuickDisturbance = Prior(Slot.Quick).Centre,
+        GyroNoise = Prior(Slot.Gyro).Centre,
+        HeadingNoise = Prior(Slot.Heading).Centre,
+        GustRms = Prior(Slot.GustRms).Centre,
+        GustTauSec = Prior(Slot.GustTau).Centre,
+        CompassNoise = Prior(Slot.Compass).Centre,
+    };
+
     private static (double Centre, double LogSd) Prior(Slot slot) => slot switch
     {
         Slot.Lag => (1.5, 0.8),

@@ -17,7 +17,7 @@ internal static class PaperTemplates
     /// <summary>The check ruler: a line from 0 to 150 mm with the id <c>check-ruler</c> and a tick every 10 mm.</summary>
     public static string CheckRuler(GroundWords words)
     {
-        var s = new Sketch(WidthMm, 16);
+        var s = new Sketch(WidthMm, 14);
         s.Path($"M{Sketch.N(LeftMm)} 8 h{Sketch.N(CheckRulerMm)}", Sketch.Ink, Bold);
         for (int mm = 0; mm <= (int)CheckRulerMm; mm += 10)
         {
@@ -26,14 +26,13 @@ internal static class PaperTemplates
             if (mm % 50 == 0)
                 s.Text(x, 12, mm.ToString(CultureInfo.InvariantCulture), size: Letter);
         }
-        s.Text(LeftMm, 15.6, words.Labels.CheckRuler, "start", Letter, Sketch.Mark);
         return s.SvgMillimetres(words.Labels.CheckRuler).Replace("<svg ", "<svg id=\"check-ruler\" ", StringComparison.Ordinal);
     }
 
     /// <summary>A strip to lay around a tube or along a bar: millimetres to both sides of 0.</summary>
     public static string Strip(GroundWords words)
     {
-        var s = new Sketch(WidthMm, 24);
+        var s = new Sketch(WidthMm, 20);
         const double Zero = WidthMm / 2;
         s.Box(2, 2, WidthMm - 4, 16, Sketch.Ink, Fine, "none", 0);
         for (int mm = -85; mm <= 85; mm++)
@@ -44,14 +43,13 @@ internal static class PaperTemplates
                 s.Text(Zero + mm, 12, mm.ToString(CultureInfo.InvariantCulture).Replace('-', '−'), size: 2.8);
         }
         s.Line(Zero, 2, Zero, 18, Sketch.Mark, Bold, "1.5 1").Text(Zero + 2, 16.6, words.Labels.FoldHere, "start", 2.6, Sketch.Mark);
-        s.Text(2, 22.4, words.Labels.Ruler, "start", Letter);
         return s.SvgMillimetres(words.Labels.Ruler);
     }
 
     /// <summary>Spacers as discs with a hole, and their thickness to lay a real one against.</summary>
     public static string Spacers(GroundWords words)
     {
-        var s = new Sketch(WidthMm, 54);
+        var s = new Sketch(WidthMm, 50);
         const double Outside = 40, Hole = 12.5;
         for (int i = 0; i < 2; i++)
         {
@@ -65,14 +63,14 @@ internal static class PaperTemplates
             s.Box(left, 5, thickness, 36, Sketch.Ink, Fine, "#f3f5f8", 0).Text(left + (thickness / 2.0), 45, thickness.ToString(CultureInfo.InvariantCulture), size: Letter);
             left += thickness + 4;
         }
-        s.Text(2, 48, words.Labels.Spacer, "start", Letter).Text(2, 52.4, words.Labels.CutOut, "start", 2.6, Sketch.Soft);
+        s.Text(2, 48, words.Labels.CutOut, "start", 2.6, Sketch.Soft);
         return s.SvgMillimetres(words.Labels.Spacer);
     }
 
     /// <summary>A plumb protractor for the hang-back, −10 to 20 deg around a thread with a weight.</summary>
     public static string Protractor(GroundWords words)
     {
-        var s = new Sketch(WidthMm, 92);
+        var s = new Sketch(WidthMm, 87);
         const double X = WidthMm / 2, Y = 6, Radius = 74;
         s.Box(X - 60, 2, 120, 4, Sketch.Ink, Fine, "#f3f5f8", 0).Circle(X, Y, 0.7, Sketch.Ink, Fine, Sketch.Ink);
         for (int deg = -20; deg <= 20; deg++)
@@ -83,7 +81,7 @@ internal static class PaperTemplates
             if (deg % 5 == 0)
                 s.Text(X + ((Radius + 4) * sin), Y + ((Radius + 4) * cos) + 1, Math.Abs(deg).ToString(CultureInfo.InvariantCulture), size: Letter);
         }
-        s.Line(X, Y, X, Y + Radius, Sketch.Mark, Fine, "2 1.5").Text(X, 91, words.Labels.AngleScale, size: Letter);
+        s.Line(X, Y, X, Y + Radius, Sketch.Mark, Fine, "2 1.5");
         return s.SvgMillimetres(words.Labels.AngleScale);
     }
 }

@@ -71,14 +71,21 @@ internal sealed record EnglishCompareWords : CompareWords
         return verdict.Code switch
         {
             ComparisonVerdictCode.Fixed => "Two one-sided tests at each of the three powers, each at 5 %, with the scatter from flight to flight counted.",
-            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance),
+            ComparisonVerdictCode.Better => "The pull became smaller, but " + NotInside(c, verdict, tolerance) + Larger(c),
             ComparisonVerdictCode.Worse => "The pull became larger: put it back as it was, or go the other way.",
             ComparisonVerdictCode.NoClearChange when verdict.ShownEqual => "What was changed does not matter to the pull, or something else moved with it.",
             ComparisonVerdictCode.NoClearChange => "Not a sign that it did not work. What is missing: a second flight of each setting, in turn (A-B-A), longer flights or calmer air.",
         };
     }
 
-    private string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
+    /// <summary>Where the pull became larger although it is smaller where it was to be nulled.</summary>
+    private static string Larger(FlightComparison c)
+    {
+        string[] larger = [.. c.Changes.Where(x => x.SizeChange95.Lower > 0).Select(x => At(x.Setting))];
+        return larger.Length == 0 ? "" : $" {Capital(Join(larger))} it became larger: a fixed shift cannot null every power.";
+    }
+
+    private static string NotInside(FlightComparison c, ComparisonVerdict verdict, string tolerance)
     {
         if (verdict.WithheldFixed)
             return "whether it is fixed cannot be said without the brakes or hands-off spans in the log.";
@@ -203,9 +210,6 @@ internal sealed record EnglishCompareWords : CompareWords
             CompareNoticeCode.BeforeAlreadyInside => "Before the change the pull already lay inside the tolerance.",
             CompareNoticeCode.NoSteering => $"Without brakes or hands-off spans in the log nothing can be called fixed: {Join([.. n])}.",
             CompareNoticeCode.ThrustBasesDiffer => "Some rig files know the thrust in newtons, others do not: all flights are compared at shares of full thrust. Give static_thrust_n in every rig file.",
-            CompareNoticeCode.BlindOrder => Value(0, s => s > 0 ? "fits" : "does not fit") is var fits && fits == "fits"
-                ? $"Blind trial: the sealed order was {Join([.. n])}, and the flights are in it."
-                : $"Blind trial: the sealed order was {Join([.. n])}, but the flights do not follow it.",
         };
     }
 
@@ -236,11 +240,11 @@ internal sealed record EnglishCompareWords : CompareWords
 
     private static string Range(ConfidenceInterval interval, Numbers numbers) => numbers.RateRange(interval, " to ");
 
-    private static string Join(IReadOnlyList<string> items) => items.Count switch
+    private static string Join(params string[] items) => items.Length switch
     {
         0 => "",
         1 => items[0],
-        _ => string.Join(", ", items.Take(items.Count - 1)) + " and " + items[^1],
+        _ => string.Join(", ", items[..^1]) + " and " + items[^1],
     };
 
     private static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];

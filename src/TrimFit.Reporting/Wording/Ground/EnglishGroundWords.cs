@@ -15,12 +15,12 @@ internal sealed record EnglishGroundWords : GroundWords
         ChecksTitle = "Checks before the flight",
         Told = "The complaint",
         Checks = "Checks, in this order",
-        Number = "No.",
-        Check = "check",
-        WriteDown = "write down",
-        Why = "why here",
+        IfItStays = "What stays goes here",
+        Check = "Check",
+        WriteDown = "Write down",
+        Why = "Why here",
         HowTo = "How to look",
-        MendFirst = "Mend what is found and fly again before any geometry is moved. What cannot be mended goes where the last column says.",
+        MendFirst = "Mend what is found and fly again before any geometry is moved. What cannot be mended goes where the lines below say.",
         ThenMeasure = "Nothing found, or the pull is still there: measure (trimfit rig RIG --sheet measuring=FILE.html), do the hang check (--sheet hang-check=FILE.html), then fly a test card.",
         HangCheck = "Hang check",
         EntryFaults = "Entries to look at again",
@@ -29,13 +29,9 @@ internal sealed record EnglishGroundWords : GroundWords
         First = "1st",
         Second = "2nd",
         Third = "3rd",
-        RigKey = "rig file",
         NowInRig = "in the rig file now",
         LeftScale = "left scale",
         RightScale = "right scale",
-        Hang = "hang",
-        Exchanged = "scales exchanged",
-        LeanRight = "leaning to the right",
         ExpectedNow = "Readings to expect from the rig file as it is",
         CentreLine = "frame's centre line",
         Pilot = "pilot",
@@ -186,6 +182,8 @@ internal sealed record EnglishGroundWords : GroundWords
             double half = 1.96 * tape.StandardDeviation;
             text += $" Tape and weighing alone give {At(tape.OffsetM, new(tape.OffsetM - half, tape.OffsetM + half, 0.95), numbers)}. The scales are used.";
         }
+        if (hang.ScattersMore)
+            return text + $" The hangs scatter by {numbers.Length(hang.SeatingSdM)}, more than pilots usually do: look for a loose strap or a twisted seat, and hang six times or more.";
         return hang.Hangs.Length < 3 ? text + " Three hangs, out and in each time, would make the range narrower." : text;
     }
 
@@ -302,7 +300,7 @@ internal sealed record EnglishGroundWords : GroundWords
 
     public override string IfItStays(SimpleCause cause) => cause switch
     {
-        SimpleCause.BrakeLines => "trim the longer line to the maker's length; never shorten below it",
+        SimpleCause.BrakeLines => "set both to the maker's length, never shorter",
         SimpleCause.Trimmers => "flight sheet: wing_trim; log both trimmers",
         SimpleCause.AcceleratorLines => "flight sheet: accelerator; fit flights without it",
         SimpleCause.Risers => "line check by a workshop; no geometry against a wing out of trim",

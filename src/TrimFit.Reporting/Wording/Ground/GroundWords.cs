@@ -1,5 +1,4 @@
 using TrimFit.Core.Ground;
-using TrimFit.Core.Rigging;
 
 namespace TrimFit.Reporting.Wording;
 
@@ -102,7 +101,7 @@ internal sealed record GroundLabels
     public required string ChecksTitle { get; init; }
     public required string Told { get; init; }
     public required string Checks { get; init; }
-    public required string Number { get; init; }
+    public required string IfItStays { get; init; }
     public required string Check { get; init; }
     public required string WriteDown { get; init; }
     public required string Why { get; init; }
@@ -116,13 +115,9 @@ internal sealed record GroundLabels
     public required string First { get; init; }
     public required string Second { get; init; }
     public required string Third { get; init; }
-    public required string RigKey { get; init; }
     public required string NowInRig { get; init; }
     public required string LeftScale { get; init; }
     public required string RightScale { get; init; }
-    public required string Hang { get; init; }
-    public required string Exchanged { get; init; }
-    public required string LeanRight { get; init; }
     public required string ExpectedNow { get; init; }
     public required string CentreLine { get; init; }
     public required string Pilot { get; init; }
