@@ -126,6 +126,7 @@ public static class TrimFitServer
         ComplaintStep.Map(app, desk);
         ReadingsStep.Map(app, desk);
         FlightStep.Map(app, desk);
+        CardStep.Map(app, desk);
         AnswerStep.Map(app, desk);
         ChangeStep.Map(app, desk);
         ProofStep.Map(app, desk);

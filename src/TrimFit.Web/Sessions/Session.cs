@@ -50,6 +50,9 @@ internal sealed class Session(string id, string folder)
     /// <summary>The latest proof of a change on the ground.</summary>
     public HangChangeReport? GroundProof { get; set; }
 
+    /// <summary>The latest test card.</summary>
+    public CardReport? Card { get; set; }
+
     /// <summary>The latest comparison.</summary>
     public CompareReport? Comparison { get; set; }
 

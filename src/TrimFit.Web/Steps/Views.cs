@@ -168,3 +168,15 @@ public sealed record BookView(WebContext Web)
 }
 
 public sealed record JobView(WebContext Web, string Path, ReportDocument Document, bool CanTakeRig, bool HasSetup);
+
+public sealed record CardView(WebContext Web)
+{
+    public bool HasRig { get; init; }
+    public string Width { get; init; } = "";
+    public string Minutes { get; init; } = "";
+    public string Floor { get; init; } = "";
+    public bool EngineOff { get; init; }
+    public IReadOnlyList<(string Value, string Name, bool Chosen)> Loggers { get; init; } = [];
+    public bool HasCard { get; init; }
+    public ReportDocument? Document { get; init; }
+}

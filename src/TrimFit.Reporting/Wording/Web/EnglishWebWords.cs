@@ -28,6 +28,7 @@ internal sealed partial record EnglishWebWords : WebWords
         "waiting" => "Waiting for other flights",
         "reading" => "Reading the log",
         "measuring" => "Measuring the pull",
+        "planning" => "Planning the card",
         "comparing" => "Comparing the flights",
         _ => "",
     };

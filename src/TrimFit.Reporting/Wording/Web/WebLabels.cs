@@ -18,6 +18,19 @@ internal sealed record WebLabels
     public required string AtFullPower { get; init; }
     public required string BookLead { get; init; }
     public required string By { get; init; }
+    public required string CardEngineOff { get; init; }
+    public required string CardFloor { get; init; }
+    public required string CardLead { get; init; }
+    public required string CardLogger { get; init; }
+    public required string CardLoggerFull { get; init; }
+    public required string CardLoggerGps { get; init; }
+    public required string CardLoggerPhone { get; init; }
+    public required string CardMinutes { get; init; }
+    public required string CardPlan { get; init; }
+    public required string CardSheet { get; init; }
+    public required string CardSpeaking { get; init; }
+    public required string CardTitle { get; init; }
+    public required string CardWidth { get; init; }
     public required string ChangeLead { get; init; }
     public required string Check { get; init; }
     public required string ChoosePart { get; init; }
