@@ -28,16 +28,19 @@ internal static class CommandTree
 
     private static Command Fit(TextWriter output, TextWriter error)
     {
-        Argument<string[]> logs = Logs();
-        var rig = new Option<string>("--rig") { Description = "The machine: a rig file (TOML).", Required = true, HelpName = "RIG" };
+        Argument<string[]> logs = Logs("Flight logs: one file, or one for each logger of the same flight; or a report page, to run it again.");
+        var rig = new Option<string?>("--rig") { Description = "The machine: a rig file (TOML).", HelpName = "RIG" };
         var sheet = new Option<string?>("--sheet") { Description = "What the pilot did: a flight sheet (TOML).", HelpName = "SHEET" };
         var card = new Option<string?>("--card") { Description = "The test card that was flown (JSON): says whether its precision was reached, and the next best leg.", HelpName = "CARD" };
+        var customer = new Option<string?>("--customer") { Description = "Write the page a workshop hands over: .html or .md.", HelpName = "FILE" };
+        var forget = new Option<bool>("--forget-place") { Description = "Drop positions before anything is measured or written; turn and speed stay." };
         var common = new CommonOptions();
-        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet, card };
+        var command = new Command("fit", "One flight (one or more loggers of it): the pull over power and the shift that nulls it.") { logs, rig, sheet, card, customer, forget };
         common.AddForPeople(command);
         common.AddForLogs(command);
         common.AddForFit(command);
-        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig)!, parsed.GetValue(sheet), parsed.GetValue(card), common.Choices(parsed), output, error));
+        command.SetAction(parsed => FitCommand.Run(parsed.GetValue(logs)!, parsed.GetValue(rig), parsed.GetValue(sheet), parsed.GetValue(card),
+            parsed.GetValue(customer) is string page ? CommonOptions.ReportPath("--customer", page) : null, parsed.GetValue(forget), common.Choices(parsed), output, error));
         return command;
     }
 
@@ -155,6 +158,6 @@ internal static class CommandTree
         return command;
     }
 
-    private static Argument<string[]> Logs() =>
-        new("LOG") { Description = "Flight logs: one file, or one for each logger of the same flight.", Arity = ArgumentArity.OneOrMore };
+    private static Argument<string[]> Logs(string description = "Flight logs: one file, or one for each logger of the same flight.") =>
+        new("LOG") { Description = description, Arity = ArgumentArity.OneOrMore };
 }

@@ -79,11 +79,16 @@ internal sealed class CommonOptions
         Balance = Balance(parsed.GetValue(_balance)),
         Tolerance = Tolerance(parsed.GetValue(_tolerance)),
         Seed = Seed(parsed.GetValue(_seed)),
+        TrimOptionsGiven = parsed.GetValue(_balance) is not null || parsed.GetValue(_tolerance) is not null || parsed.GetValue(_seed) is not null,
     };
 
-    private static string ReportPath(string path) => Path.GetExtension(path).ToUpperInvariant() is ".HTML" or ".HTM" or ".MD"
+    private static string ReportPath(string path) => ReportPath("--report", path);
+
+    /// <summary>A name that ends as a report may.</summary>
+    /// <exception cref="CommandLineException">It does not.</exception>
+    public static string ReportPath(string option, string path) => Path.GetExtension(path).ToUpperInvariant() is ".HTML" or ".HTM" or ".MD"
         ? path
-        : throw new CommandLineException($"--report: found \"{path}\", expected a name that ends in .html or .md.");
+        : throw new CommandLineException($"{option}: found \"{path}\", expected a name that ends in .html or .md.");
 
     private static UnitSystem Units(string? text) => text switch
     {
@@ -182,6 +187,9 @@ internal sealed record CommonChoices
     public required BalanceThrust Balance { get; init; }
     public required AngularRate Tolerance { get; init; }
     public required ulong? Seed { get; init; }
+
+    /// <summary>Whether any option of the analysis was given, which overrules those a report carries.</summary>
+    public bool TrimOptionsGiven { get; init; }
 
     /// <summary>Options of the analysis.</summary>
     public TrimOptions TrimOptions => new() { BalanceThrust = Balance, Tolerance = Tolerance, Seed = Seed ?? 1 };

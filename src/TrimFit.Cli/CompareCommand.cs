@@ -38,7 +38,7 @@ internal static class CompareCommand
         {
             if (!rigs.TryGetValue(flight.Rig, out (Rig Rig, SourceFile File) machine))
                 rigs[flight.Rig] = machine = InputFiles.Rig(flight.Rig);
-            FitReport fit = FitCommand.Fit(flight.Logs, machine, flight.Sheet, null, choices);
+            FitReport fit = FitCommand.Fit(flight.Logs, machine, flight.Sheet, choices);
             FlightSheet? sheet = flight.Sheet is null ? null : InputFiles.Sheet(flight.Sheet).Sheet;
             fits.Add(fit);
             compared.Add(new()

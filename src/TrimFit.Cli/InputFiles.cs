@@ -8,22 +8,46 @@ using TrimFit.Import.Joining;
 using TrimFit.Import.Results;
 using TrimFit.Import.Rigs;
 using TrimFit.Import.Sheets;
+using TrimFit.Import.Toml;
 using TrimFit.Reporting;
+using TrimFit.Reporting.Carrying;
 
 namespace TrimFit.Cli;
 
 /// <summary>Everything the program reads; a file that cannot be read becomes a <see cref="LogFormatException"/> that names it.</summary>
 internal static class InputFiles
 {
-    public static FlightImport Flight(IReadOnlyList<string> paths, CommonChoices choices, LogSettings? machine = null)
+    public static FlightImport Flight(IReadOnlyList<string> paths, CommonChoices choices, LogSettings? machine = null) => Flight(Sources(paths), choices.Columns, choices, machine);
+
+    public static FlightImport Flight(IReadOnlyList<LogSource> sources, ImmutableArray<ColumnRule> columns, CommonChoices choices, LogSettings? machine)
+    {
+        // The command line speaks before the rig file: a role named there is not looked up again.
+        ImmutableArray<ColumnRule> fromRig = machine is null ? [] : [.. machine.Columns.Where(r => !columns.Any(c => c.Role == r.Role))];
+        var options = new ImportOptions { Columns = [.. columns, .. fromRig], Strict = choices.Strict, Progress = choices.Quiet ? null : ReadingProgress.ForTerminal() };
+        return Readable(string.Join(", ", sources.Select(s => s.Name)), () => FlightReader.Read(sources, options));
+    }
+
+    public static IReadOnlyList<LogSource> Sources(IReadOnlyList<string> paths)
     {
         foreach (string path in paths.Where(path => !Directory.Exists(path))) // a folder is one recording
             MustExist(path);
-        // The command line speaks before the rig file: a role named there is not looked up again.
-        ImmutableArray<ColumnRule> fromRig = machine is null ? [] : [.. machine.Columns.Where(r => !choices.Columns.Any(c => c.Role == r.Role))];
-        var options = new ImportOptions { Columns = [.. choices.Columns, .. fromRig], Strict = choices.Strict, Progress = choices.Quiet ? null : ReadingProgress.ForTerminal() };
-        return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => FlightReader.Read(LogSources.From(paths), options));
+        return Readable(string.Join(", ", paths.Select(Path.GetFileName)), () => LogSources.From(paths));
     }
+
+    /// <summary>A rig file or sheet with its bytes as read.</summary>
+    public static CarriedFile Carry(string path)
+    {
+        MustExist(path);
+        return new(Path.GetFileName(path), SettingsFile.ReadBytes(path));
+    }
+
+    public static byte[] Bytes(LogSource source) => Readable(source.Name, () =>
+    {
+        using Stream stream = source.Open();
+        using var bytes = new MemoryStream();
+        stream.CopyTo(bytes);
+        return bytes.ToArray();
+    });
 
     public static (Rig Rig, SourceFile File) Rig(string path)
     {

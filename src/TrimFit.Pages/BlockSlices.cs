@@ -19,6 +19,7 @@ internal static class BlockSlices
         FieldsBlock b => FieldsSlice.Create(b),
         DrawnReadingsBlock b => DrawnReadingsSlice.Create(b),
         SignaturesBlock b => SignaturesSlice.Create(b),
+        LinesBlock b => LinesSlice.Create(b),
         TableBlock b => TableSlice.Create(b),
         FigureBlock b => FigureSlice.Create(b),
         CautionsBlock b => CautionsSlice.Create(b),

@@ -11,4 +11,7 @@ public sealed record PageOptions
 
     /// <summary>Small print and narrow margins, for what must fit on one side.</summary>
     public bool Compact { get; init; }
+
+    /// <summary>What the page carries of its own input, as <see cref="Reporting.Carrying.ReportInput.Pack"/> writes it; null for nothing.</summary>
+    public string? Input { get; init; }
 }

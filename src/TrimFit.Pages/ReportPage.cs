@@ -9,7 +9,8 @@ public static class ReportPage
     /// <summary>The result of <c>fit</c>.</summary>
     /// <param name="report">The result.</param>
     /// <param name="style">Units and culture.</param>
-    public static string Fit(FitReport report, ReportStyle style) => Page.Render(ReportDocuments.Fit(report, style, figures: true), new());
+    /// <param name="input">What the page carries of its own input, packed; null for nothing.</param>
+    public static string Fit(FitReport report, ReportStyle style, string? input = null) => Page.Render(ReportDocuments.Fit(report, style, figures: true), new() { Input = input });
 
     /// <summary>The result of <c>inspect</c>.</summary>
     /// <param name="report">The result.</param>

@@ -19,6 +19,15 @@ internal static class FitFacts
     /// <summary>What an adjustment's travel is measured in.</summary>
     public static TravelUnit UnitOf(AdjustmentKind kind) => Adjustment.All.FirstOrDefault(a => a.Kind == kind)?.Unit ?? TravelUnit.Meter;
 
+    /// <summary>Shown number of a coefficient's divisor over the log's: brakes in percent or mm, shifts in mm.</summary>
+    public static double ShownPerSi(string coefficient, ControlUnit brake, ControlUnit trimmer) => coefficient switch
+    {
+        TurnCoefficient.BrakeDifference => ControlUnits.ShownPerSi(brake),
+        TurnCoefficient.TrimmerDifference => ControlUnits.ShownPerSi(trimmer),
+        TurnCoefficient.CgShift => 1000,
+        _ => 1,
+    };
+
     /// <summary>Unit of a coefficient as shown.</summary>
     public static string UnitOf(string coefficient, ThrustBasis basis, ControlUnit brake, ControlUnit trimmer) => (coefficient, basis) switch
     {

@@ -19,4 +19,12 @@ public static class ReportMarkdown
 
     /// <summary>A test card.</summary>
     public static string Card(CardReport report, ReportStyle style) => MarkdownRenderer.Render(ReportDocuments.Card(report, style));
+
+    /// <summary>Any document.</summary>
+    /// <param name="document">What to write.</param>
+    public static string Of(ReportDocument document)
+    {
+        ArgumentNullException.ThrowIfNull(document);
+        return MarkdownRenderer.Render(document);
+    }
 }

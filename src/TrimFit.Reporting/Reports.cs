@@ -25,6 +25,9 @@ public sealed record FitReport
     /// <summary>Whether the flight reached what its test card promised; null without a card.</summary>
     public CardOutcome? CardOutcome { get; init; }
 
+    /// <summary>What the page carries of its own input.</summary>
+    public CarriedInput Carried { get; init; }
+
     /// <summary>The program.</summary>
     public required Provenance Provenance { get; init; }
 }

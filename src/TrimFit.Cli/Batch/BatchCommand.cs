@@ -58,7 +58,7 @@ internal static class BatchCommand
     {
         try
         {
-            FitReport report = FitCommand.Fit(flight.Logs, rig, flight.SheetPath, null, choices with { Quiet = true });
+            FitReport report = FitCommand.Fit(flight.Logs, rig, flight.SheetPath, choices with { Quiet = true });
             return (FitCommand.CodeOf(report.Analysis), null, ResultRow.Of(ReportJson.Fit(report)));
         }
         catch (LogFormatException e)

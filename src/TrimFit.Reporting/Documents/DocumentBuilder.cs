@@ -39,6 +39,8 @@ internal sealed class DocumentBuilder(Words words)
 
     public DocumentBuilder Signatures(IEnumerable<string> names) => Add(new SignaturesBlock([.. names]));
 
+    public DocumentBuilder Lines(int count) => Add(new LinesBlock(count));
+
     public DocumentBuilder PageBreak() => Add(new PageBreakBlock());
 
     public DocumentBuilder Cautions(IEnumerable<CautionCode> codes, Numbers numbers) =>

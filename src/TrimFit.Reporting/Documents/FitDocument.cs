@@ -23,15 +23,13 @@ internal static class FitDocument
         document.Answer(words.Answer(answer, numbers));
         // Strength is about moving something; where nothing needs to be moved it would only confuse.
         document.Paragraph(words.Verdict(a.Verdict.Code) + (a.Verdict.Code == VerdictCode.Balanced ? "" : " " + words.Strength(a.Verdict.Strength)));
-        WhatToDo(document, a, answer, numbers);
+        if (a.Verdict.Code == VerdictCode.ConstantPull)
+            document.Instruction(words.Report.CausesBeforeParts);
+        WhatToDo(document, a, answer, numbers, figures);
         if (figures)
-        {
-            bool after = FitAnswer.Best(a) is not null;
-            document.Heading(labels.Drawing);
-            document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, FitAnswer.Best(a), words, numbers), words.DrawingDescription(after) + " " + labels.DrawingNote, FigureKind.Drawing);
-            document.Heading(labels.TurnPlot);
-            document.Figure(TurnPlot.Draw(a, words, numbers), words.TurnPlotDescription(a.Fit.Points.Length));
-        }
+            Cautioned(document, a, numbers); // on the first screen; in a terminal the end is what people see
+        if (figures)
+            TurnPicture(document, a, numbers);
         if (report.CardOutcome is Core.Planning.CardOutcome card)
             document.Heading(words.Card.OutcomeTitle).Paragraph(words.Card.Outcome(card, numbers)).Paragraph(words.Card.NextLegs(card, numbers));
         Pull(document, a, brake, numbers);
@@ -40,31 +38,136 @@ internal static class FitDocument
             document.Heading(labels.FlightPlot);
             document.Figure(FlightPlot.Draw(a, brake, words, numbers), a.Signals.Count == 0 ? ""
                 : words.FlightPlotDescription(a.Signals.TimeSec[^1] - a.Signals.TimeSec[0], numbers));
+            Residuals(document, a, numbers);
         }
-        Adjustments(document, a, numbers);
+        Adjustments(document, a, numbers, figures);
+        if (figures)
+            RigPictures(document, a, numbers);
         Model(document, a, brake, report.Import.Flight.TrimmerUnit, numbers);
+        if (figures)
+            CovarianceTable(document, a, brake, report.Import.Flight.TrimmerUnit, numbers);
         Sensitivity(document, a.Sensitivity, numbers);
         document.Heading(labels.TwistNow);
         RigTables.At(document, a.RigReport, numbers);
+        document.Heading(words.Report.ProveWrongTitle);
+        document.List(words.Report.ProveWrong(a, answer, words, numbers));
         Data(document, report, numbers);
+        if (figures)
+            WindPicture(document, a, numbers);
         AssumptionTable(document, a.Assumptions, numbers);
         document.Heading(labels.Warnings);
         document.List([
             .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
             .. a.RigReport.GroundFaults.Select(f => words.Ground.Fault(f, numbers)),
             .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
-        document.Cautions(Cautions.Of(a), numbers);
+        if (figures)
+        {
+            Provenance(document, report);
+            TrackPicture(document, report.Import.Flight, numbers);
+        }
+        else
+        {
+            Cautioned(document, a, numbers);
+        }
         return document.Build($"{labels.ReportTitle}: {a.Rig.Name}", string.Join(", ", report.Import.Diagnostics.Files.Select(f => f.Name)));
     }
 
-    private static void WhatToDo(DocumentBuilder document, TrimAnalysis a, FitAnswer answer, Numbers numbers)
+    private static void Cautioned(DocumentBuilder document, TrimAnalysis a, Numbers numbers) => document.Cautions(Cautions.Of(a), numbers);
+
+    private static void TurnPicture(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
+    {
+        string shown = $"{document.Words.Report.PullFinding(a.Pull, numbers)} {document.Words.TurnPlotDescription(a.Fit.Points.Length)}";
+        document.Heading(document.Words.Labels.TurnPlot);
+        document.Figure(TurnPlot.Draw(a, shown, document.Words, numbers), shown);
+    }
+
+    private static void Residuals(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
+    {
+        IReadOnlyList<(TurnPoint Point, double RadPerSec)> residuals = ResidualPlot.Residuals(a.Fit);
+        if (residuals.Count == 0)
+            return;
+        double rms = Math.Sqrt(residuals.Average(r => r.RadPerSec * r.RadPerSec));
+        string shown = document.Words.Report.ResidualDescription(rms, residuals.Count, numbers);
+        document.Heading(document.Words.Report.ResidualsTitle);
+        document.Figure(ResidualPlot.Draw(a, shown, document.Words, numbers), shown);
+    }
+
+    private static void RigPictures(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
+    {
+        Words words = document.Words;
+        AdjustmentReport? best = FitAnswer.Best(a);
+        document.Heading(words.Labels.Drawing);
+        document.Figure(RigDrawing.Draw(a.Rig, a.RigReport, best, words, numbers), words.DrawingDescription(best is not null) + " " + words.Labels.DrawingNote, FigureKind.Drawing);
+        if (BehindDrawing.Forces(a.Rig, a.RigReport, best, words, numbers) is (string Svg, string Description) forces)
+        {
+            document.Heading(words.Report.ForcesTitle);
+            document.Figure(forces.Svg, forces.Description + (best is null ? "" : $" ({words.Report.NowAndAfter}, {words.PartShort(best.Kind)})"), FigureKind.Drawing);
+        }
+    }
+
+    private static void WindPicture(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
+    {
+        string shown = document.Words.Report.WindDescription(document.Words.Wind(a.Signals.Wind, numbers));
+        document.Heading(document.Words.Report.WindTitle);
+        document.Figure(GroundPlots.Wind(a.Signals, shown, document.Words, numbers), shown, FigureKind.Drawing);
+    }
+
+    private static void TrackPicture(DocumentBuilder document, FlightLog flight, Numbers numbers)
+    {
+        Words words = document.Words;
+        if (GroundPlots.Track(flight, m => words.Report.TrackDescription(m, numbers), words, numbers) is (string Svg, double LengthM) track)
+            document.Heading(words.Report.TrackTitle).Figure(track.Svg, words.Report.TrackDescription(track.LengthM, numbers), FigureKind.Drawing);
+    }
+
+    private static void Provenance(DocumentBuilder document, FitReport report)
+    {
+        Labels l = document.Words.Labels;
+        ReportWords w = document.Words.Report;
+        document.Heading(w.ProvenanceTitle);
+        List<IReadOnlyList<string>> rows = [.. report.Import.Diagnostics.Files.Select(f => (IReadOnlyList<string>)[l.File, f.Name, f.Sha256])];
+        rows.Add([w.RigFile, report.RigFile.Name, report.RigFile.Sha256]);
+        if (report.SheetFile is SourceFile sheet)
+            rows.Add([w.SheetFile, sheet.Name, sheet.Sha256]);
+        document.Table([new(l.Source, false), new(l.File, false), new(w.Sha256, false)], rows);
+        document.Paragraph(w.Carried(report.Carried));
+    }
+
+    private static void CovarianceTable(DocumentBuilder document, TrimAnalysis a, ControlUnit brake, ControlUnit trimmer, Numbers numbers)
+    {
+        Words words = document.Words;
+        int n = a.Fit.Coefficients.Length;
+        int[] known = [.. Enumerable.Range(0, n).Where(i => a.Fit.Coefficients[i].Estimate is not null)];
+        if (known.Length == 0)
+            return;
+        double[] scale = [.. a.Fit.Coefficients.Select(c => double.RadiansToDegrees(1) / FitFacts.ShownPerSi(c.Name, brake, trimmer))];
+        document.Heading(words.Report.CovarianceTitle).Paragraph(words.Report.CovarianceNote);
+        document.Table([new(words.Labels.Coefficient, false), .. known.Select(i => new TableColumn(words.Coefficient(a.Fit.Coefficients[i].Name)))],
+            known.Select(i => (IReadOnlyList<string>)[words.Coefficient(a.Fit.Coefficients[i].Name),
+                .. known.Select(j => numbers.Significant(a.Fit.Covariance[(i * n) + j] * scale[i] * scale[j], 3))]));
+    }
+
+    private static void WhatToDo(DocumentBuilder document, TrimAnalysis a, FitAnswer answer, Numbers numbers, bool figures)
     {
         if (answer.Adjustment is AdjustmentReport best)
             document.Heading(document.Words.Labels.WhatToDo).Instruction(document.Words.FirstStep(best, a.Rig, numbers));
+        if (figures)
+            ActionPicture(document, a, answer, numbers);
         if (a.Shift is ShiftReport shift && answer.Kind == AnswerKind.Travel)
             document.Paragraph(document.Words.Shift(shift, numbers));
         document.Heading(document.Words.Labels.WhatIsMissing);
         document.List(a.Verdict.Reasons.Where(f => f != answer.Reason).Select(f => document.Words.Finding(f, numbers))); // that one is in the answer
+        if (figures && a.Verdict.Code == VerdictCode.Insufficient)
+            document.Heading(document.Words.Report.FlyAgain).Steps(document.Words.Report.LegsToFly);
+    }
+
+    private static void ActionPicture(DocumentBuilder document, TrimAnalysis a, FitAnswer answer, Numbers numbers)
+    {
+        Words words = document.Words;
+        AdjustmentReport? first = answer.Adjustment;
+        string travel = first is null ? "" : words.Report.ToYourSide(numbers.Travel(first.FirstStep, first.Unit), first.FirstStep);
+        string shown = words.Report.BehindDescription(first, first is null ? "" : words.PartShort(first.Kind), travel, numbers);
+        document.Heading(first is null ? words.Report.BehindAsItIsTitle : words.Report.BehindTitle);
+        document.Figure(BehindDrawing.Action(a.Rig, a.RigReport, first, a.Verdict.Code == VerdictCode.Balanced, shown, words, numbers), shown, FigureKind.Drawing);
     }
 
     private static void Pull(DocumentBuilder document, TrimAnalysis a, ControlUnit brake, Numbers numbers)
@@ -102,7 +205,7 @@ internal static class FitDocument
         return shown == 0 ? size : $"{size} {words.Side(shown)}";
     }
 
-    private static void Adjustments(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
+    private static void Adjustments(DocumentBuilder document, TrimAnalysis a, Numbers numbers, bool figures)
     {
         Words words = document.Words;
         Labels l = words.Labels;
@@ -123,6 +226,12 @@ internal static class FitDocument
             a.Adjustments.Select(x => (IReadOnlyList<string>)[words.PartShort(x.Kind), .. settings.Select(s =>
                 x.TurnLeftAt.FirstOrDefault(t => t.Setting == s)?.RateRadPerSec is double r ? numbers.RateNumber(r) : "-")]));
         document.Paragraph(l.TurnLeftNote);
+        if (figures)
+        {
+            string shown = words.Report.TurnLeftDescription(words.PartShort(a.Adjustments[0].Kind),
+                a.Adjustments[0].TurnLeftAt.FirstOrDefault(t => t.Setting == PowerSetting.Full)?.RateRadPerSec, numbers);
+            document.Figure(TurnLeftPlot.Draw(a, shown, words, numbers), shown);
+        }
         document.Heading(l.WhatElseChanges);
         document.Table(
             [new(l.PartToMove, false), new(l.ThrustLine), new(l.TwistRatio), new(l.TwistUpTo), new(l.TwistToward, false),

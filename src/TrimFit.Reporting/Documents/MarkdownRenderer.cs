@@ -52,6 +52,10 @@ internal static class MarkdownRenderer
                     foreach (string name in signatures.Names)
                         text.Append("- ").Append(Escape(name)).Append(": ").Append(Escape(TextRenderer.Line)).Append('\n');
                     break;
+                case LinesBlock lines:
+                    for (int i = 0; i < lines.Count; i++)
+                        text.Append(Escape(TextRenderer.Line)).Append("\n\n");
+                    break;
                 case PageBreakBlock:
                     text.Append("---\n");
                     break;

@@ -57,4 +57,24 @@ public static class ReportDocuments
         ArgumentNullException.ThrowIfNull(style);
         return CardDocument.Build(report, Words.English, new Numbers(style));
     }
+
+    /// <summary>The page a workshop hands over.</summary>
+    /// <param name="page">What goes into it; what is missing becomes a line to write on.</param>
+    /// <param name="style">Units and culture.</param>
+    public static ReportDocument Customer(CustomerPage page, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(page);
+        ArgumentNullException.ThrowIfNull(style);
+        return CustomerDocument.Build(page, Words.English, new Numbers(style));
+    }
+
+    /// <summary>What a flight's result can fill into the page a workshop hands over.</summary>
+    /// <param name="report">The result.</param>
+    /// <param name="style">Units and culture.</param>
+    public static CustomerPage CustomerOf(FitReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        return CustomerDocument.Of(report, Words.English, new Numbers(style));
+    }
 }

@@ -60,6 +60,10 @@ internal static class TextRenderer
                     foreach (string name in signatures.Names)
                         Wrap(text, $"{Safe(name)}: {Line}", "", "  ");
                     break;
+                case LinesBlock lines:
+                    for (int i = 0; i < lines.Count; i++)
+                        text.Append(Line).Append('\n');
+                    break;
                 case PageBreakBlock:
                     text.Append('\n');
                     break;

@@ -79,7 +79,7 @@ internal static class FlightPlot
         plot.YLabel(label);
         TurnPlot.Axes(plot);
         plot.Axes.SetLimitsX(time[0] / 60, time[^1] / 60);
-        plot.Layout.Fixed(new PixelPadding(78, 14, last ? 104 : 30, 8));
+        plot.Layout.Fixed(new PixelPadding(78, 18, last ? 104 : 30, 14));
         return plot;
     }
 

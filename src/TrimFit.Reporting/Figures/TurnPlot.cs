@@ -15,7 +15,7 @@ internal static class TurnPlot
     private const int Steps = 60;
 
     /// <summary>The figure; null when there is neither a line nor a point to draw.</summary>
-    public static string? Draw(TrimAnalysis analysis, Words words, Numbers numbers)
+    public static string? Draw(TrimAnalysis analysis, string description, Words words, Numbers numbers)
     {
         TurnFit fit = analysis.Fit;
         Labels l = words.Labels;
@@ -68,7 +68,7 @@ internal static class TurnPlot
         Limits(plot, line, fit, x(full));
         Axes(plot);
         plot.ShowLegend(Edge.Bottom);
-        return SvgFigure.Stack("turn", Width, [(plot, Height)], l.TurnPlot, words.TurnPlotDescription(fit.Points.Length));
+        return SvgFigure.Stack("turn", Width, [(plot, Height)], l.TurnPlot, description);
     }
 
     /// <summary>Letters large enough to be read when the page is on a phone.</summary>

@@ -157,6 +157,10 @@ internal sealed record EnglishWords : Words
 
     public override Web.WebWords Web { get; } = new Web.EnglishWebWords();
 
+    public override ReportWords Report { get; } = new EnglishReportWords();
+
+    public override CustomerWords Customer { get; } = new EnglishCustomerWords();
+
     public override GroundWords Ground { get; } = new EnglishGroundWords();
     public override CardWords Card { get; } = new EnglishCardWords();
 

@@ -79,17 +79,20 @@ internal sealed class Numbers
 
     public string TravelUnitName(TravelUnit unit) => unit switch { TravelUnit.Radian => "deg", TravelUnit.Kilogram => MassUnit, _ => LengthUnit };
 
+    /// <summary>A distance flown: kilometres or miles.</summary>
+    public string Distance(double m) => Imperial ? Plain(m / MetersPerMile, 1) + " miles" : Plain(m / 1000, 1) + " km";
+
     public string Force(double n) => ForceNumber(n) + " " + ForceUnit;
     public string ForceNumber(double n) => Plain(ForceValue(n), 0);
     public double ForceValue(double n) => Imperial ? n / PhysicalConstants.NewtonsPerPoundForce : n;
     public string Mass(double kg) => MassNumber(kg) + " " + MassUnit;
     public string MassNumber(double kg) => Plain(Imperial ? kg / KilogramsPerPound : kg, 1);
+    public double SpeedValue(double mPerSec) => Imperial ? mPerSec / MetersPerMile * 3600 : mPerSec;
     public string Speed(double mPerSec) => Plain(Imperial ? mPerSec / MetersPerMile * 3600 : mPerSec, 1) + " " + SpeedUnit;
     public string Moment(double nm) => MomentNumber(nm) + " " + MomentUnit;
     public string MomentNumber(double nm) => Plain(Imperial ? nm / PhysicalConstants.NewtonsPerPoundForce / MetersPerFoot : nm, 1);
     /// <summary>Height above ground, in feet rounded up to tens so that a floor stays a floor.</summary>
     public string Height(double m) => Imperial ? Plain(10 * Math.Ceiling((m / MetersPerFoot / 10) - 1e-9), 0) + " ft" : Plain(m, 0) + " m";
-    public string Distance(double m) => Imperial ? Plain(m / MetersPerMile, 1) + " miles" : Plain(m / 1000, 1) + " km";
     public string Angle(double rad) => AngleNumber(rad) + " deg";
     public string AngleNumber(double rad) => Plain(double.RadiansToDegrees(rad), 1);
     public string Percent(double fraction) => PercentNumber(fraction) + " %";

@@ -18,6 +18,12 @@ internal abstract record Words
     /// <summary>The job book.</summary>
     public abstract JobWords Jobs { get; }
 
+    /// <summary>Texts of the written report.</summary>
+    public abstract ReportWords Report { get; }
+
+    /// <summary>Texts of the customer's page.</summary>
+    public abstract CustomerWords Customer { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
 

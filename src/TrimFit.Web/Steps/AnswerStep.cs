@@ -26,6 +26,7 @@ internal static class AnswerStep
         desk.Get(app, Path, ShowAsync);
         desk.Get(app, Path + "/report.html", visit => With(visit, a => visit.DocumentAsync(ReportPage.Fit(a.Report, visit.Session.Style), FileName(a, ".html"))));
         desk.Get(app, Path + "/print", visit => With(visit, a => visit.DocumentAsync(ReportPage.Fit(a.Report, visit.Session.Style))));
+        desk.Get(app, Path + "/customer", visit => With(visit, a => visit.DocumentAsync(Page.Render(ReportDocuments.Customer(ReportDocuments.CustomerOf(a.Report, visit.Session.Style), visit.Session.Style), new() { Compact = true }))));
         desk.Get(app, Path + "/result.json", visit => With(visit, a => visit.FileAsync(a.Json, "application/json", FileName(a, ".json"))));
         desk.Get(app, MovePath, visit => With(visit, a => MoveAsync(visit, a)));
     }
@@ -44,7 +45,9 @@ internal static class AnswerStep
             links.Add((MovePath, web.L.WhatIfIMove, false));
             links.Add((ChangeStep.Path, web.L.MakeChange, false));
         }
+        links.Add((CardStep.Path, web.L.CardTitle, false));
         links.Add((Path + "/print", web.L.Print, false));
+        links.Add((Path + "/customer", web.L.CustomerPage, false));
         links.Add((Path + "/report.html", web.L.SaveReport, true));
         links.Add((Path + "/result.json", web.L.SaveJson, true));
         if (answer.Kept is (long job, int))

@@ -12,7 +12,7 @@ public class PageTests
         new AnswerBlock(Hostile), new HeadingBlock(Hostile), new ParagraphBlock(Hostile), new InstructionBlock(Hostile), new ListBlock([Hostile]),
         new StepsBlock([Hostile]), new ChecksBlock([new(Hostile), new("done", true)]), new FieldsBlock([new(Hostile, Hostile), new("to write", null, 2)]),
         new DrawnReadingsBlock("<svg></svg>", Hostile, Hostile, [Hostile, Hostile, Hostile], [new(Hostile, Hostile, Hostile, 1)]),
-        new SignaturesBlock([Hostile]), new TableBlock([new(Hostile, false), new("number")], [[Hostile, "1"]]), new FigureBlock("<svg></svg>", Hostile),
+        new SignaturesBlock([Hostile]), new LinesBlock(2), new TableBlock([new(Hostile, false), new("number")], [[Hostile, "1"]]), new FigureBlock("<svg></svg>", Hostile),
         new CautionsBlock([(Hostile, Hostile)]), new PageBreakBlock(),
     ];
 

@@ -56,7 +56,7 @@ public partial class ReportPageTests
     public void Each_figure_is_well_formed_scales_and_is_named_for_those_who_cannot_see_it()
     {
         XElement[] figures = Figures(Page());
-        Assert.Equal(["The rig from above", "Turn rate against thrust", "The flight over time"], figures.Select(f => Child(f, "title")));
+        Assert.Equal(["What to move, seen from behind", "Turn rate against thrust", "The flight over time", "Measured turn less fitted turn", "Turn left over at each power", "The rig from above", "Loads from behind, at full thrust"], figures.Select(f => Child(f, "title")));
         Assert.All(figures, f =>
         {
             Assert.Equal("img", f.Attribute("role")?.Value);
@@ -81,7 +81,7 @@ public partial class ReportPageTests
     [Fact]
     public void The_drawing_shows_now_and_after_in_millimetres()
     {
-        XElement drawing = Figures(Page())[0];
+        XElement drawing = Figures(Page())[5];
         string[] texts = [.. drawing.Descendants().Where(e => e.Name.LocalName == "text").Select(e => e.Value)];
         Assert.Contains("front harness hang points: 3 mm right → 11 mm left", texts); // 3 - 14
         Assert.Contains("rear harness hang points: 0 mm → 14 mm left", texts);
@@ -115,7 +115,7 @@ public partial class ReportPageTests
             },
         };
         string page = ReportPage.Fit(ReportFixture.Report(analysis), new());
-        Assert.Equal(["The rig from above"], Figures(page).Select(f => Child(f, "title")));
+        Assert.Equal(["The machine from behind", "The rig from above", "Loads from behind, at full thrust"], Figures(page).Select(f => Child(f, "title")));
         Assert.Contains("This flight cannot tell how hard the machine turns.", page, StringComparison.Ordinal);
     }
 

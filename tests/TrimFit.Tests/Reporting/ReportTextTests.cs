@@ -23,7 +23,7 @@ public class ReportTextTests
     {
         string[] headings = ["What to do", "Pull over power", "Ways to null it (choose one)", "Turn left over after the rounded travel, deg/s",
             "What else each way changes, at full thrust after the whole travel", "Turn model", "Sensitivity: turn rate per shift of the CG",
-            "Riser twist and loads as the machine is now", "What was read", "Columns", "Spans left out", "Assumptions", "Warnings", "Cautions"];
+            "Riser twist and loads as the machine is now", "What would prove this wrong", "What was read", "Columns", "Spans left out", "Assumptions", "Warnings", "Cautions"];
         string[] lines = ReportText.Fit(ReportFixture.Report(), new()).Split('\n');
         Assert.Equal(headings, lines.Where((line, i) => i > 0 && lines[i - 1].Length == 0 && line.Length > 0));
     }

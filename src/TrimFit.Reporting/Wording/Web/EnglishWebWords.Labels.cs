@@ -42,6 +42,7 @@ internal sealed partial record EnglishWebWords
         ComplaintLead = "What the pilot tells puts the simple causes in order. Leave out what nobody knows.",
         ComplaintTold = "Complaint, in the customer's words",
         Customer = "Customer",
+        CustomerPage = "Customer's page",
         DownloadRig = "Save the rig file (TOML)",
         Drawing = "The machine to scale",
         DrawingNote = "Drawn from what is typed, once masses, rotation and riser carabiners are there.",

@@ -41,6 +41,7 @@ internal sealed record WebLabels
     public required string ComplaintLead { get; init; }
     public required string ComplaintTold { get; init; }
     public required string Customer { get; init; }
+    public required string CustomerPage { get; init; }
     public required string DownloadRig { get; init; }
     public required string Drawing { get; init; }
     public required string DrawingNote { get; init; }
