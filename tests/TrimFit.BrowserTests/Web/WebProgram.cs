@@ -36,6 +36,7 @@ public sealed partial class WebProgram : IAsyncLifetime
             RedirectStandardError = true,
         };
         start.Environment["TMPDIR"] = UploadFolder;
+        start.Environment["DOTNET_EnableDiagnostics"] = "0"; // else the runtime puts its own pipes among the uploads
         start.Environment["XDG_DATA_HOME"] = _folder.FullName;
         _process = Process.Start(start)!;
         _process.ErrorDataReceived += (_, line) =>
