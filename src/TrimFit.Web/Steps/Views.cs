@@ -79,6 +79,11 @@ public sealed record DropView(WebContext Web, bool Straight)
 {
     public string MostBytes => Web.Options.MostUploadBytes.ToString(System.Globalization.CultureInfo.InvariantCulture);
 
+    public string Job => Web.Session.Job?.ToString(System.Globalization.CultureInfo.InvariantCulture) ?? "";
+
+    /// <summary>The question whether a flight that goes straight to its answer is kept; empty without a job.</summary>
+    public string KeepInJob => Web.Session.Job is long job && Web.Options.BookPath is not null ? Web.Words.Web.KeepStraight(job) : "";
+
     public string TooLarge => Web.Words.Web.TooLarge(Web.Options.MostUploadBytes, Web.Numbers);
 }
 

@@ -80,6 +80,8 @@ internal sealed partial record EnglishWebWords : WebWords
     public override string JobName(long number, string machine, string customer) =>
         string.Join(", ", new[] { $"job {number.ToString(CultureInfo.InvariantCulture)}", machine, customer }.Where(t => t.Length > 0));
 
+    public override string KeepStraight(long job) => $"and then keep it in job {job.ToString(CultureInfo.InvariantCulture)}, without positions";
+
     public override string OutcomeOf(string check) => $"Outcome: {check}";
 
     public override string NumberOf(string check) => $"Number found: {check}";

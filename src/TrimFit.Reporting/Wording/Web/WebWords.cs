@@ -70,6 +70,9 @@ internal abstract record WebWords
     /// <summary>A job among others.</summary>
     public abstract string JobName(long number, string machine, string customer);
 
+    /// <summary>Whether a flight that goes straight to its answer is kept.</summary>
+    public abstract string KeepStraight(long job);
+
     /// <summary>Label of a check's outcome.</summary>
     public abstract string OutcomeOf(string check);
 
