@@ -246,6 +246,40 @@ public sealed class SafetyTests(WebProgram program) : IClassFixture<WebProgram>
         Assert.Empty(Directory.EnumerateFileSystemEntries(own.UploadFolder));
     }
 
+    [Fact]
+    public async Task Another_address_says_what_it_exposes_and_wants_the_token()
+    {
+        await using var own = new WebProgram { More = ["--listen", "0.0.0.0"] };
+        await own.InitializeAsync();
+        string token = own.FirstLine[(own.FirstLine.IndexOf("?token=", StringComparison.Ordinal) + 7)..];
+        Assert.True(token.Length >= 32);
+        using WebSession stranger = own.Session();
+        foreach (string path in new[] { "/", "/flight", "/book", "/?token=wrong", "/?token=" })
+        {
+            using HttpResponseMessage refused = await stranger.Client.GetAsync(new Uri(path, UriKind.Relative));
+            Assert.Equal(HttpStatusCode.Forbidden, refused.StatusCode);
+        }
+        Assert.Contains("\"status\":\"ok\"", await stranger.Page("/health"), StringComparison.Ordinal);
+        using WebSession guest = own.Session();
+        using HttpResponseMessage let = await guest.Client.GetAsync(new Uri("/?token=" + token, UriKind.Relative));
+        Assert.Equal(HttpStatusCode.OK, let.StatusCode);
+        Assert.DoesNotContain(token, let.RequestMessage!.RequestUri!.ToString(), StringComparison.Ordinal);
+        Assert.Contains("Drop the flight here", await guest.Page("/flight"), StringComparison.Ordinal);
+        lock (own.Said)
+            Assert.Contains("can be reached by other machines", own.Said.ToString(), StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("--listen", "nowhere", "expected an address of this machine")]
+    [InlineData("--port", "99999", "expected a whole number from 0")]
+    [InlineData("--token", "short", "expected 12 or more")]
+    public void A_wrong_word_is_said(string option, string value, string expected)
+    {
+        BuiltProgram.Outcome run = BuiltProgram.Run(null, "serve", "--no-browser", option, value);
+        Assert.Equal(2, run.ExitCode);
+        Assert.Contains(expected, run.Error, StringComparison.Ordinal);
+    }
+
     private static byte[] Rig(string name) => Encoding.UTF8.GetBytes(File.ReadAllText(BuiltProgram.Sample("uncorrected-rig.toml"))
         .Replace(File.ReadLines(BuiltProgram.Sample("uncorrected-rig.toml")).First(l => l.StartsWith("name", StringComparison.Ordinal)), $"name = '{name}'", StringComparison.Ordinal));
 

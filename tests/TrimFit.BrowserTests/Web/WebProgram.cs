@@ -15,6 +15,12 @@ public sealed partial class WebProgram : IAsyncLifetime
 
     public Uri Address { get; private set; } = null!;
 
+    /// <summary>The line with the address.</summary>
+    public string FirstLine { get; private set; } = "";
+
+    /// <summary>More words for the command line.</summary>
+    public string[] More { get; init; } = [];
+
     /// <summary>Where uploads lie while they are worked on.</summary>
     public string UploadFolder => Path.Combine(_folder.FullName, "tmp");
 
@@ -30,7 +36,7 @@ public sealed partial class WebProgram : IAsyncLifetime
     public async ValueTask InitializeAsync()
     {
         Directory.CreateDirectory(UploadFolder);
-        var start = new ProcessStartInfo(Executable, ["serve", "--no-browser", "--port", "0", "--book", Path.Combine(_folder.FullName, "book.trimfit-book")])
+        var start = new ProcessStartInfo(Executable, ["serve", "--no-browser", "--port", "0", "--book", Path.Combine(_folder.FullName, "book.trimfit-book"), .. More])
         {
             RedirectStandardOutput = true,
             RedirectStandardError = true,
@@ -46,7 +52,8 @@ public sealed partial class WebProgram : IAsyncLifetime
         };
         _process.BeginErrorReadLine();
         string first = await _process.StandardOutput.ReadLineAsync() ?? throw new InvalidOperationException("the program ended: " + Said);
-        Address = new Uri(AddressOf().Match(first).Value);
+        FirstLine = first;
+        Address = new Uri(AddressOf().Match(first).Value.Replace("0.0.0.0", "127.0.0.1", StringComparison.Ordinal));
     }
 
     /// <summary>A client that keeps its cookies: one browser.</summary>
