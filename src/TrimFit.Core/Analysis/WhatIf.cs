@@ -1,6 +1,5 @@
 using System.Collections.Immutable;
 using TrimFit.Core.Rigging;
-using TrimFit.Core.Statistics;
 
 namespace TrimFit.Core.Analysis;
 
