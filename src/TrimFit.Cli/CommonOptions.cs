@@ -111,7 +111,7 @@ internal sealed class CommonOptions
         }
     }
 
-    private static ColumnRule Column(string text)
+    internal static ColumnRule Column(string text)
     {
         int equals = text.IndexOf('=', StringComparison.Ordinal);
         if (equals <= 0 || equals == text.Length - 1)

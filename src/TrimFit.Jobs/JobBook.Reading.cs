@@ -32,7 +32,7 @@ public sealed partial class JobBook
                 Verdict = r.IsDBNull(9) ? null : r.GetString(9),
                 RateRadPerSec = r.NumberOrNull(10),
                 RateInterval95 = Interval(r, 11),
-                Signed = r.GetInt64(13) != 0,
+                IsSigned = r.GetInt64(13) != 0,
             }),
     ]);
 
@@ -58,7 +58,8 @@ public sealed partial class JobBook
         return new JobBundle(job, JobBundle.NamedBy(job).ToImmutableSortedDictionary(h => h, h => (ReadOnlyMemory<byte>)ContentOf(h), StringComparer.Ordinal));
     });
 
-    /// <summary>Every measured sensitivity in the book, with the job and the wing it belongs to.</summary>
+    /// <summary>Every measured sensitivity in the book, with the job and the wing it belongs to. Of comparisons the last one of a job: it rests on what
+    /// those before it rested on.</summary>
     /// <exception cref="JobBookException">The book cannot be read.</exception>
     public ImmutableArray<MeasuredSensitivity> Sensitivities() => Reading<ImmutableArray<MeasuredSensitivity>>(() =>
     [
@@ -66,6 +67,7 @@ public sealed partial class JobBook
             SELECT s.job, CASE WHEN f.wing_id <> '' THEN f.wing_id ELSE j.wing_id END, s.source, s.log_median, s.log_sd, s.wing_area, s.suspended
             FROM sensitivity s JOIN result r ON r.job = s.job AND r.number = s.result
                 JOIN flight f ON f.job = r.job AND f.number = r.flight JOIN job j ON j.id = s.job
+            WHERE r.kind <> 'compare' OR r.number = (SELECT max(x.number) FROM result x WHERE x.job = r.job AND x.kind = 'compare')
             ORDER BY s.job, s.result, s.position
             """, r => new MeasuredSensitivity
             {

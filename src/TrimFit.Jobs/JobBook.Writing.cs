@@ -1,6 +1,5 @@
 using System.Collections.Immutable;
 using Microsoft.Data.Sqlite;
-using TrimFit.Core.Rigging;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Workshop;
 

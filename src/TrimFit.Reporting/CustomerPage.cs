@@ -41,4 +41,7 @@ public sealed record CustomerPage
 
     /// <summary>Whether the distance between the riser carabiners changed.</summary>
     public bool SpacingChanged { get; init; }
+
+    /// <summary>Who signed for the workshop and when, as it shall be read; null for a line to sign on.</summary>
+    public string? SignedBy { get; init; }
 }

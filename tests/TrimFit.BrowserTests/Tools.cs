@@ -10,6 +10,9 @@ internal static class Tools
     /// <summary>The HTML checker of the W3C, from the npm package vnu-jar.</summary>
     public static string Vnu => Need("vnu.jar (TRIMFIT_VNU_JAR)", Environment.GetEnvironmentVariable("TRIMFIT_VNU_JAR") ?? "");
 
+    /// <summary>A font that no page uses; Debian's fonts-dejavu-core has it.</summary>
+    public static string OtherFont => Need("font DejaVu Sans Mono", "/usr/share/fonts/truetype/dejavu/DejaVuSansMono.ttf");
+
     private static string Need(string name, params string[] paths)
     {
         if (paths.FirstOrDefault(File.Exists) is string found)

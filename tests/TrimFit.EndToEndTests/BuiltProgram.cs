@@ -9,7 +9,7 @@ internal static class BuiltProgram
     /// <summary>Folder of TrimFit.sln.</summary>
     public static string Root { get; } = FindRoot();
 
-    private static string Executable { get; } = FindExecutable();
+    public static string Executable { get; } = FindExecutable();
 
     /// <summary>A bundled flight's file.</summary>
     public static string Sample(string name) => Path.Combine(Root, "sample-logs", name);

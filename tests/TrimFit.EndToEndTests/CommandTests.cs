@@ -49,6 +49,9 @@ public class CommandTests
         Assert.Equal("none", result.RootElement.GetProperty("verdict").GetProperty("strength").GetString());
         Assert.Empty(result.RootElement.GetProperty("adjustments").EnumerateArray());
         Assert.NotEmpty(result.RootElement.GetProperty("verdict").GetProperty("reasons").EnumerateArray());
+        // It asks for legs to be flown again, so the cautions of a card apply.
+        string[] cautions = [.. result.RootElement.GetProperty("cautions").EnumerateArray().Select(c => c.GetProperty("code").GetString()!)];
+        Assert.Subset(cautions.ToHashSet(), new HashSet<string> { "hands-off", "engine-off", "eyes-out", "calm-air", "strong-pull", "twist", "estimate", "limits", "causes-first" });
     }
 
     [Fact]

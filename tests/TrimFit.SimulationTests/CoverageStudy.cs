@@ -33,7 +33,7 @@ internal static class CoverageStudy
 {
 
     /// <summary>Flies and fits; half the flights have a first-order wing, half a second-order one.</summary>
-    public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Func<int, bool>? goOn = null)
+    public static CoverageRow Run(string name, Sensors sensors, Hardship hardship, int flights, int seed, bool withKnown, int threads, Func<int, bool>? goOn = null, TextWriter? flightsTo = null)
     {
         var all = new FlightResult?[flights];
         int done = 0;
@@ -45,6 +45,11 @@ internal static class CoverageStudy
                 loop.Stop();
         });
         FlightResult[] results = [.. all.OfType<FlightResult>()];
+        for (int i = 0; i < flights && flightsTo is not null; i++)
+        {
+            if (all[i] is FlightResult f)
+                flightsTo.WriteLine(Details(name, i, f));
+        }
         return new CoverageRow
         {
             Name = name,
@@ -58,9 +63,30 @@ internal static class CoverageStudy
         };
     }
 
-    internal sealed record Outcome(double Truth, double Value, double StdError, double HalfWidth, double Known);
+    internal sealed record Outcome(double Truth, double Value, double StdError, double HalfWidth, double Known, double KnownStdError);
 
-    internal sealed record FlightResult(Outcome? Level, Outcome? Slope, Outcome? Brake, bool Converged, bool OrderRight);
+    internal sealed record FlightResult(Outcome? Level, Outcome? Slope, Outcome? Brake, bool Converged, bool OrderRight)
+    {
+        public TurnFit? Fit { get; init; }
+        public TurnScenario? Scenario { get; init; }
+    }
+
+    /// <summary>Heads of <see cref="Details"/>.</summary>
+    public const string DetailsHeader = "row\tflight\tlevel_truth\tlevel\tlevel_se\tlevel_half\tlevel_known\tlevel_known_se\tslope_truth\tslope\tslope_se\tslope_half\tslope_known\tslope_known_se\tbrake_truth\tbrake\tbrake_se\tbrake_half\tbrake_known\tbrake_known_se\tconverged\torder_right\tdead_band\tfreedom\teffective\tfeedback\tlag\tdisturbance_rms\tdisturbance_tau\ttrue_rms\ttrue_tau\ttrue_lag\tgyro_noise\tvelocity_noise\tgust_rms\tgust_tau\toutliers";
+
+    /// <summary>One flight of a study on one line, degrees and seconds, to look at the flights that make a number what it is.</summary>
+    private static string Details(string name, int flight, FlightResult f)
+    {
+        string Text(double value) => value.ToString("G6", CultureInfo.InvariantCulture);
+        double degrees = double.RadiansToDegrees(1);
+        string Of(Outcome? o) => o is null ? "\t\t\t\t\t" : string.Join('\t', Text(o.Truth * degrees), Text(o.Value * degrees), Text(o.StdError * degrees), Text(o.HalfWidth * degrees), Text(o.Known * degrees), Text(o.KnownStdError * degrees));
+        TurnScenario? c = f.Scenario;
+        string truth = c is null ? "\t\t\t\t\t\t" : string.Join('\t', Text(c.DisturbanceRms * degrees), Text(c.DisturbanceTau), Text(TrueNoise(c).SteadyLagSec), Text(c.GyroNoise * degrees), Text(c.VelocityNoise), Text(c.GustRms * degrees), Text(c.GustTau));
+        return string.Join('\t', name, flight.ToString(CultureInfo.InvariantCulture), Of(f.Level), Of(f.Slope), Of(f.Brake), f.Converged ? "1" : "0", f.OrderRight ? "1" : "0",
+            Text(f.Fit?.BrakeDeadBand ?? 0), Text(f.Fit?.DegreesOfFreedom ?? double.NaN), Text(f.Fit?.EffectiveSamples ?? double.NaN), Text(f.Fit?.BrakeFeedbackShare ?? double.NaN), Text(f.Fit?.LagSec ?? double.NaN),
+            Text((f.Fit?.DisturbanceRmsRadPerSec ?? double.NaN) * degrees), Text(f.Fit?.DisturbanceTauSec ?? double.NaN), truth,
+            f.Fit?.Notices.FirstOrDefault(n => n.Code == Core.Analysis.FindingCode.TurnOutliers) is { } found ? Text(found.Values[0]) : "0");
+    }
 
     internal static FlightResult One(Sensors sensors, Hardship hardship, int seed, bool secondOrder, bool withKnown)
     {
@@ -78,10 +104,10 @@ internal static class CoverageStudy
             Of(scenario.SlopePerFull, fit[TurnCoefficient.Thrust], known?[TurnCoefficient.Thrust], scenario.FullThrust),
             Of(scenario.Brake, fit[TurnCoefficient.BrakeDifference], known?[TurnCoefficient.BrakeDifference], 1),
             fit.Convergence?.Converged ?? false,
-            fit.ResponseIsSecondOrder == secondOrder);
+            fit.ResponseIsSecondOrder == secondOrder) { Fit = fit, Scenario = scenario };
 
         Outcome? Of(double truth, Estimate? estimate, Estimate? yardstick, double scale) => estimate is Estimate e
-            ? new(truth, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, yardstick is Estimate y ? y.Value * scale : double.NaN)
+            ? new(truth, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, yardstick is Estimate y ? y.Value * scale : double.NaN, yardstick is Estimate { StandardError: double se } ? se * scale : double.NaN)
             : null;
     }
 
@@ -98,10 +124,10 @@ internal static class CoverageStudy
             Of(flight.Truth.ThrustRadPerSecPerN, fit[TurnCoefficient.Thrust], flight.Truth.FullThrustN),
             Of(flight.Truth.BrakeRadPerSecPerM, fit[TurnCoefficient.BrakeDifference], 0.1), // per 100 mm
             fit.Convergence?.Converged ?? false,
-            fit.ResponseIsSecondOrder == secondOrder);
+            fit.ResponseIsSecondOrder == secondOrder) { Fit = fit };
 
         Outcome? Of(double truth, Estimate? estimate, double scale) => estimate is Estimate e
-            ? new(truth * scale, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, double.NaN)
+            ? new(truth * scale, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, double.NaN, double.NaN)
             : null;
     }
 

@@ -45,11 +45,13 @@ internal sealed class ShiftFlight
     public TurnSignals Signals { get; }
     public TurnFit Fit { get; }
 
-    /// <summary>Draws a machine, flies a short good card with two ballast legs each way, and fits it.</summary>
-    public static ShiftFlight Fly(ulong seed, KeptFits kept, EnteredWrong wrong = EnteredWrong.Nothing)
+    /// <summary>Draws a machine (its wing turning so many times as much), flies a short good card with two ballast legs each way, and fits it.</summary>
+    public static ShiftFlight Fly(ulong seed, KeptFits kept, EnteredWrong wrong = EnteredWrong.Nothing, double sensitivityFactor = 1)
     {
         Scenario s = RandomScenarios.Draw(seed, seed % 2 == 0 ? TurnResponse.FirstOrder : TurnResponse.SecondOrder);
         s = s with { Legs = Card(), Knowledge = s.Knowledge with { RotationWrong = wrong == EnteredWrong.Rotation } };
+        if (sensitivityFactor != 1)
+            s = s with { Wing = s.Wing with { SensitivityRadPerSecPerM = sensitivityFactor * s.Wing.SensitivityRadPerSecPerM } };
         SimulatedFlight flight = FlightSimulator.Fly(s);
         Rig rig = RigFileReader.Read("machine.toml", RigText.Write(s));
         FlightLog log = wrong switch
@@ -75,6 +77,8 @@ internal sealed class ShiftFlight
         TurnSignals signals = TurnSignals.From(log, rig, legs.AsSpan());
         // The rotation is the rig's word: the fit does not know it.
         EnteredWrong fitted = wrong == EnteredWrong.Rotation ? EnteredWrong.Nothing : wrong;
+        if (sensitivityFactor != 1) // no other flight of this seed
+            return new(s, flight.Truth, rig, signals, new FilterErrorEstimator().Estimate(signals));
         return new(s, flight.Truth, rig, signals, kept.Get(seed, fitted, () => new FilterErrorEstimator().Estimate(signals)));
     }
 

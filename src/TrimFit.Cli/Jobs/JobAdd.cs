@@ -44,14 +44,12 @@ internal static class JobAdd
         KeptFile rigFile = newRig ?? JobWork.RigOf(book, setup!);
         Rig rig = JobWork.ReadRig(rigFile);
 
-        FlightImport import = Read(logs, sheet, rig, choices.Common);
-        bool placeForgotten = request.ForgetPlace && LogWithoutPlace.HasPlace(import.Flight);
-        if (placeForgotten)
+        FlightImport import = Read(logs, request.ForgetPlace ? null : sheet, rig, choices.Common.Columns, choices.Common);
+        if (request.ForgetPlace)
         {
             // What is kept is what is analysed: the flight is read again from the log that has no coordinates.
-            FlightImport whole = Read(logs, null, rig, choices.Common);
-            logs = [new KeptFile(InputRecord.LogWithoutPlace, LogWithoutPlace.FileName, LogWithoutPlace.Write(whole.Flight))];
-            import = KeptFlight.Read(logs, sheet, new ImportOptions { Strict = choices.Common.Strict });
+            logs = [new KeptFile(InputRecord.LogWithoutPlace, LogWithoutPlace.FileName, LogWithoutPlace.Write(import.Flight))];
+            import = Read(logs, sheet, rig, [], choices.Common);
         }
         string wingId = request.WingId.Length > 0 ? request.WingId : job.WingId;
         ShopMemory? memory = request.WithMemory ? MemoryFor(book, number, rig) : null;
@@ -122,25 +120,30 @@ internal static class JobAdd
         Source = m.Source, LogMedian = m.LogMedian, LogSd = m.LogSd, WingAreaM2 = m.WingAreaM2, SuspendedKg = m.SuspendedKg,
     });
 
+    /// <summary>Stands between the words of two options: names of columns may hold anything else.</summary>
+    public const char OptionSeparator = '\n';
+
     /// <summary>The choices as the words of the command line, so that a result can be made again.</summary>
     public static string OptionWords(CommonChoices choices, ShopMemory? memory)
     {
         CultureInfo plain = CultureInfo.InvariantCulture;
         string balance = choices.Balance.Kind == BalanceThrustKind.Newtons ? choices.Balance.Newtons.ToString("R", plain) : CommandWords.Of(choices.Balance.Kind);
-        var words = new StringBuilder().Append(plain, $"--balance-thrust {balance} --tolerance {Math.Round(choices.Tolerance.DegPerSec, 9)} --seed {choices.TrimOptions.Seed}");
+        var words = new StringBuilder().Append(plain, $"--balance-thrust {balance}{OptionSeparator}--tolerance {Math.Round(choices.Tolerance.DegPerSec, 9)}{OptionSeparator}--seed {choices.TrimOptions.Seed}");
         foreach (ColumnRule rule in choices.Columns)
-            words.Append(plain, $" --column {ChannelRoles.NameOf(rule.Role)}={rule.Name}{(rule.Unit is null ? "" : ":" + rule.Unit)}");
+            words.Append(plain, $"{OptionSeparator}--column {ChannelRoles.NameOf(rule.Role)}={rule.Name}{(rule.Unit is null ? "" : ":" + rule.Unit)}");
         if (memory is not null)
-            words.Append(plain, $" shop_memory: {memory.Wings} wings, log_median {memory.LogMedian:R}, log_sd {memory.LogSd:R}");
+            words.Append(plain, $"{OptionSeparator}shop_memory: {memory.Wings} wings, log_median {memory.LogMedian:R}, log_sd {memory.LogSd:R}");
         return words.ToString();
     }
 
     internal static SourceFile Source(KeptFile file) => new(file.Name, Convert.ToHexStringLower(System.Security.Cryptography.SHA256.HashData(file.Bytes.Span)));
 
-    private static FlightImport Read(ImmutableArray<KeptFile> logs, KeptFile? sheet, Rig rig, CommonChoices choices)
+    /// <summary>Reads a flight that is kept or about to be. A log without its place names its columns itself.</summary>
+    public static FlightImport Read(ImmutableArray<KeptFile> logs, KeptFile? sheet, Rig rig, ImmutableArray<ColumnRule> told, CommonChoices choices)
     {
         // The command line speaks before the rig file: a role named there is not looked up again.
-        ImmutableArray<ColumnRule> columns = [.. choices.Columns, .. rig.Log.Columns.Where(r => !choices.Columns.Any(c => c.Role == r.Role))];
+        ImmutableArray<ColumnRule> columns = logs.Any(l => l.Role == InputRecord.LogWithoutPlace) ? []
+            : [.. told, .. rig.Log.Columns.Where(r => !told.Any(c => c.Role == r.Role))];
         return KeptFlight.Read(logs, sheet, new ImportOptions { Columns = columns, Strict = choices.Strict, Progress = choices.Quiet ? null : ReadingProgress.ForTerminal() });
     }
 

@@ -9,7 +9,7 @@ internal static class JobCommandTree
 {
     public static Command Create(TextWriter output, TextWriter error) => new("job", "The workshop's job book: one file with complaint, setups, flights, results, adjustments and sign-off.")
     {
-        Open(output, error), Measure(output, error), Checks(output, error), Add(output, error), Adjust(output, error), Show(output, error), List(output, error), History(output, error), Sign(output, error),
+        Open(output, error), Measure(output, error), Checks(output, error), Add(output, error), Adjust(output, error), Show(output, error), List(output, error), Compare(output, error), History(output, error), Sign(output, error),
         Export(output, error), Import(output, error), Delete(output, error),
     };
 
@@ -122,10 +122,11 @@ internal static class JobCommandTree
     private static Command Show(TextWriter output, TextWriter error)
     {
         Argument<string> job = Job();
+        Option<string> customer = Words("--customer", "Write the page the customer gets: .html or .md.", "FILE");
         var own = new JobOptions(error);
-        var command = new Command("show", "Everything about one job.") { job };
+        var command = new Command("show", "Everything about one job, and the page for the customer.") { job, customer };
         own.Add(command, report: true);
-        command.SetAction(parsed => JobWork.Show(own.Choices(parsed), Number(parsed, job), output));
+        command.SetAction(parsed => JobWork.Show(own.Choices(parsed), Number(parsed, job), parsed.GetValue(customer), output));
         return command;
     }
 
@@ -137,6 +138,20 @@ internal static class JobCommandTree
         var command = new Command("list", "Every job in one line, newest first.") { unsigned, having };
         own.Add(command);
         command.SetAction(parsed => JobWork.List(own.Choices(parsed), parsed.GetValue(unsigned), parsed.GetValue(having) ?? "", output));
+        return command;
+    }
+
+    private static Command Compare(TextWriter output, TextWriter error)
+    {
+        Argument<string> job = Job();
+        Option<string> flights = Words("--flights", "Flights to compare, in the order flown (all of the job).", "N,N");
+        Option<string> changed = Words("--changed", "What was changed; without it, what the adjustments say.", "WHAT");
+        Option<string> scatter = Words("--flight-scatter", "Known scatter of an unchanged machine's pull from flight to flight, deg/s; without it what is usual is assumed.", "DEG_S");
+        var own = new JobOptions(error);
+        var command = new Command("compare", "Did the adjustment work? The job's flights by their setups, kept as a further result.") { job, flights, changed, scatter };
+        own.AddForFit(command);
+        command.SetAction(parsed => JobCompare.Run(own.Choices(parsed), Number(parsed, job), parsed.GetValue(flights), CommonOptions.Changed(parsed.GetValue(changed)),
+            CommonOptions.Scatter(parsed.GetValue(scatter)), output));
         return command;
     }
 

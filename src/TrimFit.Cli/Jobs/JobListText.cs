@@ -30,7 +30,7 @@ internal static class JobListText
                 Number("rate_deg_s", job.RateRadPerSec);
                 Number("rate_low95", job.RateInterval95?.Lower);
                 Number("rate_high95", job.RateInterval95?.Upper);
-                json.WriteBoolean("signed", job.Signed);
+                json.WriteBoolean("signed", job.IsSigned);
                 json.WriteEndObject();
             }
             json.WriteEndArray();

@@ -27,6 +27,13 @@ internal sealed class JobOptions(TextWriter error, bool logs = false)
         }
     }
 
+    /// <summary>For a command that analyses what the book has.</summary>
+    public void AddForFit(Command command)
+    {
+        Add(command, report: true);
+        _common.AddForFit(command);
+    }
+
     /// <summary>For a command that has the others already.</summary>
     public void AddBook(Command command) => command.Options.Add(_book);
 

@@ -10,6 +10,7 @@ using TrimFit.Import.Rigs;
 using TrimFit.Jobs;
 using TrimFit.Pages;
 using TrimFit.Reporting;
+using TrimFit.Reporting.Documents;
 using TrimFit.Reporting.Jobs;
 
 namespace TrimFit.Cli;
@@ -48,10 +49,22 @@ internal static class JobWork
         return ExitCode.Done;
     }
 
-    public static int Show(JobChoices choices, long number, TextWriter output)
+    public static int Show(JobChoices choices, long number, string? customerPath, TextWriter output)
     {
+        if (customerPath is not null && Path.GetExtension(customerPath).ToUpperInvariant() is not (".HTML" or ".HTM" or ".MD"))
+            throw new CommandLineException($"--customer: found \"{customerPath}\", expected a name that ends in .html or .md.");
         using JobBook book = choices.Open(BookAccess.Read);
         var report = new JobReport { Job = book.Job(number), Provenance = ProgramVersion.Provenance };
+        if (customerPath is not null)
+        {
+            ImmutableArray<ReadingRecord> Readings(SetupRecord? setup) => setup is null ? [] : RigReadings.Of(ReadRig(RigOf(book, setup)));
+            JobRecord job = report.Job;
+            // The machine as it came: its last setup before anything was moved.
+            SetupRecord? came = job.Adjustments.IsEmpty ? job.CurrentSetup : job.Setups.Single(s => s.Number == job.Adjustments[0].FromSetup);
+            ReportDocument page = ReportDocuments.Customer(
+                JobDocuments.CustomerOf(new JobCustomerReport { Job = job, Before = Readings(came), After = Readings(job.CurrentSetup) }, choices.Common.Style), choices.Common.Style);
+            OutputFiles.Write("--customer", customerPath, Path.GetExtension(customerPath).Equals(".md", StringComparison.OrdinalIgnoreCase) ? ReportMarkdown.Of(page) : Page.Render(page, new() { Compact = true }));
+        }
         OutputFiles.Deliver(choices.Common, output, () => JobReportText.Job(report, choices.Common.Style), () => JobText.Write(report.Job),
             () => JobPage.Job(report, choices.Common.Style), () => JobReportText.JobMarkdown(report, choices.Common.Style));
         return ExitCode.Done;
@@ -62,7 +75,7 @@ internal static class JobWork
         using JobBook book = choices.Open(BookAccess.Read);
         ImmutableArray<JobSummary> jobs =
         [
-            .. book.List().Where(j => !(unsignedOnly && j.Signed)
+            .. book.List().Where(j => !(unsignedOnly && j.IsSigned)
                 && (having.Length == 0 || new[] { j.Machine, j.Customer, j.Wing, j.Complaint }.Any(t => t.Contains(having, StringComparison.OrdinalIgnoreCase)))),
         ];
         var report = new JobListReport { Jobs = jobs, BookBytes = book.SizeOnDisk(), Provenance = ProgramVersion.Provenance };
@@ -107,7 +120,7 @@ internal static class JobWork
         {
             Made = default, Name = name.Trim(), Date = date, Setup = setup.Number, Readings = readings, Note = note ?? "",
         }, JobChoices.Now);
-        output.Write(choices.Common.Json == "-" ? JobText.Write(book.Job(number)) : JobReportText.Kept(new JobEvent.Signed(signature), number, choices.Common.Style));
+        output.Write(choices.Common.Json == "-" ? JobText.Write(book.Job(number)) : JobReportText.Kept(new JobEvent.SignedOff(signature), number, choices.Common.Style));
         return ExitCode.Done;
     }
 

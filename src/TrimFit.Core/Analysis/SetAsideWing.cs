@@ -4,5 +4,5 @@ namespace TrimFit.Core.Analysis;
 /// <param name="Job">Number of the job that measured it first.</param>
 /// <param name="WingId">What tells it from others; empty when not given.</param>
 /// <param name="RadPerSecPerM">What was measured, brought to the new wing's area and load, (rad/s)/m.</param>
-/// <param name="P">How often a wing like the others would lie at least as far off.</param>
+/// <param name="P">How often a wing like the others would lie at least as far off, for the wings looked at.</param>
 public sealed record SetAsideWing(long Job, string WingId, double RadPerSecPerM, double P);

@@ -12,6 +12,9 @@ public sealed partial class TurnSignals
 
     /// <summary>A turn is strong and intended beyond this rate, unless three times the flight's own median is more (a kite turns all the time).</summary>
     private static readonly double _strongTurnRadPerSec = double.DegreesToRadians(15);
+    private const double Reached = 0.9; // of the samples stay below: the rest is the beginning of turns, and held courses
+    private const double UsedHard = 0.5; // of the brake that only 1 % of the samples exceed
+    private const double BeyondSteering = 3; // times a strong turn: a spiral, whatever made it
     private const double StrongTurnOverMedian = 3, AroundStrongTurnSec = 3, MostShare = 0.5;
 
     /// <summary>Makes a flight ready for an estimator.</summary>
@@ -57,7 +60,10 @@ public sealed partial class TurnSignals
         {
             double[] sizes = [.. rate.Where((r, i) => use[i] && double.IsFinite(r)).Select(Math.Abs)];
             double strong = Math.Max(_strongTurnRadPerSec, sizes.Length > 0 ? StrongTurnOverMedian * QuantileType7.Of(sizes, 0.5) : 0);
-            bool[] turning = Widen(time, [.. rate.Select(r => Math.Abs(r) > strong)], AroundStrongTurnSec);
+            double steered = hasBrakes ? BrakeOfTurn(strong, rate, brakes, use) : double.NaN;
+            bool[] turning = double.IsFinite(steered)
+                ? Widen(time, [.. rate.Select((r, i) => Math.Abs(brakes[i]) > steered || Math.Abs(r) > BeyondSteering * strong)], AroundStrongTurnSec)
+                : Widen(time, [.. rate.Select(r => Math.Abs(r) > strong)], AroundStrongTurnSec);
             // Where steered turns are most of the flight they are what there is to learn from, not an exception to leave out.
             bool mostOfIt = hasBrakes && use.Where((u, i) => u && turning[i]).Count() > MostShare * use.Count(u => u);
             if (!mostOfIt)
@@ -105,6 +111,19 @@ public sealed partial class TurnSignals
             YawSignConfirmed = sensors.Report.YawSignConfirmed,
             Findings = [.. findings],
         };
+    }
+
+    /// <summary>Brake difference that makes a turn of a rate: by the turn over brake that is reached where the brakes are used hard; NaN when they never are.</summary>
+    /// <remarks>Intended turns are told by what the pilot did, not by how fast the machine turned. A rate is the brakes' and the air's together, so a
+    /// choice by rate ends a span just where the air turns the machine hardest, and those ends then look like a pull (thermals, by 1 to 3 deg/s).</remarks>
+    private static double BrakeOfTurn(double strong, double[] rate, double[] brakes, bool[] use)
+    {
+        double[] sizes = [.. brakes.Where((b, i) => use[i] && double.IsFinite(b)).Select(Math.Abs)];
+        double hard = sizes.Length > 0 ? UsedHard * QuantileType7.Of(sizes, 0.99) : 0;
+        if (!(hard > 0))
+            return double.NaN;
+        double[] turnPerBrake = [.. rate.Select((r, i) => use[i] && Math.Abs(brakes[i]) > hard ? Math.Abs(r / brakes[i]) : double.NaN).Where(double.IsFinite)];
+        return turnPerBrake.Length > 0 && QuantileType7.Of(turnPerBrake, Reached) is double k and > 0 ? strong / k : double.NaN;
     }
 
     /// <summary>How much of a leg is left out at an edge that no control shows: the sheet's own tolerance.</summary>

@@ -39,5 +39,5 @@ public sealed record JobSummary
     public ConfidenceInterval? RateInterval95 { get; init; }
 
     /// <summary>Whether the machine as it is now is signed for.</summary>
-    public required bool Signed { get; init; }
+    public required bool IsSigned { get; init; }
 }

@@ -23,7 +23,7 @@ internal static class CustomerDocument
             document.Heading(c.LeftAndNormal).Paragraph(left);
         document.Heading(c.FirstFlight).Steps(c.FirstFlightSteps);
         document.Heading(c.ComeBack).List(c.ComeBackWhen);
-        document.Signatures([c.SignedWorkshop, c.SignedCustomer]);
+        document.Signatures([page.SignedBy is string signed ? $"{c.SignedWorkshop}: {signed}" : c.SignedWorkshop, c.SignedCustomer]);
         CautionPlaces places = CautionPlaces.ComplaintSheet | (page.PartMoved ? CautionPlaces.AnyAdjustment : 0) | (page.SpacingChanged ? CautionPlaces.SpacingChange : 0);
         document.Cautions(Cautions.For(places), numbers);
         return document.Build(c.Title, "");

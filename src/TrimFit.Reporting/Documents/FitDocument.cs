@@ -76,7 +76,7 @@ internal static class FitDocument
 
     private static void TurnPicture(DocumentBuilder document, TrimAnalysis a, Numbers numbers)
     {
-        string shown = $"{document.Words.Report.PullFinding(a.Pull, numbers)} {document.Words.TurnPlotDescription(a.Fit.Points.Length)}";
+        string shown = $"{document.Words.Report.PullFinding(a.Pull, numbers)} {document.Words.TurnPlotDescription(a.Fit.Points.Length, a.Fit[TurnCoefficient.Thrust] is not null)}";
         document.Heading(document.Words.Labels.TurnPlot);
         document.Figure(TurnPlot.Draw(a, shown, document.Words, numbers), shown);
     }

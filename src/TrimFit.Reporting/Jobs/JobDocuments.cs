@@ -1,5 +1,4 @@
 using System.Globalization;
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Statistics;
 using TrimFit.Core.Workshop;
 using TrimFit.Reporting.Documents;
@@ -20,6 +19,39 @@ public static class JobDocuments
         return Job(report, Words.English, new Numbers(style));
     }
 
+    /// <summary>What a job can fill into the page a workshop hands over.</summary>
+    /// <param name="report">The job with the readings before and after.</param>
+    /// <param name="style">Units and culture.</param>
+    public static CustomerPage CustomerOf(JobCustomerReport report, ReportStyle style)
+    {
+        ArgumentNullException.ThrowIfNull(report);
+        ArgumentNullException.ThrowIfNull(style);
+        var numbers = new Numbers(style);
+        JobRecord job = report.Job;
+        JobWords w = Words.English.Jobs;
+        ResultRecord[] fits = [.. job.Results.Where(r => r.Kind == ResultRecord.FitKind)];
+        SignatureRecord? signature = job.IsSigned ? job.Signatures[^1] : null; // an older one is not for the machine as it is now
+        return new()
+        {
+            Machine = job.Machine,
+            Customer = job.Customer.Length > 0 ? job.Customer : null,
+            Wing = WingOf(job) is { Length: > 0 } wing ? wing : null,
+            Date = signature is null ? null : Date(signature.Date),
+            Complaint = job.Complaint,
+            Checks = [.. job.Checks.Select(c => new CheckItem(w.CheckLine(c, numbers), c.Outcome != CheckOutcome.NotDone))],
+            Measured = fits.Length == 0 ? null : w.Measured(fits[0], fits.Length > 1 ? fits[^1] : null, numbers),
+            Changed = job.Adjustments.IsEmpty ? null : w.Changed(job.Adjustments, numbers),
+            Readings =
+            [
+                .. report.Before.Select(b => new CustomerReading(w.ReadingName(b.Key), w.ReadingValue(b, numbers),
+                    report.After.FirstOrDefault(a => a.Key == b.Key) is ReadingRecord after ? w.ReadingValue(after, numbers) : null)),
+            ],
+            PartMoved = !job.Adjustments.IsEmpty,
+            SpacingChanged = job.Adjustments.Any(a => a.Kind == Core.Rigging.AdjustmentKind.CarabinerOneSide),
+            SignedBy = signature is null ? null : w.SignedAs(signature),
+        };
+    }
+
     internal static ReportDocument Job(JobReport report, Words words, Numbers numbers)
     {
         JobRecord job = report.Job;
@@ -32,7 +64,7 @@ public static class JobDocuments
                 .Where(r => r.Text.Length > 0).Select(r => (IReadOnlyList<string>)[r.Name, r.Text]));
         document.Heading(w.Checks);
         document.Table([new(w.Date, false), new(w.Check, false), new(w.Outcome, false), new(w.Found), new(w.By, false), new(w.Notes, false)],
-            job.Checks.Select(c => (IReadOnlyList<string>)[Date(c.Made), w.CheckName(c.Code), w.OutcomeOf(c.Outcome), c.Value is double v ? numbers.Significant(v, 4) + " " + c.Unit : "", c.By, c.Note]));
+            job.Checks.Select(c => (IReadOnlyList<string>)[Date(c.Made), w.CheckName(c.Code), w.OutcomeOf(c.Outcome), c.Value is double v ? numbers.Tick(v) + " " + c.Unit : "", c.By, c.Note]));
         document.Heading(w.Setups);
         document.Table([new(w.Setup), new(w.Date, false), new(w.What, false), new(w.RigFile, false)],
             job.Setups.Select(s => (IReadOnlyList<string>)[numbers.Integer(s.Number), Date(s.Made), Join(w.SetupOrigin(s), s.Note), $"{s.RigName} {Short(s.RigSha256)}"]));
@@ -71,7 +103,7 @@ public static class JobDocuments
             report.Jobs.Select(j => (IReadOnlyList<string>)
             [
                 numbers.Integer(j.Number), Date(j.Opened), Cut(j.Machine), Cut(j.Customer), Cut(j.Wing), numbers.Integer(j.Flights), Rate(j.RateRadPerSec, numbers),
-                j.Verdict is string v ? w.VerdictWord(v) : "", j.Signed ? w.Signed : w.Unsigned,
+                j.Verdict is string v ? w.VerdictWord(v) : "", j.IsSigned ? w.Signed : w.Unsigned,
             ]));
         return document.Build(w.ListTitle, "");
     }

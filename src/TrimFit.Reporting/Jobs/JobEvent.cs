@@ -27,7 +27,7 @@ public abstract record JobEvent(DateTimeOffset At)
     public sealed record Noted(NoteRecord Note) : JobEvent(Note.Made);
 
     /// <summary>A technician signed.</summary>
-    public sealed record Signed(SignatureRecord Signature) : JobEvent(Signature.Made);
+    public sealed record SignedOff(SignatureRecord Signature) : JobEvent(Signature.Made);
 
     /// <summary>Everything that was done in a job, in the order of time.</summary>
     public static IReadOnlyList<JobEvent> Of(JobRecord job)
@@ -43,7 +43,7 @@ public abstract record JobEvent(DateTimeOffset At)
             .. job.Results.Select(r => new Found(r)),
             .. job.Adjustments.Select(a => new Adjusted(a)),
             .. job.Notes.Select(n => new Noted(n)),
-            .. job.Signatures.Select(s => new Signed(s)),
+            .. job.Signatures.Select(s => new SignedOff(s)),
         ];
         return [.. all.OrderBy(e => e.At)]; // stable: what one action wrote keeps its order
     }

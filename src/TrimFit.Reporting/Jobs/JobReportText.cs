@@ -1,4 +1,3 @@
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Ground;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;

@@ -14,6 +14,19 @@ public sealed record JobReport
     public required Provenance Provenance { get; init; }
 }
 
+/// <summary>Everything the customer's page of a job shows.</summary>
+public sealed record JobCustomerReport
+{
+    /// <summary>The job.</summary>
+    public required JobRecord Job { get; init; }
+
+    /// <summary>Readings of the machine as it came.</summary>
+    public ImmutableArray<ReadingRecord> Before { get; init; } = [];
+
+    /// <summary>Readings of the machine as it goes.</summary>
+    public ImmutableArray<ReadingRecord> After { get; init; } = [];
+}
+
 /// <summary>Everything the list of a book shows.</summary>
 public sealed record JobListReport
 {

@@ -86,6 +86,8 @@ internal static class Cautions
     public static IEnumerable<CautionCode> Of(TrimAnalysis analysis)
     {
         CautionPlaces places = PlacesOf(analysis.Adjustments.Select(a => a.Kind));
+        if (analysis.Verdict.Code == VerdictCode.Insufficient)
+            places |= CautionPlaces.Card; // it says which legs to fly again
         bool strong = analysis.Warnings.Any(w => w.Code == FindingCode.StrongPull);
         IEnumerable<CautionCode> codes = For(places);
         return strong ? codes.Append(CautionCode.StrongPull) : codes;

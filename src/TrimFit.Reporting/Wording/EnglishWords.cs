@@ -544,8 +544,8 @@ internal sealed record EnglishWords : Words
         ? "The machine seen from above: frame's centre line, thrust line, riser carabiners, harness hang points and CG, now (filled) and after the rounded travel (outlined)."
         : "The machine seen from above: frame's centre line, thrust line, riser carabiners, harness hang points and CG.";
 
-    public override string TurnPlotDescription(int points) =>
-        FormattableString.Invariant($"Turn rate against thrust: {points} windows of the flight with the brakes' part taken out, the fitted line and its 95 % band.");
+    public override string TurnPlotDescription(int points, bool fitted) =>
+        FormattableString.Invariant($"Turn rate against thrust: {points} windows of the flight with the brakes' part taken out{(fitted ? ", the fitted line and its 95 % band" : "; no line could be fitted")}.");
 
     public override string FlightPlotDescription(double durationSec, Numbers numbers) =>
         $"Thrust, brakes and turn rate over {numbers.Duration(durationSec)}; right is positive, spans left out are shaded, bars are the windows used.";

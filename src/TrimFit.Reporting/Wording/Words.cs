@@ -15,29 +15,28 @@ internal abstract record Words
     /// <summary>Titles, column heads and single words.</summary>
     public abstract Labels Labels { get; }
 
-    /// <summary>The job book.</summary>
-    public abstract JobWords Jobs { get; }
-
     /// <summary>Texts of the written report.</summary>
     public abstract ReportWords Report { get; }
 
     /// <summary>Texts of the customer's page.</summary>
     public abstract CustomerWords Customer { get; }
 
+    /// <summary>Texts of the ground work.</summary>
+    public abstract GroundWords Ground { get; }
+    /// <summary>Texts of test cards.</summary>
+    public abstract CardWords Card { get; }
+
     /// <summary>Words of the summary of many flights.</summary>
     public abstract Batch.BatchWords Batch { get; }
+
+    /// <summary>Words of before and after.</summary>
+    public abstract Comparing.CompareWords Comparing { get; }
 
     /// <summary>Texts of the local web page.</summary>
     public abstract Web.WebWords Web { get; }
 
-    /// <summary>Texts of the ground work.</summary>
-    public abstract GroundWords Ground { get; }
-
-    /// <summary>Texts of test cards.</summary>
-    public abstract CardWords Card { get; }
-
-    /// <summary>Words of before and after.</summary>
-    public abstract Comparing.CompareWords Comparing { get; }
+    /// <summary>The job book.</summary>
+    public abstract JobWords Jobs { get; }
 
     /// <summary>Right or left, from the seated pilot's place.</summary>
     public abstract string Side(double rightPositive);
@@ -130,7 +129,7 @@ internal abstract record Words
     public abstract string DrawingDescription(bool after);
 
     /// <summary>What the turn plot shows, for those who cannot see it.</summary>
-    public abstract string TurnPlotDescription(int points);
+    public abstract string TurnPlotDescription(int points, bool fitted);
 
     /// <summary>What the flight plot shows, for those who cannot see it.</summary>
     public abstract string FlightPlotDescription(double durationSec, Numbers numbers);

@@ -229,6 +229,7 @@ public class JobBookTests
     }
 
     [Fact]
+    [System.Runtime.Versioning.UnsupportedOSPlatform("windows")]
     public void Nobody_else_may_read_a_new_book()
     {
         Assert.SkipWhen(OperatingSystem.IsWindows(), "file modes are Unix's");

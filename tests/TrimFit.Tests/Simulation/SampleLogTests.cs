@@ -7,7 +7,7 @@ public class SampleLogTests
 {
     private static readonly string _folder = Path.Combine(RepositoryRoot.Path, "sample-logs");
 
-    public static TheoryData<string> Stems => ["uncorrected", "ordinary", "flat-throttle", "balanced", "over-compensated", "constant-pull"];
+    public static TheoryData<string> Stems => ["uncorrected", "ordinary", "flat-throttle", "balanced", "over-compensated", "constant-pull", "first-step"];
 
     [Theory]
     [MemberData(nameof(Stems))]

@@ -74,7 +74,9 @@ internal sealed class AugmentedFilter
 
     /// <summary>Runs the filter; with a limit, raises the noise of outlying measurements on the way, at the given coefficients.</summary>
     /// <remarks>Chang (2014), "Robust Kalman filtering based on Mahalanobis distance as outlier judging criterion", Journal of Geodesy
-    /// 88:391, doi 10.1007/s00190-013-0690-8: the noise of a measurement is raised until its squared distance meets the criterion.</remarks>
+    /// 88:391, doi 10.1007/s00190-013-0690-8: the noise of a measurement is raised until its squared distance meets the criterion. A sensor's
+    /// gross error is short. Where a sensor goes on to the same side, the machine really turns (a thermal), and the third measurement in a row is
+    /// believed: a filter that goes on mistrusting what it sees loses its way for good.</remarks>
     public double RunRobust(NoiseParameters noise, double limit)
     {
         double[] beta = [.. Coefficients];
@@ -82,7 +84,22 @@ internal sealed class AugmentedFilter
         return Run(noise, new Judge(beta, limit));
     }
 
-    private sealed record Judge(double[] Beta, double Limit);
+    /// <summary>Judge of outliers, with how many each sensor has had in a row to one side (signed).</summary>
+    private sealed record Judge(double[] Beta, double Limit)
+    {
+        public int GyroRun, HeadingRun, CompassRun;
+
+        /// <summary>Whether an outlier to a side may still be a gross error of the sensor.</summary>
+        public static bool IsShort(ref int run, double innovation)
+        {
+            int side = Math.Sign(innovation);
+            run = Math.Sign(run) == side ? run + side : side;
+            return Math.Abs(run) <= LongestError;
+        }
+    }
+
+    private const int LongestError = 2; // rows, 0.4 s
+
 
     private double Run(NoiseParameters noise, Judge? judge)
     {
@@ -103,6 +120,7 @@ internal sealed class AugmentedFilter
         double headingNoise = noise.HeadingNoise * noise.HeadingNoise;
         double compassNoise = noise.CompassNoise * noise.CompassNoise;
         bool gusts = f.HasHeading;
+        int surprises = f.Surprise.Length > 0 ? f.IndexOf(ColumnKind.RateSurprise) + 1 : 0;
         int m = 0;
         for (int i = 0; i < f.Count; i++)
         {
@@ -122,6 +140,12 @@ internal sealed class AugmentedFilter
             else
             {
                 ref readonly TurnDynamics d = ref _steps[f.StepIndex[i - 1]];
+                if (surprises > 0 && f.Surprise[i - 1] is double surprise && surprise != 0)
+                {
+                    Unsafe.Add(ref r, surprises) += surprise;
+                    Unsafe.Add(ref w, surprises + 1) += surprise;
+                    Unsafe.Add(ref s, surprises + 2) += surprise;
+                }
                 Propagate(in d, ref r, ref p, ref w, ref s, ref g, ref f.InputRows[(i - 1) * stride], stride);
 
                 double m00 = (d.Rr * p00) + (d.Rp * p01) + (d.Rw * p02), m01 = (d.Rr * p01) + (d.Rp * p11) + (d.Rw * p12);
@@ -153,7 +177,7 @@ internal sealed class AugmentedFilter
             if ((flags & FlightColumns.Gyro) != 0)
             {
                 double plain = p00 + gyroNoise;
-                double noiseHere = gyroNoise + Extra(m, plain, ref f.GyroRows[i * stride], ref r, ref r, 0);
+                double noiseHere = gyroNoise + Extra(m, FlightColumns.Gyro, plain, ref f.GyroRows[i * stride], ref r, ref r, 0);
                 double variance = p00 + noiseHere;
                 double c = 1 / variance;
                 double k0 = p00 * c, k1 = p01 * c, k2 = p02 * c, k3 = p03 * c, k4 = p04 * c;
@@ -165,7 +189,7 @@ internal sealed class AugmentedFilter
             {
                 double h0 = p03 + p04, h1 = p13 + p14, h2 = p23 + p24, h3 = p33 + p34, h4 = p34 + p44;
                 double plain = h3 + h4 + headingNoise;
-                double variance = plain + Extra(m, plain, ref f.HeadingRows[i * stride], ref s, ref g, 1);
+                double variance = plain + Extra(m, FlightColumns.Heading, plain, ref f.HeadingRows[i * stride], ref s, ref g, 1);
                 double c = 1 / variance;
                 double k0 = h0 * c, k1 = h1 * c, k2 = h2 * c, k3 = h3 * c, k4 = h4 * c;
                 Update(m++, variance, k0, k1, k2, k3, k4, ref f.HeadingRows[i * stride], ref s, ref g, 1);
@@ -175,7 +199,7 @@ internal sealed class AugmentedFilter
             {
                 double h0 = p03, h1 = p13, h2 = p23, h3 = p33, h4 = p34;
                 double plain = h3 + compassNoise;
-                double variance = plain + Extra(m, plain, ref f.CompassRows[i * stride], ref s, ref s, 0);
+                double variance = plain + Extra(m, FlightColumns.Compass, plain, ref f.CompassRows[i * stride], ref s, ref s, 0);
                 double c = 1 / variance;
                 double k0 = h0 * c, k1 = h1 * c, k2 = h2 * c, k3 = h3 * c, k4 = h4 * c;
                 Update(m++, variance, k0, k1, k2, k3, k4, ref f.CompassRows[i * stride], ref s, ref s, 0);
@@ -203,7 +227,7 @@ internal sealed class AugmentedFilter
             p44 -= h4 * k4;
         }
 
-        double Extra(int at, double plain, ref double row, ref double first, ref double second, double both)
+        double Extra(int at, byte flag, double plain, ref double row, ref double first, ref double second, double both)
         {
             if (judge is null)
                 return ExtraVariance[at];
@@ -211,7 +235,12 @@ internal sealed class AugmentedFilter
             for (int j = 1; j <= judge.Beta.Length; j++)
                 innovation += (Unsafe.Add(ref row, j) - Unsafe.Add(ref first, j) - (both * Unsafe.Add(ref second, j))) * judge.Beta[j - 1];
             double limit = judge.Limit * judge.Limit * plain;
-            double extra = innovation * innovation > limit ? plain * ((innovation * innovation / limit) - 1) : 0;
+            ref int run = ref flag == FlightColumns.Gyro ? ref judge.GyroRun : ref flag == FlightColumns.Heading ? ref judge.HeadingRun : ref judge.CompassRun;
+            double extra = 0;
+            if (innovation * innovation <= limit)
+                run = 0;
+            else if (Judge.IsShort(ref run, innovation))
+                extra = plain * ((innovation * innovation / limit) - 1);
             ExtraVariance[at] = extra;
             return extra;
         }
@@ -291,15 +320,22 @@ internal sealed class AugmentedFilter
             logs += (2 * Math.Log(_factor[(a * k) + a])) - Math.Log(_precision[a]);
         }
         int measurements = _flight.Measurements;
+        double product = 1; // a logarithm for every eight variances; they lie between 1e-9 and 1e4, so the product stays far from the limits
         for (int i = 0; i < measurements; i++)
         {
-            logs += Math.Log(_variance[i]);
+            product *= _variance[i];
+            if ((i & 7) == 7)
+            {
+                logs += Math.Log(product);
+                product = 1;
+            }
             ref double row = ref _rows[i * stride];
             double z = row;
             for (int j = 0; j < k; j++)
                 z += Unsafe.Add(ref row, j + 1) * Coefficients[j];
             _standardised[i] = z;
         }
+        logs += Math.Log(product);
         double value2 = (sum + logs + (measurements * Math.Log(Math.Tau))) / 2;
         return double.IsFinite(value2) ? value2 : double.PositiveInfinity;
     }

@@ -52,14 +52,14 @@ internal static class BrakeFeedback
         return Math.Clamp(explained / total, 0, 1);
     }
 
-    private static int Before(FlightColumns flight, int i, double seconds, int first)
+    internal static int Before(FlightColumns flight, int i, double seconds, int first)
     {
         int at = Array.BinarySearch(flight.TimeSec, first, i - first + 1, flight.TimeSec[i] - seconds);
         return at >= 0 ? at : Math.Max(first, ~at - 1);
     }
 
     /// <summary>Heading gone through since the start of the segment: the gyro summed up, or the headings themselves.</summary>
-    private static double[] Turned(FlightColumns flight)
+    internal static double[] Turned(FlightColumns flight)
     {
         double[] turned = new double[flight.Count];
         byte bit = flight.HasHeading ? FlightColumns.Heading : FlightColumns.Compass;

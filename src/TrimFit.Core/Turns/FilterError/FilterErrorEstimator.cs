@@ -25,6 +25,10 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     private const double DecidedBy = 8; // of log-likelihood: one order is e^8 times as likely as the other
     private const double CollinearInflation = 100; // variance inflation: the standard error is ten times what separate inputs would give
 
+    private const double CoarseRows = 2;
+    private const double LeastSaving = 0.7; // of the rows: less saved is not worth a second preparation
+    private const double NoGain = 1e-7; // rad/s: a prior that holds a gain at nothing
+    private const double DoubtedPart = 0.5; // of the correction: its gains are constants here, while the state's uncertainty changes along a flight
     private readonly FilterErrorOptions _options;
 
     /// <summary>Makes an estimator with the given choices.</summary>
@@ -54,7 +58,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             return Nothing(signals, reason);
 
         var filter = new AugmentedFilter(flight);
-        Chosen chosen = known is null ? Search(flight, filter) : Evaluate(flight, filter, known);
+        Chosen chosen = known is null ? Search(flight, filter, Coarse(signals, flight, thrustMoves)) : Evaluate(flight, filter, known);
         return Report(signals, flight, filter, chosen, thrustMoves, lowThrust, highThrust);
     }
 
@@ -80,7 +84,42 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         return new(result.Noise, result, result.Evaluations, 0);
     }
 
-    private Chosen Search(FlightColumns flight, AugmentedFilter filter)
+    /// <summary>The same flight in rows of twice the length, on which the time constants and noise levels are found at half the work; they are then
+    /// settled on the flight itself. Null where rows are not averaged.</summary>
+    private FlightColumns? Coarse(TurnSignals signals, FlightColumns flight, bool thrustMoves)
+    {
+        if (!(_options.BlockSec > 0))
+            return null;
+        FlightColumns? coarse = FlightPreparation.Prepare(signals, _options with { BlockSec = CoarseRows * _options.BlockSec }, thrustMoves, out _);
+        return coarse is not null && coarse.Kinds.AsSpan().SequenceEqual(flight.Kinds) && coarse.Count < LeastSaving * flight.Count ? coarse : null;
+    }
+
+    private Chosen Search(FlightColumns flight, AugmentedFilter filter, FlightColumns? coarse)
+    {
+        (ParameterLayout layout, double[] theta, int evaluations) = coarse is null ? FindOrder(flight, filter) : FindOrder(coarse, new AugmentedFilter(coarse));
+        var search = new NoiseSearch(filter, layout, flight.Measurements, flight.Coefficients);
+        if (coarse is not null)
+        {
+            // White noise of a mean goes with the root of the samples in it.
+            NoiseParameters found = layout.FromVector(theta);
+            theta = layout.ToVector(found with
+            {
+                GyroNoise = found.GyroNoise * Math.Sqrt(coarse.GyroSamplesPerRow / flight.GyroSamplesPerRow),
+                HeadingNoise = found.HeadingNoise * Math.Sqrt(coarse.HeadingSamplesPerRow / flight.HeadingSamplesPerRow),
+            });
+            layout.Clamp(theta);
+        }
+        filter.Run(layout.FromVector(theta));
+        SetCurvaturePrior(flight, filter);
+        filter.RunRobust(layout.FromVector(theta), _options.OutlierLimit);
+        double deadBand = FindDeadBand(flight, search, theta, ref evaluations);
+        // Always searched last, so that the filter holds the chosen model's run.
+        SearchResult chosen = search.From(theta, _options.MostIterations);
+        return new(chosen.Noise, chosen, evaluations + chosen.Evaluations + 2, deadBand);
+    }
+
+    /// <summary>Finds the order of the response, time constants and noise levels, roughly.</summary>
+    private (ParameterLayout Layout, double[] Theta, int Evaluations) FindOrder(FlightColumns flight, AugmentedFilter filter)
     {
         ParameterLayout firstLayout = new(ResponseOrder.First, flight.HasGyro, flight.HasHeading, flight.HasCompass);
         var first = new NoiseSearch(filter, firstLayout, flight.Measurements, flight.Coefficients);
@@ -120,7 +159,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         // Gross errors (a gyro spike of 100 deg/s) would otherwise set the noise level of the first search.
         first.Evaluate(best);
         filter.RunRobust(firstLayout.FromVector(best), 3 * _options.OutlierLimit);
-        SearchResult one = first.From(best, _options.MostIterations, NoiseSearch.Rough);
+        SearchResult one = first.From(best, _options.MostIterations, NoiseSearch.Coarse);
         SetCurvaturePrior(flight, filter);
         filter.RunRobust(one.Noise, _options.OutlierLimit);
         evaluations += one.Evaluations + 3;
@@ -149,16 +188,7 @@ public sealed class FilterErrorEstimator : ITurnEstimator
         // Both orders are compared on the same weights of measurements and the same prior of the curvature.
         double gain = Aicc(one, firstLayout.Count, flight.Measurements) - Aicc(two!, secondLayout.Count, flight.Measurements);
         bool takeSecond = gain > 0;
-        SearchResult chosen = takeSecond ? two! : one;
-        NoiseSearch search = takeSecond ? second : first;
-        filter.Run(chosen.Noise);
-        SetCurvaturePrior(flight, filter);
-        filter.RunRobust(chosen.Noise, _options.OutlierLimit);
-        double deadBand = FindDeadBand(flight, search, chosen.Theta, ref evaluations);
-        // Always searched last, so that the filter holds the chosen model's run.
-        chosen = search.From(chosen.Theta, _options.MostIterations);
-        evaluations += chosen.Evaluations + 2;
-        return new(chosen.Noise, chosen, evaluations, deadBand);
+        return takeSecond ? (secondLayout, two!.Theta, evaluations) : (firstLayout, one.Theta, evaluations);
     }
 
     /// <summary>Looks for a dead band of the brakes and puts it into the inputs when the flight asks for it clearly.</summary>
@@ -237,7 +267,8 @@ public sealed class FilterErrorEstimator : ITurnEstimator
     {
         int k = flight.Coefficients;
         double meanThrust = MeanThrust(flight);
-        FitCovariance covariance = FitCovariance.Of(flight, filter, chosen.Result, chosen.Noise.DisturbanceRms, meanThrust);
+        double[] doubt = SurpriseShift(flight, filter, chosen.Noise);
+        FitCovariance covariance = FitCovariance.Of(flight, filter, chosen.Result, chosen.Noise.DisturbanceRms, meanThrust, doubt);
         NoiseParameters noise = chosen.Noise;
         var notices = new List<Finding>();
 
@@ -343,6 +374,23 @@ public sealed class FilterErrorEstimator : ITurnEstimator
             SpansLeftOut = signals.SpansLeftOut,
             Notices = [.. notices],
         };
+    }
+
+    /// <summary>How far the gains of the brake's surprise move the coefficients, times the part of it that is doubted; empty without them.</summary>
+    private static double[] SurpriseShift(FlightColumns flight, AugmentedFilter filter, NoiseParameters noise)
+    {
+        int first = flight.IndexOf(ColumnKind.RateSurprise);
+        if (first < 0 || flight.Surprise.Length == 0)
+            return [];
+        double[] with = [.. filter.Coefficients];
+        for (int j = first; j < first + 3; j++)
+            filter.SetPriorSd(j, NoGain);
+        filter.Run(noise);
+        double[] shift = [.. with.Zip(filter.Coefficients, (a, b) => DoubtedPart * (a - b))];
+        for (int j = first; j < first + 3; j++)
+            filter.SetPriorSd(j, flight.PriorSd[j]);
+        filter.Run(noise);
+        return shift;
     }
 
     private static double RowsPerSec(FlightColumns flight, byte flag) =>

@@ -8,10 +8,11 @@ public sealed record FilterErrorOptions
     /// brake step. 0 switches averaging off.</summary>
     public double BlockSec { get; init => field = Guard.NotNegative(value); } = 0.2;
 
-    /// <summary>Standard deviation of the curvature's prior, as a share of the slope per full thrust. Default 1: riser twist bends the
-    /// pull of machines whose thrust line passes high or low by more than a quarter of the slope (DEVELOPERS.md, "Shift coverage"), and an
-    /// interval that rules such a bend out does not hold the pull.</summary>
-    public double CurvatureShare { get; init => field = Guard.Positive(value); } = 1;
+    /// <summary>Standard deviation of the curvature's prior, as a share of the slope per full thrust. Default 0.6: riser twist bends the pull of
+    /// machines drawn at random by 0.55 times the slope and 1.2 deg/s in squares (root mean square of 3,000; DEVELOPERS.md, "Turn model"). A
+    /// quarter of the slope rules such bends out, and the interval then does not hold the pull; the whole slope makes intervals of flights
+    /// with little data wider than they need be.</summary>
+    public double CurvatureShare { get; init => field = Guard.Positive(value); } = 0.6;
 
     /// <summary>Curvature that is possible whatever the slope, rad/s at full thrust, added in squares to the share. Default 1.5 deg/s: riser twist
     /// bends the pull of a machine whose slope is small.</summary>

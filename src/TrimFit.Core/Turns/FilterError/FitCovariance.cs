@@ -17,7 +17,7 @@ internal sealed class FitCovariance
     /// <summary>Variance of each β over what it would have if it were alone.</summary>
     public required double[] Inflation { get; init; }
 
-    public static FitCovariance Of(FlightColumns flight, AugmentedFilter filter, SearchResult? search, double disturbanceRms, double meanThrust)
+    public static FitCovariance Of(FlightColumns flight, AugmentedFilter filter, SearchResult? search, double disturbanceRms, double meanThrust, ReadOnlySpan<double> doubt)
     {
         int k = flight.Coefficients;
         double[] conditional = filter.ConditionalCovariance();
@@ -90,9 +90,15 @@ internal sealed class FitCovariance
         double[] inflation = new double[k];
         for (int a = 0; a < k; a++)
             inflation[a] = conditional[(a * k) + a] * (information[(a * k) + a] + filter.PriorPrecision(a));
+        double[] matrix = Conjugate(back, likelihoodContrast, k);
+        for (int a = 0; a < doubt.Length; a++)
+        {
+            for (int b = 0; b < doubt.Length; b++)
+                matrix[(a * k) + b] += doubt[a] * doubt[b];
+        }
         return new FitCovariance
         {
-            Matrix = Conjugate(back, likelihoodContrast, k),
+            Matrix = matrix,
             DegreesOfFreedom = freedom,
             EffectiveSamples = effective,
             Condition = ConditionOf(flight, conditional),

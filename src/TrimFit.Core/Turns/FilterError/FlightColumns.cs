@@ -17,6 +17,9 @@ internal enum ColumnKind
     CompassOffset,
     CompassSine,
     CompassCosine,
+    RateSurprise,
+    DisturbanceSurprise,
+    HeadingSurprise,
 }
 
 /// <summary>One flight as the filter reads it: steps, held inputs, and one row of numbers for each measurement.</summary>
@@ -76,6 +79,9 @@ internal sealed class FlightColumns
 
     /// <summary>Seconds of flight the rows cover.</summary>
     public required double UsedSec { get; init; }
+
+    /// <summary>The brake's surprise at each row, which corrects the states through columns of its own from that row on; empty where there is none.</summary>
+    public double[] Surprise { get; set; } = [];
 
     public required bool[] HandsOff { get; init; }
 

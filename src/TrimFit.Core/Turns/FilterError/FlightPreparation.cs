@@ -8,6 +8,7 @@ internal static class FlightPreparation
     private const double LongestGapSec = 10; // after a longer pause nothing is known of the turn any more
     private const double LongestHeadingGapSec = 4; // without a gyro the heading may have gone round unseen
     private const double LeastAirspeedShare = 0.4; // of the fitted airspeed: below it the direction of the air velocity means nothing
+    private const double SurpriseGainSd = Math.PI / 180; // rad/s or rad for one standard deviation of the surprise: as uncertain as the state itself is between fixes
     private const double TimeGrainSec = 1e-5; // steps equal to within this share one discretisation
 
     /// <summary>Why a flight has no rows, or null when it has.</summary>
@@ -25,7 +26,7 @@ internal static class FlightPreparation
         double[] air = hasHeading ? AirHeadings(s) : [];
         double block = BlockLength(s.TimeSec, options.BlockSec);
         List<Group> groups = GroupSamples(s, use, air, block);
-        if (groups.Count < 60)
+        if (groups.Count(g => g.Gyro + g.Air + g.Compass > 0) < 60)
         {
             reason = onlyHandsOff ? "too little of the flight is marked hands-off and measured" : "too few measurements of the turn are usable";
             return null;
@@ -68,6 +69,9 @@ internal static class FlightPreparation
                 kinds.Add(ColumnKind.CompassOffset);
             kinds.AddRange([ColumnKind.CompassSine, ColumnKind.CompassCosine]);
         }
+        bool surprises = brakeScale > 0 && !hasGyro; // with a gyro the log knows the turn as well as the pilot does
+        if (surprises)
+            kinds.AddRange([ColumnKind.RateSurprise, ColumnKind.DisturbanceSurprise, ColumnKind.HeadingSurprise]);
         int k = kinds.Count;
         int stride = (k + 1 + 3) / 4 * 4;
         double full = s.FullThrust > 0 ? s.FullThrust : 1;
@@ -91,6 +95,7 @@ internal static class FlightPreparation
                 ColumnKind.WindEast => (1, double.Hypot(1, 3 * s.Wind!.EastStdError)),
                 ColumnKind.CompassOffset => (1, double.DegreesToRadians(60)),
                 ColumnKind.CompassSine or ColumnKind.CompassCosine => (1, double.DegreesToRadians(10)),
+                ColumnKind.RateSurprise or ColumnKind.DisturbanceSurprise or ColumnKind.HeadingSurprise => (1, SurpriseGainSd),
                 _ => (1.0, quarterTurn),
             };
         }
@@ -167,11 +172,15 @@ internal static class FlightPreparation
         // holds the measurement's own noise lets the fit explain the heading by itself (a likelihood without its Jacobian), and brake and
         // disturbance then shrink towards nothing.
         double expected = 0;
+        double lastMeasuredTime = double.NaN;
         double compassAhead = double.NaN; // compass minus air heading, followed so that both stay on the same turn of the circle
         for (int i = 0; i < n; i++)
         {
             Group g = groups[i];
-            bool fresh = i == 0 || g.AfterBreak || time[i] - time[i - 1] > LongestGapSec;
+            bool anything = g.Gyro + g.Air + g.Compass > 0;
+            bool fresh = i == 0 || g.AfterBreak || (anything && time[i] - lastMeasuredTime > LongestGapSec);
+            if (anything || i == 0)
+                lastMeasuredTime = time[i];
             if (!fresh && !hasGyro && headingKnown && (g.Air > 0 || g.Compass > 0) && time[i] - lastHeadingTime > LongestHeadingGapSec)
                 fresh = true;
             if (fresh)
@@ -272,7 +281,7 @@ internal static class FlightPreparation
             if ((flags[i + 1] & FlightColumns.Reset) == 0)
                 used += time[i + 1] - time[i];
         }
-        return new FlightColumns
+        var flight = new FlightColumns
         {
             Count = n,
             Stride = stride,
@@ -300,6 +309,9 @@ internal static class FlightPreparation
             UsedSec = used,
             HandsOff = [.. groups.Select(g => s.HandsOff[g.First])],
         };
+        if (surprises)
+            flight.Surprise = BrakeSurprise.Of(flight);
+        return flight;
     }
 
     /// <summary>Samples that become one row.</summary>
@@ -338,7 +350,7 @@ internal static class FlightPreparation
             steps[i] = time[i + 1] - time[i];
         Array.Sort(steps);
         double median = steps[steps.Length / 2];
-        int samples = (int)Math.Floor((wanted / median) + 1e-6);
+        int samples = (int)Math.Floor((wanted / median) + 0.05); // steps jitter: 0.1003 s is a step of 0.1 s
         return samples >= 2 ? samples * median : 0;
     }
 
@@ -383,15 +395,16 @@ internal static class FlightPreparation
                 return;
             Group g = open;
             open = null;
-            if (g.Gyro + g.Air + g.Compass == 0)
-                return; // inputs only; they are read from the columns themselves
+            // A row without a measurement carries the inputs on: over a second between fixes their mean is no substitute.
+            if (g.Gyro + g.Air + g.Compass == 0 && (block == 0 || groups.Count == 0))
+                return;
             double sum = 0;
             int count = 0;
             for (int j = g.First; j <= g.Last; j++)
             {
-                bool counts = g.Gyro > 0 ? double.IsFinite(s.GyroRadPerSec[j])
+                bool counts = g.Gyro + g.Air + g.Compass == 0 || (g.Gyro > 0 ? double.IsFinite(s.GyroRadPerSec[j])
                     : g.Air > 0 ? double.IsFinite(air[j])
-                    : double.IsFinite(s.HeadingRad[j]);
+                    : double.IsFinite(s.HeadingRad[j]));
                 if (counts)
                 {
                     sum += s.TimeSec[j];

@@ -41,6 +41,9 @@ internal sealed class NoiseSearch
     /// <summary>The same for a search that only prepares another: a third of a standard error.</summary>
     public const double Rough = 5e-2;
 
+    /// <summary>The same for a search that only finds which measurements are outliers: one standard error.</summary>
+    public const double Coarse = 0.5;
+
     private const double LargestStep = 1.2; // in the logarithm, times 3.3
 
     private readonly AugmentedFilter _filter;

@@ -34,7 +34,7 @@ internal static class TurnPoints
             for (int i = from; i <= to; i++)
             {
                 ReadOnlySpan<double> input = flight.InputRows.AsSpan(i * flight.Stride, flight.Stride);
-                thrust += slope >= 0 ? input[slope + 1] : 0;
+                thrust += slope >= 0 ? input[slope + 1] * full : 0;
                 for (int j = 0; j < k; j++)
                 {
                     if (flight.Kinds[j] is ColumnKind.Brake or ColumnKind.Trimmer or ColumnKind.CgShift)
@@ -63,7 +63,23 @@ internal static class TurnPoints
                 turn = (rows[headingTo * flight.Stride] - rows[headingFrom * flight.Stride]) / (flight.TimeSec[headingTo] - flight.TimeSec[headingFrom]);
             else
                 return;
-            points.Add(new(flight.TimeSec[from], flight.TimeSec[to], thrust / count * full, turn - (controls / count), flight.HandsOff[from]));
+            double mean = slope >= 0 || !signals.HasThrust ? thrust / count : MeanThrust(signals, flight.TimeSec[from], flight.TimeSec[to]);
+            points.Add(new(flight.TimeSec[from], flight.TimeSec[to], mean, turn - (controls / count), flight.HandsOff[from]));
         }
+    }
+
+    /// <summary>A thrust that hardly moved has no column; its windows still lie where they were flown.</summary>
+    private static double MeanThrust(TurnSignals signals, double fromSec, double toSec)
+    {
+        double sum = 0;
+        int count = 0;
+        for (int i = 0; i < signals.Count; i++)
+        {
+            if (signals.TimeSec[i] < fromSec || signals.TimeSec[i] > toSec || !double.IsFinite(signals.Thrust[i]))
+                continue;
+            sum += signals.Thrust[i];
+            count++;
+        }
+        return count > 0 ? sum / count : 0;
     }
 }

@@ -115,41 +115,59 @@ internal sealed record EnglishJobWords : JobWords
         return code.Replace('_', ' ');
     }
 
-    public override string Reading(ReadingRecord reading, Numbers numbers)
+    public override string Reading(ReadingRecord reading, Numbers numbers) => $"{ReadingName(reading.Key)} {ReadingValue(reading, numbers)}";
+
+    public override string ReadingName(string key) => key switch
     {
-        string name = reading.Key switch
-        {
-            "carabiners.left_mm" => "left riser carabiner",
-            "carabiners.right_mm" => "right riser carabiner",
-            "hang_points.front_offset_mm" => "middle of the front harness hang points",
-            "hang_points.rear_offset_mm" => "middle of the rear harness hang points",
-            "hang_points.front_left_mm" => "left front harness hang point",
-            "hang_points.front_right_mm" => "right front harness hang point",
-            "hang_points.rear_left_mm" => "left rear harness hang point",
-            "hang_points.rear_right_mm" => "right rear harness hang point",
-            "hang_check.left_kg" => "hang check left",
-            "hang_check.right_kg" => "hang check right",
-            "propeller.thrust_line_mm" => "thrust line",
-            _ => reading.Key[(reading.Key.IndexOf('.', StringComparison.Ordinal) + 1)..].Replace('_', ' '),
-        };
+        "carabiners.left_mm" => "left riser carabiner",
+        "carabiners.right_mm" => "right riser carabiner",
+        "hang_points.front_offset_mm" => "middle of the front harness hang points",
+        "hang_points.rear_offset_mm" => "middle of the rear harness hang points",
+        "hang_points.front_left_mm" => "left front harness hang point",
+        "hang_points.front_right_mm" => "right front harness hang point",
+        "hang_points.rear_left_mm" => "left rear harness hang point",
+        "hang_points.rear_right_mm" => "right rear harness hang point",
+        "hang_check.left_kg" => "hang check left",
+        "hang_check.right_kg" => "hang check right",
+        "propeller.thrust_line_mm" => "thrust line",
+        _ => key[(key.IndexOf('.', StringComparison.Ordinal) + 1)..].Replace('_', ' '),
+    };
+
+    public override string ReadingValue(ReadingRecord reading, Numbers numbers)
+    {
         bool lateral = reading.Key.StartsWith("carabiners.", StringComparison.Ordinal) || reading.Key.StartsWith("hang_points.", StringComparison.Ordinal) || reading.Key == "propeller.thrust_line_mm";
         // As measured: not rounded to what a workshop can set.
         string Measured(double mm) => numbers.Imperial ? numbers.Plain(Math.Abs(mm) / 25.4, 2) + " in" : numbers.Tick(Math.Abs(mm)) + " mm";
-        return lateral ? $"{name} {Measured(reading.Value)}{(reading.Value == 0 ? "" : " " + Side(reading.Value))}"
-            : reading.Key.StartsWith("hang_check.", StringComparison.Ordinal) ? $"{name} {numbers.Mass(reading.Value)}"
-            : $"{name} {numbers.Tick(reading.Value)}";
+        return lateral ? Measured(reading.Value) + (reading.Value == 0 ? "" : " " + Side(reading.Value))
+            : reading.Key.StartsWith("hang_check.", StringComparison.Ordinal) ? numbers.Mass(reading.Value)
+            : numbers.Tick(reading.Value);
     }
+
+    public override string Measured(ResultRecord first, ResultRecord? last, Numbers numbers)
+    {
+        string before = first.RateRadPerSec is double b ? $"On the first flight it turned {Side(b)} at {numbers.Rate(Math.Abs(b))} with the brakes even." : "The first flight could not tell the pull.";
+        string after = last is null ? "" : last.RateRadPerSec is double a ? $" On the last one it turned {Side(a)} at {numbers.Rate(Math.Abs(a))}." : " The last one could not tell it.";
+        return before + after;
+    }
+
+    public override string Changed(IEnumerable<AdjustmentRecord> adjustments, Numbers numbers) =>
+        string.Join(" ", adjustments.Select(a => $"Moved, by the readings: {Words.English.PartShort(a.Kind)} {Words.English.Travel(a.Travel, FitFacts.UnitOf(a.Kind), numbers)}."));
+
+    public override string CheckLine(CheckRecord check, Numbers numbers) =>
+        $"{CheckName(check.Code)}: {OutcomeOf(check.Outcome)}{(check.Value is double v ? $", {numbers.Tick(v)} {check.Unit}" : "")}{Tail(check.Note)}";
+
+    public override string SignedAs(SignatureRecord signature) => $"{signature.Name}, {JobDocuments.Date(signature.Date)}";
 
     public override string Event(JobEvent what, Numbers numbers) => what switch
     {
         JobEvent.Opened e => $"opened: {e.Job.Complaint}",
         JobEvent.Measured e => $"setup {Text(e.Setup.Number)} measured: {e.Setup.RigName}{Tail(e.Setup.Note)}",
-        JobEvent.Checked e => $"check: {CheckName(e.Check.Code)} {OutcomeOf(e.Check.Outcome)}{(e.Check.Value is double v ? $", {numbers.Significant(v, 4)} {e.Check.Unit}" : "")}{Tail(e.Check.Note)}",
+        JobEvent.Checked e => "check: " + CheckLine(e.Check, numbers),
         JobEvent.Flown e => $"flight {Text(e.Flight.Number)} with setup {Text(e.Flight.Setup)}: {string.Join(", ", e.Flight.Inputs.Select(i => i.Name))}",
         JobEvent.Found e => Found1(e.Result, numbers),
         JobEvent.Adjusted e => $"{Moved(e.Adjustment, numbers)}; setup {Text(e.Adjustment.FromSetup)} became setup {Text(e.Adjustment.ToSetup)}{Tail(e.Adjustment.Note)}",
         JobEvent.Noted e => $"note: {e.Note.Text}",
-        JobEvent.Signed e => $"signed by {e.Signature.Name} for setup {Text(e.Signature.Setup)}",
+        JobEvent.SignedOff e => $"signed by {e.Signature.Name} for setup {Text(e.Signature.Setup)}",
         _ => throw new ArgumentOutOfRangeException(nameof(what)),
     };
 
@@ -157,12 +175,12 @@ internal sealed record EnglishJobWords : JobWords
     {
         JobEvent.Opened e => $"Job {Text(job)} is open: {e.Job.Machine}.",
         JobEvent.Measured e => $"Job {Text(job)} has setup {Text(e.Setup.Number)} ({e.Setup.RigName}).",
-        JobEvent.Checked e => $"Job {Text(job)}, check {Text(e.Check.Number)}: {CheckName(e.Check.Code)} {OutcomeOf(e.Check.Outcome)}.",
+        JobEvent.Checked e => $"Job {Text(job)}, check {Text(e.Check.Number)}: {CheckLine(e.Check, numbers)}.",
         JobEvent.Flown e => $"Job {Text(job)}, flight {Text(e.Flight.Number)} is kept with its result (setup {Text(e.Flight.Setup)}).",
         JobEvent.Found e => $"Job {Text(job)}, result {Text(e.Result.Number)} is kept: {Found1(e.Result, numbers)}.",
         JobEvent.Adjusted e => $"Job {Text(job)}, setup {Text(e.Adjustment.ToSetup)}: {Moved(e.Adjustment, numbers)}.",
         JobEvent.Noted => $"Job {Text(job)}: the note is kept.",
-        JobEvent.Signed e => $"Job {Text(job)}, setup {Text(e.Signature.Setup)} is signed by {e.Signature.Name} on {JobDocuments.Date(e.Signature.Date)}. The word is theirs; TrimFit approves nothing.",
+        JobEvent.SignedOff e => $"Job {Text(job)}, setup {Text(e.Signature.Setup)} is signed by {e.Signature.Name} on {JobDocuments.Date(e.Signature.Date)}. The word is theirs; TrimFit approves nothing.",
         _ => throw new ArgumentOutOfRangeException(nameof(what)),
     };
 

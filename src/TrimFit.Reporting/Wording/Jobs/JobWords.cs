@@ -73,6 +73,24 @@ internal abstract record JobWords
     /// <summary>One reading as measured.</summary>
     public abstract string Reading(ReadingRecord reading, Numbers numbers);
 
+    /// <summary>What was read, such as <c>left riser carabiner</c>.</summary>
+    public abstract string ReadingName(string key);
+
+    /// <summary>A reading's number with its unit and side.</summary>
+    public abstract string ReadingValue(ReadingRecord reading, Numbers numbers);
+
+    /// <summary>The first and the last flight for the customer, without statistics.</summary>
+    public abstract string Measured(ResultRecord first, ResultRecord? last, Numbers numbers);
+
+    /// <summary>What was moved, for the customer.</summary>
+    public abstract string Changed(IEnumerable<AdjustmentRecord> adjustments, Numbers numbers);
+
+    /// <summary>One check for the customer.</summary>
+    public abstract string CheckLine(CheckRecord check, Numbers numbers);
+
+    /// <summary>Who signed and when.</summary>
+    public abstract string SignedAs(SignatureRecord signature);
+
     /// <summary>One line of a history.</summary>
     public abstract string Event(JobEvent what, Numbers numbers);
 

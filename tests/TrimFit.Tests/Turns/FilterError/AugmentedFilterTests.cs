@@ -25,7 +25,7 @@ public class AugmentedFilterTests
     internal static readonly NoiseParameters SecondOrder = FirstOrder with { Order = ResponseOrder.Second, NaturalFrequency = 1.2, Damping = 0.45 };
 
     /// <summary>A short flight with uneven time stamps, holes in both sensors and a span left out.</summary>
-    private static FlightColumns Ragged(double seconds, double blockSec, int seed, bool compass = false)
+    private static FlightColumns Ragged(double seconds, double blockSec, int seed, bool compass = false, bool withGyro = true)
     {
         var random = new Gauss(seed);
         TurnScenario scenario = TurnScenario.Random(random, false, Sensors.GyroAndGps, Hardship.None) with { DurationSec = seconds };
@@ -39,14 +39,14 @@ public class AugmentedFilterTests
             ThrustBasis = s.ThrustBasis,
             FullThrust = s.FullThrust,
             HasThrust = true,
-            BrakeDifference = [.. keep.Select(i => 0.1 * Math.Sin(i / 17.0))],
+            BrakeDifference = [.. keep.Select(i => (0.1 * Math.Sin(i / 17.0)) + (withGyro ? 0 : 0.01 * random.Normal()))],
             HasBrakes = true,
             TrimmerDifference = [.. keep.Select(i => i > s.Count / 2 ? 0.2 : 0)],
-            GyroRadPerSec = gyro,
+            GyroRadPerSec = withGyro ? gyro : [],
             RotationRatioSquared = [.. keep.Select(i => s.RotationRatioSquared[i])],
             HeadingRad = compass ? [.. keep.Select(i => i % 7 == 0 ? Math.IEEERemainder((0.02 * i) + 1, Math.Tau) : double.NaN)] : [],
-            VelocityNorth = [.. keep.Select(i => s.VelocityNorth[i])],
-            VelocityEast = [.. keep.Select(i => s.VelocityEast[i])],
+            VelocityNorth = [.. keep.Select(i => withGyro || i % 10 == 0 ? s.VelocityNorth[i] : double.NaN)],
+            VelocityEast = [.. keep.Select(i => withGyro || i % 10 == 0 ? s.VelocityEast[i] : double.NaN)],
             Wind = s.Wind,
             Use = [.. keep.Select(i => i < s.Count / 3 || i > s.Count * 2 / 5)],
             HandsOff = [.. keep.Select(i => s.HandsOff[i])],
@@ -78,6 +78,30 @@ public class AugmentedFilterTests
             Assert.True(Math.Abs(fast.Coefficients[j] - readable.Coefficients[j]) < 1e-7 * se, $"{flight.Kinds[j]}");
             Accuracy.AgreesTo(7, readable.Covariance[diagonal], covariance[diagonal]);
         }
+    }
+
+    [Theory]
+    [InlineData(false)]
+    [InlineData(true)]
+    public void Without_a_gyro_the_brakes_surprise_corrects_the_state_in_both_filters_alike(bool second)
+    {
+        FlightColumns flight = Ragged(120, 0.2, 9, withGyro: false);
+        NoiseParameters noise = second ? SecondOrder : FirstOrder;
+        var fast = new AugmentedFilter(flight);
+        double value = fast.Run(noise);
+        var readable = new ReadableTurnFilter(flight, noise);
+        readable.Run();
+
+        Assert.Contains(flight.Surprise, s => s != 0);
+        Assert.Contains(flight.Flags, f => (f & (FlightColumns.Gyro | FlightColumns.Heading | FlightColumns.Compass)) == 0); // rows that carry inputs only
+        Accuracy.AgreesTo(9, readable.LogLikelihood, -value);
+        for (int j = 0; j < flight.Coefficients; j++)
+        {
+            double se = Math.Sqrt(readable.Covariance[(j * flight.Coefficients) + j]);
+            Assert.True(Math.Abs(fast.Coefficients[j] - readable.Coefficients[j]) < 1e-7 * se, $"{flight.Kinds[j]}");
+        }
+        int gain = flight.IndexOf(ColumnKind.RateSurprise);
+        Assert.True(readable.Covariance[(gain * flight.Coefficients) + gain] < 0.9 * flight.PriorSd[gain] * flight.PriorSd[gain], "the flight says nothing of the gain");
     }
 
     [Theory]

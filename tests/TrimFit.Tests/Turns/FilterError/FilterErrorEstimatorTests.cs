@@ -153,6 +153,8 @@ public class FilterErrorEstimatorTests
         Assert.Equal("thrust stayed between 400 and 402 N", fit.Coefficients[1].Reason);
         Assert.Equal("cannot be told from the growth with thrust: thrust stayed between 400 and 402 N", fit.Coefficients[0].Reason);
         Assert.NotNull(fit[TurnCoefficient.BrakeDifference]);
+        Assert.NotEmpty(fit.Points);
+        Assert.All(fit.Points, p => Assert.InRange(p.Thrust, 400, 402)); // drawn where they were flown
     }
 
     [Fact]

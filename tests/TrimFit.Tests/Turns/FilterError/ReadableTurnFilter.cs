@@ -114,6 +114,13 @@ internal sealed class ReadableTurnFilter
             }
             for (int j = 0; j < _k; j++)
                 transition[(a * _n) + 5 + j] = exponential[(a * 6) + 5] * _flight.InputRows[((i - 1) * _flight.Stride) + j + 1];
+            // The brake's surprise corrects rate, disturbance and heading before the step.
+            (ColumnKind Kind, int State)[] corrected = [(ColumnKind.RateSurprise, 0), (ColumnKind.DisturbanceSurprise, 2), (ColumnKind.HeadingSurprise, 3)];
+            foreach ((ColumnKind kind, int state) in corrected)
+            {
+                if (_flight.IndexOf(kind) is int at and >= 0 && _flight.Surprise.Length > 0)
+                    transition[(a * _n) + 5 + at] += phi[(a * 5) + state] * _flight.Surprise[i - 1];
+            }
         }
         return (transition, noise, input);
     }
