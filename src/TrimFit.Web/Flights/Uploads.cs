@@ -4,7 +4,6 @@ using System.Text;
 using Microsoft.AspNetCore.Http;
 using TrimFit.Import;
 using TrimFit.Import.Joining;
-using TrimFit.Import.Rigs;
 using TrimFit.Web.Sessions;
 
 namespace TrimFit.Web.Flights;

@@ -1,8 +1,6 @@
 using System.Collections.Immutable;
 using System.Globalization;
-using TrimFit.Core.Analysis;
 using TrimFit.Core.Ground;
-using TrimFit.Core.Rigging;
 using TrimFit.Reporting;
 using TrimFit.Web.Flights;
 

@@ -4,12 +4,10 @@ using Microsoft.AspNetCore.Builder;
 using TrimFit.Core.Analysis;
 using TrimFit.Core.Rigging;
 using TrimFit.Pages;
-using TrimFit.Reporting;
 using TrimFit.Reporting.Documents;
 using TrimFit.Reporting.Figures;
 using TrimFit.Reporting.Wording;
 using TrimFit.Web.Flights;
-using TrimFit.Web.Sessions;
 using TrimFit.Web.Templates;
 
 namespace TrimFit.Web.Steps;

@@ -1,13 +1,11 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using Microsoft.AspNetCore.Builder;
-using Microsoft.AspNetCore.Http;
 using TrimFit.Core.Rigging;
 using TrimFit.Core.Workshop;
 using TrimFit.Import;
 using TrimFit.Jobs;
 using TrimFit.Pages;
-using TrimFit.Reporting;
 using TrimFit.Reporting.Documents;
 using TrimFit.Reporting.Jobs;
 using TrimFit.Reporting.Wording;
@@ -92,7 +90,7 @@ internal static class BookStep
             [
                 .. jobs.Reverse().Take(500).Select(j => (PathOf(j.Number), (IReadOnlyList<string>)
                     [web.Numbers.Integer(j.Number), j.Opened.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture), j.Machine, j.Customer, j.Wing, web.Numbers.Integer(j.Flights),
-                        j.Verdict is string v ? w.VerdictWord(v) : "", j.Signed ? w.Signed : w.Unsigned], j.Number == visit.Session.Job)),
+                        j.Verdict is string v ? w.VerdictWord(v) : "", j.IsSigned ? w.Signed : w.Unsigned], j.Number == visit.Session.Job)),
             ],
             Machine = visit.Session.Rig.Rig?.Name ?? "",
         }), problem);

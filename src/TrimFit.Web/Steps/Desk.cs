@@ -107,7 +107,7 @@ internal sealed record Visit(HttpContext Http, Session Session, Desk Desk)
 
     public WebContext Web => _web ??= Desk.WebOf(Http, Session);
 
-    public Words Words => Words.English;
+    public Words Words => Web.Words;
 
     public CancellationToken Gone => Http.RequestAborted;
 

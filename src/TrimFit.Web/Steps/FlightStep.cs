@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Globalization;
 using Microsoft.AspNetCore.Builder;
 using TrimFit.Core.Analysis;
@@ -7,7 +6,6 @@ using TrimFit.Core.Rigging;
 using TrimFit.Core.Units;
 using TrimFit.Import;
 using TrimFit.Jobs;
-using TrimFit.Reporting.Wording;
 using TrimFit.Reporting.Wording.Web;
 using TrimFit.Web.Flights;
 using TrimFit.Web.Sessions;

@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Globalization;
 using System.Text.Json;
 using Microsoft.AspNetCore.Builder;
 using TrimFit.Core.Rigging;
