@@ -7,6 +7,8 @@ using TrimFit.EndToEndTests;
 
 namespace TrimFit.BrowserTests.Web;
 
+#pragma warning disable xUnit1051 // every request here ends by the client's own time limit
+
 /// <summary>Hostile uploads and other people's sessions: a clear refusal or the right answer, little memory, everybody else untouched.</summary>
 public sealed class SafetyTests(WebProgram program) : IClassFixture<WebProgram>
 {
