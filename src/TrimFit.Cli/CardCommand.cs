@@ -19,13 +19,13 @@ internal static class CardCommand
         if (plan.Refusal is null)
         {
             if (card.SheetPath is string sheet)
-                OutputFiles.Write("--sheet", sheet, CardSheetText.Empty(report));
+                OutputFiles.Write("--sheet", sheet, CardSheetText.Empty(report, choices.Style));
             if (card.SpeakingPath is string speaking)
                 OutputFiles.Write("--speaking", speaking, SpeakingCard.Page(report, choices.Style));
             if (order is not null)
             {
                 OutputFiles.Write("--blind", card.BlindPath!, order.ToText());
-                OutputFiles.Write("--blind", Path.ChangeExtension(card.BlindPath!, null) + "-helper.txt", ReportText.HelperSlip(order.Setups, order.Commitment));
+                OutputFiles.Write("--blind", Path.ChangeExtension(card.BlindPath!, null) + "-helper.txt", ReportText.HelperSlip(order.Setups, order.Commitment, choices.Style));
             }
         }
         // Small print, so that an ordinary card fits on one side.

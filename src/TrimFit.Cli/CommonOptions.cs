@@ -21,6 +21,7 @@ internal sealed class CommonOptions
     private readonly Option<bool> _strict = new("--strict") { Description = "A row left out is an error (exit 3)." };
     private readonly Option<string?> _units = new("--units") { Description = "Units of what people read: metric or imperial.", HelpName = "metric|imperial" };
     private readonly Option<string?> _culture = new("--culture") { Description = "Number style of what people read, such as de-DE.", HelpName = "NAME" };
+    private readonly Option<string?> _language = new("--language") { Description = "Language of what people read: en (English) or de (German). JSON and messages stay English.", HelpName = "en|de" };
     private readonly Option<string[]> _column = new("--column") { Description = "What a column is; overrules every guess. May be given more than once.", HelpName = "ROLE=NAME[:UNIT]" };
     private readonly Option<string?> _balance = new("--balance-thrust") { Description = "Where the turn is to be nulled: newtons, cruise (level flight), full or even.", HelpName = "N|cruise|full|even" };
     private readonly Option<string?> _tolerance = new("--tolerance") { Description = "Turn rate that counts as no pull, deg/s (1.0).", HelpName = "DEG_S" };
@@ -37,6 +38,7 @@ internal sealed class CommonOptions
     {
         command.Options.Add(_units);
         command.Options.Add(_culture);
+        command.Options.Add(_language);
         AddQuiet(command);
     }
 
@@ -74,7 +76,7 @@ internal sealed class CommonOptions
         Reports = [.. (parsed.GetValue(_report) ?? []).Select(ReportPath)],
         Quiet = parsed.GetValue(_quiet),
         Strict = parsed.GetValue(_strict),
-        Style = new() { Units = Units(parsed.GetValue(_units)), Culture = Culture(parsed.GetValue(_culture)) },
+        Style = Style(parsed.GetValue(_units), parsed.GetValue(_culture), parsed.GetValue(_language)),
         Columns = [.. (parsed.GetValue(_column) ?? []).Select(Column)],
         Balance = Balance(parsed.GetValue(_balance)),
         Tolerance = Tolerance(parsed.GetValue(_tolerance)),
@@ -97,10 +99,21 @@ internal sealed class CommonOptions
         _ => throw new CommandLineException($"--units: found \"{text}\", expected metric or imperial."),
     };
 
-    private static CultureInfo Culture(string? name)
+    private static ReportStyle Style(string? units, string? culture, string? language)
     {
-        if (name is null)
-            return CultureInfo.InvariantCulture;
+        var style = new ReportStyle { Units = Units(units), Language = Language(language) };
+        return culture is null ? style : style with { Culture = Culture(culture) }; // else the numbers follow the language
+    }
+
+    private static ReportLanguage Language(string? text) => text switch
+    {
+        null or "en" => ReportLanguage.English,
+        "de" => ReportLanguage.German,
+        _ => throw new CommandLineException($"--language: found \"{text}\", expected en or de."),
+    };
+
+    private static CultureInfo Culture(string name)
+    {
         try
         {
             return CultureInfo.GetCultureInfo(name, predefinedOnly: true);

@@ -39,15 +39,16 @@ public static class ReportText
     /// <summary>The slip of a blind trial for who sets the machine.</summary>
     /// <param name="setups">Settings in the order of the flights.</param>
     /// <param name="commitment">Number of the sealed order.</param>
-    public static string HelperSlip(IEnumerable<string> setups, string commitment) => string.Join('\n', Words.English.Card.HelperSlip(setups, commitment)) + "\n";
+    /// <param name="style">Language; English when null.</param>
+    public static string HelperSlip(IEnumerable<string> setups, string commitment, ReportStyle? style = null) => string.Join('\n', (style?.Words ?? Words.English).Card.HelperSlip(setups, commitment)) + "\n";
 
     /// <summary>The summary of <c>batch</c>.</summary>
     public static string Batch(BatchSummary summary, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(summary);
-        return TextRenderer.Render(BatchDocument.Build(summary, Words.English, new Numbers(style)));
+        return TextRenderer.Render(BatchDocument.Build(summary, style.Words, new Numbers(style)));
     }
 
     private static string Brief(ReportDocument document, ReportStyle style) =>
-        TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
+        TextRenderer.Safe(document.Blocks.OfType<AnswerBlock>().First().Text) + "\n" + style.Words.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
 }

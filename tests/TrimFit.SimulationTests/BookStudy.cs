@@ -34,8 +34,14 @@ internal static class BookStudy
         {
             long job = book.AddJob(new()
             {
-                Number = 0, Uid = "", Opened = default, Complaint = "pulls to one side at full power", Machine = $"Demo machine {j % 40}", Customer = $"Customer {j}",
-                Wing = "Demo wing 26", WingId = $"W{j}",
+                Number = 0,
+                Uid = "",
+                Opened = default,
+                Complaint = "pulls to one side at full power",
+                Machine = $"Demo machine {j % 40}",
+                Customer = $"Customer {j}",
+                Wing = "Demo wing 26",
+                WingId = $"W{j}",
             }, rig, At(j)).Number;
             int own = (flights / jobs) + (j < flights % jobs ? 1 : 0);
             for (int f = 0; f < own; f++)
@@ -45,14 +51,26 @@ internal static class BookStudy
                     result[i] = (byte)(i % 12 == 0 ? ',' : '0' + random.NextInt32(10));
                 book.AddFlight(job, new()
                 {
-                    Setup = 1, Flown = At(j), Inputs = [log],
+                    Setup = 1,
+                    Flown = At(j),
+                    Inputs = [log],
                     Result = new()
                     {
-                        Json = result.ToArray(), Inputs = [log, rig],
+                        Json = result.ToArray(),
+                        Inputs = [log, rig],
                         Record = new()
                         {
-                            Number = 0, Made = default, Kind = ResultRecord.FitKind, Flight = 0, ProgramVersion = "0.1.0", Options = "--seed 1", Sha256 = "", Verdict = "power_pull",
-                            Strength = "weak", RateRadPerSec = 0.02 * random.NextNormal(), RateInterval95 = new ConfidenceInterval(-0.04, 0.04, 0.95),
+                            Number = 0,
+                            Made = default,
+                            Kind = ResultRecord.FitKind,
+                            Flight = 0,
+                            ProgramVersion = "0.1.0",
+                            Options = "--seed 1",
+                            Sha256 = "",
+                            Verdict = "power_pull",
+                            Strength = "weak",
+                            RateRadPerSec = 0.02 * random.NextNormal(),
+                            RateInterval95 = new ConfidenceInterval(-0.04, 0.04, 0.95),
                             Sensitivities = [new() { Source = "ballast", LogMedian = 1.6 + (0.3 * random.NextNormal()), LogSd = 0.4, WingAreaM2 = 26, SuspendedKg = 118 }],
                         },
                     },
@@ -85,7 +103,7 @@ internal static class BookStudy
         int jobs = int.Parse(Word("--jobs", "500"), CultureInfo.InvariantCulture), flights = int.Parse(Word("--flights", "5000"), CultureInfo.InvariantCulture);
         byte[][] logs = [.. Enumerable.Range(1, 4).Select(seed => LogWriters.Csv(FlightSimulator.Fly(RandomScenarios.Draw((ulong)seed)).Log))];
         var clock = Stopwatch.StartNew();
-        Make(path, jobs, flights, logs, progress: done => 
+        Make(path, jobs, flights, logs, progress: done =>
         {
             if (done % 20 == 0)
                 Console.Error.Write(string.Create(CultureInfo.InvariantCulture, $"\r{done}/{jobs} jobs, {clock.Elapsed.TotalSeconds:F0} s "));

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using TrimFit.Core.Ground;
 using TrimFit.Pages;
 using TrimFit.Reporting;
@@ -27,7 +28,7 @@ internal static class ChecksCommand
     public static int Run(ComplaintWords told, bool ask, CommonChoices choices, TextWriter output, TextWriter error)
     {
         if (ask || (told.IsEmpty && !Console.IsInputRedirected))
-            told = Ask(Console.In, error);
+            told = Ask(Console.In, error, choices.Style);
         Complaint complaint = told.Complaint();
         var report = new ChecksReport { Complaint = complaint, Checks = CheckOrder.Of(complaint), Provenance = ProgramVersion.Provenance };
         OutputFiles.Deliver(choices, output, () => choices.Quiet ? GroundReports.ChecksBrief(report, choices.Style) : GroundReports.ChecksText(report, choices.Style), () => GroundReports.ChecksJson(report),
@@ -35,12 +36,13 @@ internal static class ChecksCommand
         return ExitCode.Done;
     }
 
-    private static ComplaintWords Ask(TextReader input, TextWriter prompts)
+    private static ComplaintWords Ask(TextReader input, TextWriter prompts, ReportStyle style)
     {
-        string?[] answers = new string?[GroundReports.ComplaintQuestions.Length];
+        ImmutableArray<string> questions = GroundReports.ComplaintQuestions(style);
+        string?[] answers = new string?[questions.Length];
         for (int i = 0; i < answers.Length; i++)
         {
-            prompts.Write(GroundReports.ComplaintQuestions[i] + ": ");
+            prompts.Write(questions[i] + ": ");
             string? line = input.ReadLine()?.Trim();
             answers[i] = string.IsNullOrEmpty(line) ? null : line;
         }

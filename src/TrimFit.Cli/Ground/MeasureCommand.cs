@@ -23,7 +23,7 @@ internal static class MeasureCommand
     {
         string name = Path.GetFileName(path), text = InputFiles.Text(path);
         Rig earlier = RigFileReader.Read(path, text);
-        GroundReadings readings = Readings(choices, error, only: null);
+        GroundReadings readings = Readings(choices, common, error, only: null);
         if (!choices.EvenSo) // before the file's ranges speak: a slip by ten should be called that
             Refuse(name, EntryChecks.OfRepeats(readings.Repeats), common, NothingWritten);
         string written = RigFileEditor.Write(path, text, readings);
@@ -34,7 +34,7 @@ internal static class MeasureCommand
         OutputFiles.Write("--measure", path, written);
         foreach (GroundFault fault in faults)
             error.WriteLine($"{name}: {GroundReports.Sentence(fault, common.Style)}");
-        output.WriteLine(GroundReports.Written(name, readings.Keys.Count()));
+        output.WriteLine(GroundReports.Written(name, readings.Keys.Count(), common.Style));
         return ExitCode.Done;
     }
 
@@ -48,7 +48,7 @@ internal static class MeasureCommand
         (Adjustment adjustment, double travel) = choices.Moved!.Value;
         if (!adjustment.AppliesTo(rig))
             throw new CommandLineException($"--moved: this machine has no {CommandWords.Of(adjustment.Kind)}.");
-        GroundReadings readings = Readings(choices, error, MeasureGroup.HangCheck);
+        GroundReadings readings = Readings(choices, common, error, MeasureGroup.HangCheck);
         Rig after = RigFileReader.Read(path, RigFileEditor.Write(path, text, readings));
         // The file's tape is that of before the change, so only what the new readings say about themselves counts.
         ImmutableArray<GroundFault> faults =
@@ -92,7 +92,7 @@ internal static class MeasureCommand
             OutputFiles.Write("--sheet", path, GroundPage.Sheet(kind, rig, common.Style));
     }
 
-    private static GroundReadings Readings(MeasureChoices choices, TextWriter error, MeasureGroup? only)
+    private static GroundReadings Readings(MeasureChoices choices, CommonChoices common, TextWriter error, MeasureGroup? only)
     {
         GroundReadings readings = choices.Readings;
         bool ask = choices.ReadingsFile == "-" || (choices.ReadingsFile is null && readings.IsEmpty && !Console.IsInputRedirected);
@@ -104,7 +104,7 @@ internal static class MeasureCommand
             readings = all;
         }
         if (ask)
-            MeasureDialogue.Ask(readings, Console.In, error, only);
+            MeasureDialogue.Ask(readings, Console.In, error, common.Style, only);
         if (readings.IsEmpty)
             throw new CommandLineException("no reading: give --reading NAME=V,V,V, --readings FILE, or answer the questions on a terminal.");
         return readings;

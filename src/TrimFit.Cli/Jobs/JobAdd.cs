@@ -117,7 +117,11 @@ internal static class JobAdd
     /// <summary>What a result measured, as the book keeps it.</summary>
     public static IEnumerable<SensitivityRecord> Records(IEnumerable<MeasuredSensitivity> measured) => measured.Select(m => new SensitivityRecord
     {
-        Source = m.Source, LogMedian = m.LogMedian, LogSd = m.LogSd, WingAreaM2 = m.WingAreaM2, SuspendedKg = m.SuspendedKg,
+        Source = m.Source,
+        LogMedian = m.LogMedian,
+        LogSd = m.LogSd,
+        WingAreaM2 = m.WingAreaM2,
+        SuspendedKg = m.SuspendedKg,
     });
 
     /// <summary>Stands between the words of two options: names of columns may hold anything else.</summary>

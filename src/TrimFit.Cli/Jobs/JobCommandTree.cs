@@ -24,8 +24,14 @@ internal static class JobCommandTree
         own.Add(command);
         command.SetAction(parsed => JobWork.Open(own.Choices(parsed), new()
         {
-            Number = 0, Uid = "", Opened = default, Complaint = parsed.GetValue(complaint)!, Machine = parsed.GetValue(machine)!, Customer = parsed.GetValue(customer) ?? "",
-            Wing = parsed.GetValue(wing) ?? "", WingId = parsed.GetValue(wingId) ?? "",
+            Number = 0,
+            Uid = "",
+            Opened = default,
+            Complaint = parsed.GetValue(complaint)!,
+            Machine = parsed.GetValue(machine)!,
+            Customer = parsed.GetValue(customer) ?? "",
+            Wing = parsed.GetValue(wing) ?? "",
+            WingId = parsed.GetValue(wingId) ?? "",
         }, parsed.GetValue(rig), parsed.GetValue(note), output));
         return command;
     }

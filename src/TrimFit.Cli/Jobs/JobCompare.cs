@@ -38,7 +38,11 @@ internal static class JobCompare
             TrimAnalysis analysis = TrimAnalysis.Run(import.Flight, rig, trim, import.Legs.AsSpan());
             fits.Add(new()
             {
-                Analysis = analysis, Import = import, RigFile = JobAdd.Source(rigFile), SheetFile = sheet is null ? null : JobAdd.Source(sheet), Provenance = ProgramVersion.Provenance,
+                Analysis = analysis,
+                Import = import,
+                RigFile = JobAdd.Source(rigFile),
+                SheetFile = sheet is null ? null : JobAdd.Source(sheet),
+                Provenance = ProgramVersion.Provenance,
             });
             FlightSheet? read = sheet is null ? null : KeptFlight.ReadSheet(sheet);
             compared.Add(new()

@@ -24,7 +24,7 @@ internal static class JobExchange
             bundle = JobZip.Read(Path.GetFileName(path), zip, mostBytes);
         using JobBook book = choices.Open(BookAccess.Create);
         JobRecord job = book.Import(bundle);
-        output.Write(JobReportText.Imported(job.Number, bundle.Job.Number));
+        output.Write(JobReportText.Imported(job.Number, bundle.Job.Number, choices.Common.Style));
         return ExitCode.Done;
     }
 
@@ -32,9 +32,9 @@ internal static class JobExchange
     {
         using JobBook book = choices.Open(BookAccess.Write);
         if (!yes)
-            throw new CommandLineException(JobReportText.AskDelete(book.Job(number)));
+            throw new CommandLineException(JobReportText.AskDelete(book.Job(number), choices.Common.Style));
         DeletedJob gone = book.Delete(number);
-        output.Write(JobReportText.Deleted(number, gone.Flights, gone.Contents, gone.RoomGivenBack));
+        output.Write(JobReportText.Deleted(number, gone.Flights, gone.Contents, gone.RoomGivenBack, choices.Common.Style));
         return ExitCode.Done;
     }
 }

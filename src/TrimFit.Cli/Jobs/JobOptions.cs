@@ -70,7 +70,7 @@ internal sealed record JobChoices(string Book, bool BookIsDefault, CommonChoices
     {
         JobBook book = JobBook.Open(Book, access, Now);
         if (BookIsDefault && !Common.Quiet)
-            Error.Write(TrimFit.Reporting.Jobs.JobReportText.BookAt(Book));
+            Error.Write(TrimFit.Reporting.Jobs.JobReportText.BookAt(Book, Common.Style));
         return book;
     }
 }

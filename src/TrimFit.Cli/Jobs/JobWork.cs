@@ -118,7 +118,12 @@ internal static class JobWork
         ImmutableArray<ReadingRecord> readings = readingTexts.Length > 0 ? [.. readingTexts.SelectMany(Records)] : RigReadings.Of(ReadRig(RigOf(book, setup)));
         SignatureRecord signature = book.AddSignature(number, new SignatureRecord
         {
-            Made = default, Name = name.Trim(), Date = date, Setup = setup.Number, Readings = readings, Note = note ?? "",
+            Made = default,
+            Name = name.Trim(),
+            Date = date,
+            Setup = setup.Number,
+            Readings = readings,
+            Note = note ?? "",
         }, JobChoices.Now);
         output.Write(choices.Common.Json == "-" ? JobText.Write(book.Job(number)) : JobReportText.Kept(new JobEvent.SignedOff(signature), number, choices.Common.Style));
         return ExitCode.Done;

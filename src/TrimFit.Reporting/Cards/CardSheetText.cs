@@ -14,10 +14,13 @@ public static class CardSheetText
 
     /// <summary>Writes the sheet; start and end are left to be filled in.</summary>
     /// <param name="report">The card.</param>
-    public static string Empty(CardReport report)
+    /// <param name="style">Language of its comments; English when null.</param>
+    public static string Empty(CardReport report, ReportStyle? style = null)
     {
         ArgumentNullException.ThrowIfNull(report);
-        CardWords words = Words.English.Card;
+        style ??= new();
+        CardWords words = style.Words.Card;
+        var numbers = new Numbers(style);
         var text = new StringBuilder();
         foreach (string line in words.SheetHead(report.Plan, report.Rig))
             text.Append("# ").Append(line).Append('\n');
@@ -25,7 +28,7 @@ public static class CardSheetText
         foreach (CardLeg leg in report.Plan.Legs)
         {
             int start = (int)Math.Round(leg.StartSec), end = (int)Math.Round(leg.EndSec);
-            text.Append(CultureInfo.InvariantCulture, $"\n# {leg.Number}. {start / 60}:{start % 60:00} to {end / 60}:{end % 60:00}  {words.Say(leg, report.Rig, Numbers.Invariant)}\n");
+            text.Append(CultureInfo.InvariantCulture, $"\n# {leg.Number}. {start / 60}:{start % 60:00}{style.Words.Labels.To}{end / 60}:{end % 60:00}  {words.Say(leg, report.Rig, numbers)}\n");
             text.Append("[[leg]]\n# start = \n# end = \n");
             foreach (string line in Keys(leg, report.Rig))
                 text.Append(line).Append('\n');

@@ -21,14 +21,14 @@ public static class SpeakingCardData
         if (report.Plan.Legs.IsEmpty)
             throw new ArgumentException("has no legs", nameof(report));
         var numbers = new Numbers(style);
-        CardWords words = Words.English.Card;
+        CardWords words = style.Words.Card;
         var data = new SpeakingJson
         {
             Name = report.Rig.Name,
-            Language = Words.English.Language,
+            Language = style.Words.Language,
             Texts = new(words.Speaking),
             Answer = words.Answer(report.Plan, numbers),
-            Cautions = [.. CardDocument.CautionsOf(report.Plan).Select(c => Words.English.Caution(c, numbers))],
+            Cautions = [.. CardDocument.CautionsOf(report.Plan).Select(c => style.Words.Caution(c, numbers))],
             Rules = [.. words.Rules(report.Plan, numbers)],
             Legs = [.. report.Plan.Legs.Select(l => new SpeakingLegJson
             {

@@ -56,7 +56,7 @@ internal static class CompareDocument
             FitDocument.Sensitivity(document, next.Sensitivity, numbers);
         document.Heading(words.Labels.Warnings);
         document.List([
-            .. report.Flights.SelectMany((f, i) => f.Import.Diagnostics.Warnings.Select(n => $"{c.Flights[i].Name}: {n.Message}")),
+            .. report.Flights.SelectMany((f, i) => f.Import.Diagnostics.Warnings.Select(n => $"{c.Flights[i].Name}: {words.Said(n.Message, numbers)}")),
             .. c.Next is TrimAnalysis a ? a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers)).Distinct() : []]);
         document.Paragraph($"{words.Labels.ProgramVersion} {report.Provenance.ProgramVersion}.");
         document.Cautions(c.Next is TrimAnalysis last ? Cautions.Of(last) : Cautions.For(CautionPlaces.Everywhere), numbers);
@@ -72,7 +72,7 @@ internal static class CompareDocument
         List<TableColumn> columns = [new(l.Power, false)];
         if (newtons)
             columns.Add(new($"{l.Thrust} {numbers.ForceUnit}"));
-        columns.AddRange([new($"{h.Before} deg/s"), new(l.Range95), new($"{h.After} deg/s"), new(l.Range95), new($"{h.Change} deg/s"), new(l.Range95), new(h.Inside, false)]);
+        columns.AddRange([new($"{h.Before} {numbers.RateUnit}"), new(l.Range95), new($"{h.After} {numbers.RateUnit}"), new(l.Range95), new($"{h.Change} {numbers.RateUnit}"), new(l.Range95), new(h.Inside, false)]);
         document.Table(columns, c.Changes.Select(x =>
         {
             List<string> row = [document.Words.Setting(x.Setting)];
@@ -148,7 +148,7 @@ internal static class CompareDocument
                 string Show(double rad) => numbers.Significant(double.RadiansToDegrees(rad) * scale, 3);
                 ConfidenceInterval i = x.Change.Interval(0.95);
                 return (IReadOnlyList<string>)[words.Coefficient(x.Name), Show(x.Before.Mean), Show(x.After.Mean), Show(x.Change.Mean), Show(i.Lower) + l.To + Show(i.Upper),
-                    FitFacts.UnitOf(x.Name, c.ThrustBasis, brake, brake)];
+                    words.UnitName(FitFacts.UnitOf(x.Name, c.ThrustBasis, brake, brake))];
             }));
     }
 }

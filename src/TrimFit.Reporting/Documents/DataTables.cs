@@ -36,7 +36,7 @@ internal static class DataTables
             columns.Add(new(l.ClockShift));
         document.Table(columns, diagnostics.Files.Select(f =>
         {
-            List<string> row = [f.Name, f.Format, numbers.Integer(f.RowsRead), numbers.Integer(f.LeftOut.Sum(x => x.Rows))];
+            List<string> row = [f.Name, document.Words.Said(f.Format, numbers), numbers.Integer(f.RowsRead), numbers.Integer(f.LeftOut.Sum(x => x.Rows))];
             if (clocks)
                 row.Add(f.ClockOffsetSec is double s ? numbers.Plain(s, 2) : "-");
             return (IReadOnlyList<string>)row;
@@ -53,7 +53,7 @@ internal static class DataTables
             columns.Insert(0, new(l.File, false));
         document.Table(columns, diagnostics.Files.SelectMany(f => f.Columns.Where(c => !usedOnly || c.Role is not null).Select(c =>
         {
-            List<string> row = [c.Name, c.Role is ChannelRole role ? ChannelRoles.NameOf(role) : l.NotUsed, c.Unit, c.Basis, numbers.Integer(c.Missing)];
+            List<string> row = [c.Name, c.Role is ChannelRole role ? ChannelRoles.NameOf(role) : l.NotUsed, c.Unit, document.Words.Said(c.Basis, numbers), numbers.Integer(c.Missing)];
             if (several)
                 row.Insert(0, f.Name);
             return (IReadOnlyList<string>)row;

@@ -57,7 +57,7 @@ internal static class FitDocument
         AssumptionTable(document, a.Assumptions, numbers);
         document.Heading(labels.Warnings);
         document.List([
-            .. report.Import.Diagnostics.Warnings.Select(n => n.Message),
+            .. report.Import.Diagnostics.Warnings.Select(n => words.Said(n.Message, numbers)),
             .. a.RigReport.GroundFaults.Select(f => words.Ground.Fault(f, numbers)),
             .. a.Warnings.Where(f => !a.Verdict.Reasons.Any(r => r.Code == f.Code)).Select(f => words.Finding(f, numbers))]); // reasons stand above
         if (figures)
@@ -182,7 +182,7 @@ internal static class FitDocument
             columns.Add(new($"{l.Thrust} {numbers.ForceUnit}"));
         columns.AddRange([new(l.ThrustFraction), new(l.TurnRate), new(l.Range95)]);
         if (held)
-            columns.Add(new($"{l.HeldBrake} {ControlUnits.Name(brake)}"));
+            columns.Add(new($"{l.HeldBrake} {words.UnitName(ControlUnits.Name(brake))}"));
         document.Table(columns, a.Pull.At.Select(p =>
         {
             List<string> row = [words.Setting(p.Setting)];
@@ -274,13 +274,13 @@ internal static class FitDocument
                 ConfidenceInterval? i = c.Estimate is Estimate e ? a.Fit.Interval95(e) : null;
                 return (IReadOnlyList<string>)[words.Coefficient(c.Name), Show(c.Estimate?.Value),
                     i is ConfidenceInterval k ? Show(k.Lower) + l.To + Show(k.Upper) : "-",
-                    FitFacts.UnitOf(c.Name, a.Fit.ThrustBasis, brake, trimmer), c.Reason];
+                    words.UnitName(FitFacts.UnitOf(c.Name, a.Fit.ThrustBasis, brake, trimmer)), words.Said(c.Reason, numbers)];
             }));
         List<string> items = [$"{l.Method}: {words.Method(a.Fit.Method)}"];
         if (a.Fit.LagSec is double lag)
             items.Add($"{l.Lag}: {numbers.Plain(lag, 2)} s");
         if (a.Fit.DisturbanceRmsRadPerSec is double rms)
-            items.Add($"{l.SlowDisturbance}: {numbers.Plain(double.RadiansToDegrees(rms), 2)} deg/s" + (a.Fit.DisturbanceTauSec is double tau ? $", {numbers.Plain(tau, 1)} s" : ""));
+            items.Add($"{l.SlowDisturbance}: {numbers.Plain(double.RadiansToDegrees(rms), 2)} {numbers.RateUnit}" + (a.Fit.DisturbanceTauSec is double tau ? $", {numbers.Plain(tau, 1)} s" : ""));
         items.Add($"{l.EffectiveSamples}: {Finite(a.Fit.EffectiveSamples, numbers, 2, l)}");
         items.Add($"{l.Condition}: {Finite(a.Fit.Condition, numbers, 3, l)}");
         items.Add(words.CrossCheck(FitFacts.CrossCheckAgrees(a)));
@@ -318,7 +318,7 @@ internal static class FitDocument
         DataTables.Columns(document, report.Import.Diagnostics, numbers, usedOnly: true);
         document.Heading(l.SpansLeftOut);
         document.Table([new(l.From), new(l.Until), new(l.Reason, false)], report.Analysis.Fit.SpansLeftOut.Select(s => (IReadOnlyList<string>)
-            [numbers.Plain(s.StartSec, 1), numbers.Plain(s.EndSec, 1), s.Reason]));
+            [numbers.Plain(s.StartSec, 1), numbers.Plain(s.EndSec, 1), words.Said(s.Reason, numbers)]));
         document.Paragraph($"{l.ProgramVersion} {report.Provenance.ProgramVersion}.");
     }
 
@@ -336,7 +336,7 @@ internal static class FitDocument
             bool length = x.Unit == "mm" && numbers.Imperial;
             string Show(double v) => length ? numbers.LengthNumber(v / 1000) : numbers.Significant(v, 3);
             return (IReadOnlyList<string>)[words.Assumption(x.Name), Show(x.Value), x.Low95 < x.High95 ? Show(x.Low95) + l.To + Show(x.High95) : "-",
-                length ? numbers.LengthUnit : x.Unit == "1" ? "" : x.Unit];
+                length ? numbers.LengthUnit : x.Unit == "1" ? "" : words.UnitName(x.Unit)];
         }));
     }
 }

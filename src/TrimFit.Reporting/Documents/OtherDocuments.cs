@@ -16,7 +16,7 @@ internal static class InspectDocument
         DataTables.Files(document, report.Import.Diagnostics, numbers);
         DataTables.Columns(document, report.Import.Diagnostics, numbers, usedOnly: false);
         document.Heading(l.Warnings);
-        document.List([.. report.Import.Diagnostics.Warnings.Select(n => n.Message), .. report.Findings.Select(f => words.Finding(f, numbers))]);
+        document.List([.. report.Import.Diagnostics.Warnings.Select(n => words.Said(n.Message, numbers)), .. report.Findings.Select(f => words.Finding(f, numbers))]);
         document.Cautions(Cautions.For(CautionPlaces.Everywhere), numbers);
         return document.Build(l.InspectTitle, string.Join(", ", report.Import.Diagnostics.Files.Select(f => f.Name)));
     }

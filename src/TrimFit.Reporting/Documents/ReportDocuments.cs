@@ -7,34 +7,34 @@ public static class ReportDocuments
 {
     /// <summary>The report of <c>fit</c>.</summary>
     /// <param name="report">The result.</param>
-    /// <param name="style">Units and culture.</param>
+    /// <param name="style">Units, culture and language.</param>
     /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
     public static ReportDocument Fit(FitReport report, ReportStyle style, bool figures)
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return FitDocument.Build(report, Words.English, new Numbers(style), figures);
+        return FitDocument.Build(report, style.Words, new Numbers(style), figures);
     }
 
     /// <summary>The report of <c>inspect</c>.</summary>
     /// <param name="report">The result.</param>
-    /// <param name="style">Units and culture.</param>
+    /// <param name="style">Units, culture and language.</param>
     public static ReportDocument Inspect(InspectReport report, ReportStyle style)
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return InspectDocument.Build(report, Words.English, new Numbers(style));
+        return InspectDocument.Build(report, style.Words, new Numbers(style));
     }
 
     /// <summary>The report of <c>rig</c>.</summary>
     /// <param name="report">The result.</param>
-    /// <param name="style">Units and culture.</param>
+    /// <param name="style">Units, culture and language.</param>
     /// <param name="figures">Whether figures are drawn; the terminal shows none.</param>
     public static ReportDocument Rig(RigSheetReport report, ReportStyle style, bool figures)
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return RigDocument.Build(report, Words.English, new Numbers(style), figures);
+        return RigDocument.Build(report, style.Words, new Numbers(style), figures);
     }
 
     /// <summary>The report of <c>compare</c>.</summary>
@@ -45,7 +45,7 @@ public static class ReportDocuments
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return CompareDocument.Build(report, Words.English, new Numbers(style), figures);
+        return CompareDocument.Build(report, style.Words, new Numbers(style), figures);
     }
 
     /// <summary>A test card.</summary>
@@ -55,7 +55,7 @@ public static class ReportDocuments
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return CardDocument.Build(report, Words.English, new Numbers(style));
+        return CardDocument.Build(report, style.Words, new Numbers(style));
     }
 
     /// <summary>The page a workshop hands over.</summary>
@@ -65,7 +65,7 @@ public static class ReportDocuments
     {
         ArgumentNullException.ThrowIfNull(page);
         ArgumentNullException.ThrowIfNull(style);
-        return CustomerDocument.Build(page, Words.English, new Numbers(style));
+        return CustomerDocument.Build(page, style.Words, new Numbers(style));
     }
 
     /// <summary>What a flight's result can fill into the page a workshop hands over.</summary>
@@ -75,6 +75,6 @@ public static class ReportDocuments
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return CustomerDocument.Of(report, Words.English, new Numbers(style));
+        return CustomerDocument.Of(report, style.Words, new Numbers(style));
     }
 }

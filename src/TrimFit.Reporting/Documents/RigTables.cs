@@ -63,7 +63,7 @@ internal static class RigTables
         string sign = perSi > 0 ? "+" : "";
         return unit switch
         {
-            TravelUnit.Radian => $"{sign}{numbers.Length(perSi * double.DegreesToRadians(1))}/deg",
+            TravelUnit.Radian => $"{sign}{numbers.Length(perSi * double.DegreesToRadians(1))}/{numbers.AngleUnit}",
             TravelUnit.Kilogram => $"{sign}{numbers.Length(perSi)}/kg",
             _ => sign + numbers.Plain(perSi, 3),
         };

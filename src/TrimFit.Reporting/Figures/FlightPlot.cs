@@ -31,7 +31,7 @@ internal static class FlightPlot
         }
         if (signals.HasBrakes)
         {
-            Plot plot = Panel(analysis, l, numbers, $"{l.AxisBrake} [{ControlUnits.Name(brake)}]", last: false);
+            Plot plot = Panel(analysis, l, numbers, $"{l.AxisBrake} [{words.UnitName(ControlUnits.Name(brake))}]", last: false);
             double scale = ControlUnits.ShownPerSi(brake);
             List<(double Min, double V)> values = Binned(signals, i => signals.BrakeDifference[i] * scale);
             Lines(plot, values, Palette.Green, 1.8f);

@@ -53,7 +53,7 @@ internal static class RigDrawing
         if (after is not null)
         {
             string both = Square(4, 0, false) + Invariant($"<path d=\"M14 0H18\" stroke=\"{Palette.Vermilion}\" stroke-width=\"2\"/>") + Square(28, 0, true);
-            LegendLine(svg, -half + 14, legendTop + (legend.Length * LegendRow), both, $"{l.Now} (filled), {l.After} (outlined)");
+            LegendLine(svg, -half + 14, legendTop + (legend.Length * LegendRow), both, $"{l.NowFilled}, {l.AfterOutlined}");
         }
         CloseUp(svg, rows, half, closeTop, words, numbers);
         return svg.Append("</g>\n</svg>").ToString();

@@ -22,7 +22,7 @@ public static class GroundReports
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return Brief($"{Words.English.Ground.ChecksAnswer(report.Complaint)} {string.Join("; ", report.Checks.Select(c => Words.English.Ground.Cause(c.Cause)))}.", style);
+        return Brief($"{style.Words.Ground.ChecksAnswer(report.Complaint)} {string.Join("; ", report.Checks.Select(c => style.Words.Ground.Cause(c.Cause)))}.", style);
     }
 
     /// <summary>The verdict on a change in one sentence with the caution that stands everywhere.</summary>
@@ -30,7 +30,7 @@ public static class GroundReports
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return Brief(Words.English.Ground.Change(report.Change, Words.English.PartShort(report.Adjustment.Kind), new Numbers(style)), style);
+        return Brief(style.Words.Ground.Change(report.Change, style.Words.PartShort(report.Adjustment.Kind), new Numbers(style)), style);
     }
 
     /// <summary>Checks as Markdown.</summary>
@@ -96,25 +96,28 @@ public static class GroundReports
     }
 
     /// <summary>One fault as a sentence.</summary>
-    public static string Sentence(GroundFault fault, ReportStyle style) => Words.English.Ground.Fault(fault, new Numbers(style));
+    public static string Sentence(GroundFault fault, ReportStyle style) => style.Words.Ground.Fault(fault, new Numbers(style));
 
     /// <summary>What a reading is and how it is taken; the name is <c>table.key</c> of the rig file.</summary>
-    public static string Reading(string name) => Words.English.Ground.Reading(name);
+    public static string Reading(string name, ReportStyle? style = null) => WordsOf(style).Reading(name);
 
     /// <summary>Title of a sheet.</summary>
-    public static string Title(SheetKind kind) => Words.English.Ground.SheetTitle(kind);
+    public static string Title(SheetKind kind, ReportStyle? style = null) => WordsOf(style).SheetTitle(kind);
 
     /// <summary>What an empty answer means.</summary>
-    public static string SkipHint => Words.English.Ground.Labels.SkipHint;
+    public static string SkipHint(ReportStyle? style = null) => WordsOf(style).Labels.SkipHint;
+
+    /// <summary>What a yes-or-no question asks for.</summary>
+    public static string YesNo(ReportStyle? style = null) => WordsOf(style).Labels.YesNo;
 
     /// <summary>Questions of the complaint: side, when, since, changed, other wing.</summary>
-    public static ImmutableArray<string> ComplaintQuestions => [.. Enum.GetValues<ComplaintQuestion>().Select(Words.English.Ground.Question)];
+    public static ImmutableArray<string> ComplaintQuestions(ReportStyle? style = null) => [.. Enum.GetValues<ComplaintQuestion>().Select(WordsOf(style).Question)];
 
     /// <summary>What was written into the rig file.</summary>
-    public static string Written(string file, int readings) => Words.English.Ground.Written(file, readings);
+    public static string Written(string file, int readings, ReportStyle? style = null) => WordsOf(style).Written(file, readings);
 
     /// <summary>The hang check in one paragraph.</summary>
-    public static string HangCheck(HangCheckResult hang, LateralGeometry? tape, ReportStyle style) => Words.English.Ground.HangCheck(hang, tape, new Numbers(style));
+    public static string HangCheck(HangCheckResult hang, LateralGeometry? tape, ReportStyle style) => style.Words.Ground.HangCheck(hang, tape, new Numbers(style));
 
     internal static MessageJson[] Faults(ImmutableArray<GroundFault> faults) =>
         [.. faults.Select(f => new MessageJson(Snake.Of(f.Code.ToString()), Words.English.Ground.Fault(f, Numbers.Invariant)))];
@@ -143,7 +146,7 @@ public static class GroundReports
     {
         ArgumentNullException.ThrowIfNull(rig);
         ArgumentNullException.ThrowIfNull(style);
-        return SheetDocument.Build(kind, rig, Words.English, new Numbers(style));
+        return SheetDocument.Build(kind, rig, style.Words, new Numbers(style));
     }
 
     /// <summary>The checks of a complaint as a document.</summary>
@@ -151,7 +154,7 @@ public static class GroundReports
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return ChecksDocument.Build(report, Words.English, new Numbers(style));
+        return ChecksDocument.Build(report, style.Words, new Numbers(style));
     }
 
     /// <summary>The proof of a change as a document.</summary>
@@ -159,7 +162,7 @@ public static class GroundReports
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        Words words = Words.English;
+        Words words = style.Words;
         var numbers = new Numbers(style);
         var document = new DocumentBuilder(words);
         document.Answer(words.Ground.Change(report.Change, words.PartShort(report.Adjustment.Kind), numbers));
@@ -170,7 +173,9 @@ public static class GroundReports
         return document.Build(words.Ground.Labels.HangCheck, words.PartShort(report.Adjustment.Kind));
     }
 
-    private static string Brief(string sentence, ReportStyle style) => sentence + "\n" + Words.English.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
+    private static string Brief(string sentence, ReportStyle style) => sentence + "\n" + style.Words.Caution(CautionCode.Estimate, new Numbers(style)) + "\n";
+
+    private static GroundWords WordsOf(ReportStyle? style) => (style?.Words ?? Words.English).Ground;
 
     private static IEnumerable<CautionCode> ChangeCautions(HangChangeReport report) =>
         Wording.Cautions.For(CautionPlaces.HangCheckSheet | Wording.Cautions.PlacesOf([report.Adjustment.Kind]));

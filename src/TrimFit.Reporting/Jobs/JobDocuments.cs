@@ -16,7 +16,7 @@ public static class JobDocuments
     {
         ArgumentNullException.ThrowIfNull(report);
         ArgumentNullException.ThrowIfNull(style);
-        return Job(report, Words.English, new Numbers(style));
+        return Job(report, style.Words, new Numbers(style));
     }
 
     /// <summary>What a job can fill into the page a workshop hands over.</summary>
@@ -28,7 +28,7 @@ public static class JobDocuments
         ArgumentNullException.ThrowIfNull(style);
         var numbers = new Numbers(style);
         JobRecord job = report.Job;
-        JobWords w = Words.English.Jobs;
+        JobWords w = style.Words.Jobs;
         ResultRecord[] fits = [.. job.Results.Where(r => r.Kind == ResultRecord.FitKind)];
         SignatureRecord? signature = job.IsSigned ? job.Signatures[^1] : null; // an older one is not for the machine as it is now
         return new()

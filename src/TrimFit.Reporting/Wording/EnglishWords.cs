@@ -126,7 +126,9 @@ internal sealed record EnglishWords : Words
         Cg = "CG",
         FlightDirection = "flight",
         Now = "now",
+        NowFilled = "now (filled)",
         After = "after",
+        AfterOutlined = "after (outlined)",
         TurnPlot = "Turn rate against thrust",
         FlightPlot = "The flight over time",
         AxisThrust = "thrust",
@@ -539,6 +541,10 @@ internal sealed record EnglishWords : Words
 
     public override string RowsLeftOut(string file, RowsLeftOut left, Numbers numbers) =>
         $"{file}: {(left.Rows == 1 ? "1 row" : numbers.Integer(left.Rows) + " rows")} left out, first in line {numbers.Integer(left.FirstLine)}: {left.Reason}";
+
+    public override string Said(string text, Numbers numbers) => text;
+
+    public override string UnitName(string unit) => unit;
 
     public override string DrawingDescription(bool after) => after
         ? "The machine seen from above: frame's centre line, thrust line, riser carabiners, harness hang points and CG, now (filled) and after the rounded travel (outlined)."

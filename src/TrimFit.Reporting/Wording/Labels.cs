@@ -114,7 +114,9 @@ internal sealed record Labels
     public required string Cg { get; init; }
     public required string FlightDirection { get; init; }
     public required string Now { get; init; }
+    public required string NowFilled { get; init; }
     public required string After { get; init; }
+    public required string AfterOutlined { get; init; }
     public required string TurnPlot { get; init; }
     public required string FlightPlot { get; init; }
     public required string AxisThrust { get; init; }

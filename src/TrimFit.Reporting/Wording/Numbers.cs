@@ -13,10 +13,12 @@ internal sealed class Numbers
     private const double MetersPerMile = 1609.344;       // exact, same
 
     private readonly NumberFormatInfo _format;
+    private readonly Words _words;
 
     public Numbers(ReportStyle style)
     {
         Imperial = style.Units == UnitSystem.Imperial;
+        _words = style.Words;
         _format = (NumberFormatInfo)style.Culture.NumberFormat.Clone();
         _format.NegativeSign = "-"; // some cultures add direction marks or a typographic minus, which break columns and copying
         _format.NumberGroupSeparator = "";
@@ -26,10 +28,16 @@ internal sealed class Numbers
 
     public static Numbers Invariant { get; } = new(new ReportStyle());
 
-    public string LengthUnit => Imperial ? "in" : "mm";
+    public string LengthUnit => Unit(Imperial ? "in" : "mm");
     public string ForceUnit => Imperial ? "lbf" : "N";
     public string MassUnit => Imperial ? "lb" : "kg";
     public string SpeedUnit => Imperial ? "mph" : "m/s";
+    public string RateUnit => Unit("deg/s");
+    public string AngleUnit => Unit("deg");
+
+    /// <summary>What stands between whole and fraction.</summary>
+    public string DecimalMark => _format.NumberDecimalSeparator;
+
     public string MomentUnit => Imperial ? "lbf ft" : "N m";
 
     /// <summary>A plain number; never "-0".</summary>
@@ -59,7 +67,7 @@ internal sealed class Numbers
 
     public string Integer(long value) => value.ToString("D", _format);
 
-    public string Rate(double radPerSec) => RateNumber(radPerSec) + " deg/s";
+    public string Rate(double radPerSec) => RateNumber(radPerSec) + " " + RateUnit;
     public string RateNumber(double radPerSec) => Plain(double.RadiansToDegrees(radPerSec), 1);
 
     public string Length(double m) => LengthNumber(m) + " " + LengthUnit;
@@ -68,7 +76,7 @@ internal sealed class Numbers
     public string LengthNumber(double m) => Imperial ? Plain(m / PhysicalConstants.MetersPerInch, 2) : Plain(m * 1000, 0);
 
     /// <summary>A travel of an adjustment, without its sign: millimetres, degrees or kilograms as its kind is set.</summary>
-    public string Travel(double value, TravelUnit unit) => TravelNumber(Math.Abs(value), unit) + " " + TravelUnitName(unit);
+    public string Travel(double value, TravelUnit unit) => With(TravelNumber(Math.Abs(value), unit), TravelUnitName(unit));
 
     public string TravelNumber(double value, TravelUnit unit) => unit switch
     {
@@ -77,10 +85,10 @@ internal sealed class Numbers
         _ => LengthNumber(value),
     };
 
-    public string TravelUnitName(TravelUnit unit) => unit switch { TravelUnit.Radian => "deg", TravelUnit.Kilogram => MassUnit, _ => LengthUnit };
+    public string TravelUnitName(TravelUnit unit) => unit switch { TravelUnit.Radian => AngleUnit, TravelUnit.Kilogram => MassUnit, _ => LengthUnit };
 
     /// <summary>A distance flown: kilometres or miles.</summary>
-    public string Distance(double m) => Imperial ? Plain(m / MetersPerMile, 1) + " miles" : Plain(m / 1000, 1) + " km";
+    public string Distance(double m) => Imperial ? Plain(m / MetersPerMile, 1) + " " + Unit("miles") : Plain(m / 1000, 1) + " km";
 
     public string Force(double n) => ForceNumber(n) + " " + ForceUnit;
     public string ForceNumber(double n) => Plain(ForceValue(n), 0);
@@ -93,7 +101,7 @@ internal sealed class Numbers
     public string MomentNumber(double nm) => Plain(Imperial ? nm / PhysicalConstants.NewtonsPerPoundForce / MetersPerFoot : nm, 1);
     /// <summary>Height above ground, in feet rounded up to tens so that a floor stays a floor.</summary>
     public string Height(double m) => Imperial ? Plain(10 * Math.Ceiling((m / MetersPerFoot / 10) - 1e-9), 0) + " ft" : Plain(m, 0) + " m";
-    public string Angle(double rad) => AngleNumber(rad) + " deg";
+    public string Angle(double rad) => With(AngleNumber(rad), AngleUnit);
     public string AngleNumber(double rad) => Plain(double.RadiansToDegrees(rad), 1);
     public string Percent(double fraction) => PercentNumber(fraction) + " %";
     public string PercentNumber(double fraction) => Plain(fraction * 100, 0);
@@ -112,7 +120,11 @@ internal sealed class Numbers
         return Imperial ? Plain(degPerM * PhysicalConstants.MetersPerInch, 2) : Plain(degPerM / 1000, 3);
     }
 
-    public string SensitivityUnit => Imperial ? "deg/s per in" : "deg/s per mm";
+    public string SensitivityUnit => Unit(Imperial ? "deg/s per in" : "deg/s per mm");
+
+    private string Unit(string unit) => _words.UnitName(unit);
+
+    private static string With(string number, string unit) => unit[0] == '°' ? number + unit : number + " " + unit; // ISO 80000-1, 7.1.4: no space before a degree sign
 
     /// <summary>Rate interval without unit, in brackets' content form: <c>0.9 to 3.3</c>, joined by the language's word.</summary>
     public string RateRange(ConfidenceInterval interval, string to) => RateNumber(interval.Lower) + to + RateNumber(interval.Upper);

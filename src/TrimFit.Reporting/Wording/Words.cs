@@ -9,6 +9,16 @@ internal abstract record Words
 {
     public static Words English { get; } = new EnglishWords();
 
+    private static readonly Words _german = new GermanWords();
+
+    /// <summary>The words of a language.</summary>
+    public static Words Of(ReportLanguage language) => language switch
+    {
+        ReportLanguage.English => English,
+        ReportLanguage.German => _german,
+        _ => throw new ArgumentOutOfRangeException(nameof(language), language, "is no language of reports"),
+    };
+
     /// <summary>BCP 47 tag, for the page's <c>lang</c>.</summary>
     public abstract string Language { get; }
 
@@ -124,6 +134,13 @@ internal abstract record Words
 
     /// <summary>Rows left out for one reason.</summary>
     public abstract string RowsLeftOut(string file, Core.Logs.RowsLeftOut left, Numbers numbers);
+
+    /// <summary>What the reader or the estimator said in a few words of English (why a row, a span or a coefficient is missing, what a file is,
+    /// a notice), in this language; the text itself where it is not known here, such as a name.</summary>
+    public abstract string Said(string text, Numbers numbers);
+
+    /// <summary>A unit that stands in a column of its own.</summary>
+    public abstract string UnitName(string unit);
 
     /// <summary>What the drawing of the rig shows, for those who cannot see it.</summary>
     public abstract string DrawingDescription(bool after);

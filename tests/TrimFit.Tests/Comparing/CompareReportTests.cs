@@ -11,7 +11,7 @@ namespace TrimFit.Tests.Comparing;
 
 public class CompareReportTests
 {
-    private static CompareReport Report(ComparisonOptions options, params ReadOnlySpan<ComparedFlight> flights)
+    internal static CompareReport Report(ComparisonOptions options, params ReadOnlySpan<ComparedFlight> flights)
     {
         FlightComparison c = FlightComparison.Run([.. flights], options with { WithNext = true, Trim = options.Trim with { Draws = 500 } });
         return new()

@@ -26,7 +26,14 @@ internal sealed class BookFolder : IDisposable
 
     public static JobRecord NewJob(string complaint = "pulls left at full power", string wingId = "W1") => new()
     {
-        Number = 0, Uid = "", Opened = default, Complaint = complaint, Machine = "Demo machine", Customer = "A. Pilot", Wing = "Demo wing 26", WingId = wingId,
+        Number = 0,
+        Uid = "",
+        Opened = default,
+        Complaint = complaint,
+        Machine = "Demo machine",
+        Customer = "A. Pilot",
+        Wing = "Demo wing 26",
+        WingId = wingId,
     };
 
     public static NewFlight NewFlight(int setup, string log, SensitivityRecord? sensitivity = null)
@@ -43,8 +50,17 @@ internal sealed class BookFolder : IDisposable
                 Inputs = [.. inputs, File(InputRecord.Rig, "rig.toml", "rig 1")],
                 Record = new()
                 {
-                    Number = 0, Made = default, Kind = ResultRecord.FitKind, Flight = 0, ProgramVersion = "0.1.0", Options = "--seed 1", Sha256 = "",
-                    Verdict = "power_pull", Strength = "weak", RateRadPerSec = -0.025, RateInterval95 = new ConfidenceInterval(-0.03, -0.02, 0.95),
+                    Number = 0,
+                    Made = default,
+                    Kind = ResultRecord.FitKind,
+                    Flight = 0,
+                    ProgramVersion = "0.1.0",
+                    Options = "--seed 1",
+                    Sha256 = "",
+                    Verdict = "power_pull",
+                    Strength = "weak",
+                    RateRadPerSec = -0.025,
+                    RateInterval95 = new ConfidenceInterval(-0.03, -0.02, 0.95),
                     Sensitivities = sensitivity is null ? [] : [sensitivity],
                 },
             },
@@ -64,8 +80,16 @@ internal sealed class BookFolder : IDisposable
         book.AddFlight(job, NewFlight(1, log, new() { Source = "ballast", LogMedian = 1.6, LogSd = 0.4, WingAreaM2 = 26, SuspendedKg = 118 }), At.AddMinutes(3));
         book.AddAdjustment(job, new()
         {
-            Number = 0, Made = default, FromSetup = 1, ToSetup = 0, Kind = AdjustmentKind.CarabinerPair, Travel = -0.0071, Recommended = -0.007, RecommendedBy = 1,
-            By = "T. Echnician", Readings = [new("carabiners.left_mm", -227.1), new("carabiners.right_mm", 212.9)],
+            Number = 0,
+            Made = default,
+            FromSetup = 1,
+            ToSetup = 0,
+            Kind = AdjustmentKind.CarabinerPair,
+            Travel = -0.0071,
+            Recommended = -0.007,
+            RecommendedBy = 1,
+            By = "T. Echnician",
+            Readings = [new("carabiners.left_mm", -227.1), new("carabiners.right_mm", 212.9)],
         }, File(InputRecord.Rig, "rig.toml", "rig 2"), At.AddMinutes(4));
         book.AddSignature(job, new() { Made = default, Name = "T. Echnician", Date = new(2026, 5, 17), Setup = 2, Readings = [new("carabiners.left_mm", -227.1)] }, At.AddMinutes(5));
         return job;

@@ -45,7 +45,7 @@ internal static class GroundDrawings
             case GroundDrawing.HangBack:
                 FromTheSide(s, l);
                 s.Line(60, 124, 236, 124, Sketch.Mark, 1.2, "4 3").Text(236, 136, l.Level, "end", 9, Sketch.Mark);
-                s.Path("M214 124 A154 154 0 0 0 212 101", Sketch.Mark, 1.8).Text(232, 116, "deg", "middle", 9, Sketch.Mark);
+                s.Path("M214 124 A154 154 0 0 0 212 101", Sketch.Mark, 1.8).Text(232, 116, "°", "middle", 9, Sketch.Mark);
                 s.Box(128, 96, 46, 8, Sketch.Mark, 1.4, "#fff").Circle(151, 100, 2.4, Sketch.Mark, 1.2);
                 break;
             case GroundDrawing.HangCheck:

@@ -51,6 +51,7 @@ internal sealed record EnglishGroundWords : GroundWords
         Machine = "machine",
         DateAndName = "date, name",
         SkipHint = "Empty line: not measured.",
+        YesNo = "(y/n)?",
     };
 
     public override GroundLabels Labels => _labels;

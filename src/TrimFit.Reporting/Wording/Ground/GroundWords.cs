@@ -137,4 +137,5 @@ internal sealed record GroundLabels
     public required string Machine { get; init; }
     public required string DateAndName { get; init; }
     public required string SkipHint { get; init; }
+    public required string YesNo { get; init; }
 }
