@@ -10,7 +10,7 @@ internal static class CommandTree
     {
         var root = new RootCommand("TrimFit measures a paramotor's pull to one side from an ordinary flight's log and says which part to move, which way and how far.")
         {
-            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error),
+            Inspect(output), Fit(output, error), Compare(output, error), Rig(output, error), Card(output, error), Synth(error), Batch(output, error), JobCommandTree.Create(output, error), Serve(output, error),
         };
         return root;
     }
@@ -134,6 +134,27 @@ internal static class CommandTree
             return BatchCommand.Run(BatchFlight.From(patterns, parsed.GetValue(rig)!), parsed.GetValue(folder)!, CommonOptions.Threads(parsed.GetValue(threads)),
                 common.Choices(parsed), output, error);
         });
+        return command;
+    }
+
+    private static Command Serve(TextWriter output, TextWriter error)
+    {
+        var port = new Option<string?>("--port") { Description = $"Port ({Web.WebOptions.UsualPort}, or any free one when it is taken).", HelpName = "N" };
+        var noBrowser = new Option<bool>("--no-browser") { Description = "Only print the address." };
+        var listen = new Option<string?>("--listen") { Description = "Another address of this machine, to be reached from other machines; needs a token.", HelpName = "ADDRESS" };
+        var token = new Option<string?>("--token") { Description = "Who opens the page must know it; a random one is made for --listen.", HelpName = "TEXT" };
+        var book = new Option<string?>("--book") { Description = "The job book.", HelpName = "FILE" };
+        var noBook = new Option<bool>("--no-book") { Description = "Without a job book." };
+        var command = new Command("serve", "The same work in a local web page, on this machine only.") { port, noBrowser, listen, token, book, noBook };
+        command.SetAction(parsed => ServeCommand.Run(new ServeRequest
+        {
+            Port = parsed.GetValue(port),
+            NoBrowser = parsed.GetValue(noBrowser),
+            Listen = parsed.GetValue(listen),
+            Token = parsed.GetValue(token),
+            Book = parsed.GetValue(book),
+            NoBook = parsed.GetValue(noBook),
+        }, output, error));
         return command;
     }
 

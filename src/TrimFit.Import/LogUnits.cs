@@ -99,6 +99,9 @@ public static class LogUnits
         return TryParseRange(simple, out unit);
     }
 
+    /// <summary>Names of the units that fit a role, in the table's order.</summary>
+    public static IEnumerable<string> NamesFor(ChannelRole role) => _table.Select(row => row.Unit).Where(unit => Fits(role, unit)).Select(unit => unit.Name);
+
     /// <summary>Whether a word beside a name or unit says from where a value is, not in what unit: <c>msl</c>, <c>WGS84</c>, <c>utc</c>.</summary>
     internal static bool IsRemark(string word) =>
         word.ToLowerInvariant() is "msl" or "amsl" or "agl" or "baro" or "gps" or "gnss" or "wgs" or "wgs84" or "true" or "mag" or "utc" or "local" or "txt" or "text";

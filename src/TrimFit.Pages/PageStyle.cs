@@ -9,6 +9,12 @@ internal static class PageStyle
 
     private static readonly string _fonts = Face("DejaVuSans-latin.woff2", 400) + Face("DejaVuSans-Bold-latin.woff2", 700);
 
+    /// <summary>The sheet without its fonts.</summary>
+    public static string Sheet => _sheet;
+
+    /// <summary>The fonts by themselves.</summary>
+    public static string Fonts => _fonts;
+
     public static string For(PageOptions options)
     {
         string paper = options.Paper switch

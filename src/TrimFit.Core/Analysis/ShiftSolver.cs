@@ -138,25 +138,13 @@ internal static class ShiftSolver
         first = sign * Math.Floor((first / step) + 1e-9) * step;
 
         RigValues nominal = spread.Nominal, moved = effect.Moved(nominal, rounded), firstMoved = effect.Moved(nominal, first);
-        var ratio = new double[count];
-        double left = 0, right = 0, wrongSide = 0;
+        double wrongSide = 0;
         for (int k = 0; k < count; k++)
         {
-            if (!(posterior.Weight[k] > 0))
-                continue;
-            double sine = effect.TwistSineAtFull(k, rounded);
-            ratio[k] = Math.Abs(sine);
-            if (sine < 0)
-                left += posterior.Weight[k];
-            else
-                right += posterior.Weight[k];
-            if (travel[k] * sign < first * sign)
+            if (posterior.Weight[k] > 0 && travel[k] * sign < first * sign)
                 wrongSide += posterior.Weight[k];
         }
-        Span<double> ratios = stackalloc double[2];
-        WeightedQuantile.Of(ratio, posterior.Weight, [0.5, 0.975], ratios);
-        double high = ratios[1];
-        StaticState full = RigStatics.Solve(moved, nominal.FullThrustN);
+        StateAfterTravel after = After(effect, nominal, posterior, levels, signals, rounded, out double high);
         bool? within = limit is null || (limit.Min is null && limit.Max is null) ? null
             : !(rounded < limit.Min - 1e-9) && !(rounded > limit.Max + 1e-9);
         var notes = ImmutableArray.CreateBuilder<Finding>();
@@ -170,7 +158,6 @@ internal static class ShiftSolver
             notes.Add(Finding.Of(FindingCode.BeyondLimit, rounded < 0 ? limit!.Min ?? 0 : limit!.Max ?? 0));
         if (Math.Abs(moved.CarabinerSpacingM - nominal.CarabinerSpacingM) > 1e-9)
             notes.Add(Finding.Of(FindingCode.SpacingChanges, moved.CarabinerSpacingM));
-        bool newtons = signals.ThrustBasis == ThrustBasis.Newton;
         return new AdjustmentReport
         {
             Kind = adjustment.Kind,
@@ -181,20 +168,61 @@ internal static class ShiftSolver
             FirstStep = first,
             Efficiency = adjustment.CgOffsetPerTravel(nominal),
             ThrustLineOffsetM = moved.ThrustLineOffsetM,
-            TwistRatio = newtons ? ratios[0] : null,
-            TwistRatioHigh95 = newtons ? high : null,
-            TwistDirection = left > DirectionShare * (left + right) ? TwistDirection.Left
-                : right > DirectionShare * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
-            RiserLoadLeftN = newtons ? full.RiserLoadLeftN : null,
-            RiserLoadRightN = newtons ? full.RiserLoadRightN : null,
+            TwistRatio = after.TwistRatio,
+            TwistRatioHigh95 = after.TwistRatioHigh95,
+            TwistDirection = after.TwistDirection,
+            RiserLoadLeftN = after.RiserLoadLeftN,
+            RiserLoadRightN = after.RiserLoadRightN,
             HangCheckLeftKg = firstMoved.SuspendedKg * (0.5 - (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
             HangCheckRightKg = firstMoved.SuspendedKg * (0.5 + (firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM)),
             HangCheckPlusMinusKg = 1.96 * (RigHang.Of(rig)?.NextFlightSdM ?? LateralGeometry.Of(rig).StandardDeviation) * firstMoved.SuspendedKg / firstMoved.CarabinerSpacingM,
             HangCheckDifferenceKg = 2 * ((firstMoved.SuspendedKg * firstMoved.CgOffsetM / firstMoved.CarabinerSpacingM) - (nominal.SuspendedKg * nominal.CgOffsetM / nominal.CarabinerSpacingM)),
-            TurnLeftAt = TurnLeft(posterior, levels, signals, (k, fraction) => effect.TurnChange(k, fraction, rounded)),
+            TurnLeftAt = after.TurnLeftAt,
             WithinLimits = within,
             ProbabilityWrongSide = total > 0 ? wrongSide / total : 1,
             Notes = notes.ToImmutable(),
+        };
+    }
+
+    /// <summary>What a travel leaves: turn at each power, riser twist at full thrust, riser loads and hang check.</summary>
+    public static StateAfterTravel After(TravelEffect effect, in RigValues nominal, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, double travel) =>
+        After(effect, nominal, posterior, levels, signals, travel, out _);
+
+    /// <summary>The same, with the upper 95 % of |N|/k_chi, which screens want also where thrust is relative.</summary>
+    private static StateAfterTravel After(
+        TravelEffect effect, in RigValues nominal, TrimPosterior posterior, PowerLevels levels, TurnSignals signals, double travel, out double twistHigh95)
+    {
+        int count = posterior.Count;
+        var ratio = new double[count];
+        double left = 0, right = 0;
+        for (int k = 0; k < count; k++)
+        {
+            if (!(posterior.Weight[k] > 0))
+                continue;
+            double sine = effect.TwistSineAtFull(k, travel);
+            ratio[k] = Math.Abs(sine);
+            if (sine < 0)
+                left += posterior.Weight[k];
+            else
+                right += posterior.Weight[k];
+        }
+        Span<double> ratios = stackalloc double[2];
+        WeightedQuantile.Of(ratio, posterior.Weight, [0.5, 0.975], ratios);
+        twistHigh95 = ratios[1];
+        RigValues moved = effect.Moved(nominal, travel);
+        StaticState full = RigStatics.Solve(moved, nominal.FullThrustN);
+        bool newtons = signals.ThrustBasis == ThrustBasis.Newton;
+        return new StateAfterTravel
+        {
+            TurnLeftAt = TurnLeft(posterior, levels, signals, (k, fraction) => effect.TurnChange(k, fraction, travel)),
+            TwistRatio = newtons ? ratios[0] : null,
+            TwistRatioHigh95 = newtons ? ratios[1] : null,
+            TwistDirection = left > DirectionShare * (left + right) ? TwistDirection.Left
+                : right > DirectionShare * (left + right) ? TwistDirection.Right : TwistDirection.Unknown,
+            RiserLoadLeftN = newtons ? full.RiserLoadLeftN : null,
+            RiserLoadRightN = newtons ? full.RiserLoadRightN : null,
+            HangCheckLeftKg = moved.SuspendedKg * (0.5 - (moved.CgOffsetM / moved.CarabinerSpacingM)),
+            HangCheckRightKg = moved.SuspendedKg * (0.5 + (moved.CgOffsetM / moved.CarabinerSpacingM)),
         };
     }
 

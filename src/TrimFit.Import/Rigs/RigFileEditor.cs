@@ -44,8 +44,17 @@ public static class RigFileEditor
         return text;
     }
 
+    /// <summary>Sets one key, or takes it out when the value is null; nothing stays of the earlier line.</summary>
+    /// <param name="fileName">Name for messages; a folder in it is left out.</param>
+    /// <param name="text">The rig file.</param>
+    /// <param name="table">Table; empty for the top of the file.</param>
+    /// <param name="key">Key in it.</param>
+    /// <param name="toml">The value as TOML, or null.</param>
+    /// <exception cref="LogFormatException">The table is written in a form that cannot be edited line by line.</exception>
+    public static string Set(string fileName, string text, string table, string key, string? toml) => Edit(Path.GetFileName(fileName), text, table, key, toml, keepEarlier: false);
+
     /// <summary>Sets one key, or takes it out when the value is null; either way the earlier line stays as a comment.</summary>
-    private static string Edit(string file, string text, string tableName, string key, string? value)
+    private static string Edit(string file, string text, string tableName, string key, string? value, bool keepEarlier = true)
     {
         string newline = text.Contains("\r\n", StringComparison.Ordinal) ? "\r\n" : "\n";
         bool mark = text.StartsWith('\uFEFF');
@@ -58,7 +67,8 @@ public static class RigFileEditor
             throw LogFormatException.At(file, inline.Span.Start.Line + 1, null, $"{tableName} written in one line", $"a line [{tableName}] with its keys below it",
                 "Write it so, then measure again.");
         }
-        if (table?.Items.FirstOrDefault(k => k.Key!.ToString().Trim() == key) is KeyValueSyntax item)
+        IEnumerable<KeyValueSyntax> items = tableName.Length == 0 ? document.KeyValues : table?.Items.AsEnumerable() ?? [];
+        if (items.FirstOrDefault(k => k.Key!.ToString().Trim() == key) is KeyValueSyntax item)
         {
             int first = item.Key!.Span.Start.Line, last = item.Value!.Span.End.Line;
             string indent = lines[first][..(lines[first].Length - lines[first].TrimStart().Length)];
@@ -66,13 +76,17 @@ public static class RigFileEditor
             string old = string.Concat(lines.GetRange(first, last - first + 1))[item.Value.Span.Start.Column..];
             if (value is not null && SameValue(old[..(old.Length - (lines[last].Length - Math.Min(lines[last].Length, item.Value.Span.End.Column + 1)))], value))
                 return text;
-            IEnumerable<string> kept = lines.GetRange(first, last - first + 1).Select((l, i) => i == 0 ? $"{indent}# before: {l.Trim()}" : $"{indent}#   {l.Trim()}");
+            IEnumerable<string> kept = !keepEarlier ? [] : lines.GetRange(first, last - first + 1).Select((l, i) => i == 0 ? $"{indent}# before: {l.Trim()}" : $"{indent}#   {l.Trim()}");
             lines.RemoveRange(first, last - first + 1);
             lines.InsertRange(first, value is null ? kept : [.. kept, $"{indent}{key} = {value}{rest}"]);
         }
         else if (value is null)
         {
             return text;
+        }
+        else if (tableName.Length == 0)
+        {
+            lines.Insert(document.KeyValues.Any() ? document.KeyValues.Max(i => i.Value!.Span.End.Line) + 1 : 0, $"{key} = {value}");
         }
         else if (table is not null)
         {

@@ -598,7 +598,7 @@ internal sealed class RigTables
     }
 
     /// <summary>What each number may be. Wide enough for any paramotor or trike; a number outside is a slip of unit, sign or digit.</summary>
-    private static class Ranges
+    internal static class Ranges
     {
         private const string Millimetres = "Lengths of this key are in millimetres.", Kilograms = "Masses are in kilograms and never negative.";
 

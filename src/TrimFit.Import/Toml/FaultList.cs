@@ -8,6 +8,9 @@ internal sealed class FaultList(string file)
     /// <summary>File name without folder.</summary>
     public string File { get; } = file;
 
+    /// <summary>The faults in the order of the file.</summary>
+    public IEnumerable<(int? Line, string Message)> All => _faults.OrderBy(fault => fault.Line ?? 0);
+
     public bool Any => _faults.Count > 0;
 
     public int Count => _faults.Count;
@@ -22,7 +25,7 @@ internal sealed class FaultList(string file)
     public void ThrowIfAny()
     {
         if (Any)
-            throw new LogFormatException(string.Join('\n', _faults.OrderBy(fault => fault.Line ?? 0).Select(fault => fault.Line is int line
+            throw new LogFormatException(string.Join('\n', All.Select(fault => fault.Line is int line
                 ? FormattableString.Invariant($"{File}({line}): {fault.Message}")
                 : $"{File}: {fault.Message}")));
     }

@@ -157,6 +157,8 @@ internal sealed record EnglishWords : Words
 
     public override Labels Labels => _labels;
 
+    public override Web.WebWords Web { get; } = new Web.EnglishWebWords();
+
     public override ReportWords Report { get; } = new EnglishReportWords();
 
     public override CustomerWords Customer { get; } = new EnglishCustomerWords();

@@ -153,6 +153,9 @@ internal sealed record GermanWords : Words
 
     public override CardWords Card { get; } = new GermanCardWords();
 
+    /// <summary>The local page speaks English until its German class is written; nothing on it asks for German.</summary>
+    public override Web.WebWords Web { get; } = new Web.EnglishWebWords();
+
     public override JobWords Jobs { get; } = new GermanJobWords();
 
     public override ReportWords Report { get; } = new GermanReportWords();

@@ -42,6 +42,9 @@ internal abstract record Words
     /// <summary>Words of before and after.</summary>
     public abstract Comparing.CompareWords Comparing { get; }
 
+    /// <summary>Texts of the local web page.</summary>
+    public abstract Web.WebWords Web { get; }
+
     /// <summary>The job book.</summary>
     public abstract JobWords Jobs { get; }
 
