@@ -37,11 +37,18 @@ public static class RigFileEditor
     {
         ArgumentNullException.ThrowIfNull(fileName);
         ArgumentNullException.ThrowIfNull(text);
+        if (text.StartsWith('\uFEFF'))
+            return '\uFEFF' + WithoutHangCheck(fileName, text[1..]);
         DocumentSyntax document = SyntaxParser.Parse(text.ReplaceLineEndings("\n"), fileName, validate: true);
         string[] keys = [.. document.Tables.Where(t => t is TableSyntax && t.Name?.ToString().Trim() == "hang_check").SelectMany(t => t.Items).Select(i => i.Key!.ToString().Trim())];
         foreach (string key in keys)
             text = Edit(Path.GetFileName(fileName), text, "hang_check", key, null);
-        return text;
+        // The table's own line goes too: an empty hang check is a fault. Earlier lines were replaced one by one, so its place is found anew.
+        string newline = text.Contains("\r\n", StringComparison.Ordinal) ? "\r\n" : "\n";
+        string[] lines = text.ReplaceLineEndings("\n").Split('\n');
+        foreach (TableSyntaxBase table in SyntaxParser.Parse(string.Join('\n', lines), fileName, validate: true).Tables.Where(t => t is TableSyntax && t.Name?.ToString().Trim() == "hang_check"))
+            lines[table.Name!.Span.Start.Line] = "# before: " + lines[table.Name!.Span.Start.Line].Trim();
+        return string.Join(newline, lines);
     }
 
     /// <summary>Sets one key, or takes it out when the value is null; nothing stays of the earlier line.</summary>
