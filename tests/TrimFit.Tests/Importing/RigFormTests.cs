@@ -114,7 +114,8 @@ public class RigFormTests
             foreach ((double number, bool fits) in new[] { (field.Min!.Value, true), (field.Max!.Value, true), (field.Max!.Value + 1 + Math.Abs(field.Max.Value), false) })
             {
                 string text = RigForm.Write(File, RigForm.Empty, new Dictionary<string, string>(_least) { [field.Name] = number.ToString("R", System.Globalization.CultureInfo.InvariantCulture) }, out _);
-                bool own = RigForm.Check(File, text, out _).Any(f => f.Field == field.Name && f.Message.Contains("expected a number from", StringComparison.Ordinal));
+                // Beyond the range a field may have a fault of its own, such as a left carabiner on the right; at its ends it has none for the range.
+                bool own = RigForm.Check(File, text, out _).Any(f => f.Field == field.Name && (!fits || f.Message.Contains("expected a number from", StringComparison.Ordinal)));
                 Assert.True(own != fits, $"{field.Name} = {number}");
             }
         }
