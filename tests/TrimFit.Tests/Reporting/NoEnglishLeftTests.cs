@@ -14,11 +14,11 @@ public partial class NoEnglishLeftTests
     private static readonly string[] _shared =
     [
         "all", "also", "an", "ballast", "band", "browser", "format", "hand", "in", "lag", "last", "likelihood", "logger", "maximum", "minus", "motor", "name", "normal", "null", "pause", "person", "pilot", "position", "propeller", "propellers", "proportional",
-        "regression", "reserve", "sank", "so", "start", "still", "student", "tandem", "tank", "test", "tests", "trimmer", "trimmers", "version", "warm", "was", "wind",
+        "regression", "reserve", "sank", "so", "stand", "start", "still", "student", "tandem", "tank", "test", "tests", "trimmer", "trimmers", "version", "warm", "was", "wind",
     ];
 
     /// <summary>Names, units and abbreviations that are no English words.</summary>
-    private static readonly string[] _names = ["csv", "gps", "hartung", "hz", "javascript", "kg", "km", "knapp", "kw", "min", "mm", "ms", "rad", "sha", "trimfit", "utf"];
+    private static readonly string[] _names = ["csv", "gps", "hartung", "hz", "javascript", "kb", "kg", "km", "knapp", "kw", "mb", "min", "mm", "ms", "rad", "sha", "trimfit", "utc", "utf"];
 
     private static readonly Lazy<HashSet<string>> _english = new(EnglishVocabulary);
 
