@@ -104,7 +104,8 @@ internal static class CoverageStudy
             Of(scenario.SlopePerFull, fit[TurnCoefficient.Thrust], known?[TurnCoefficient.Thrust], scenario.FullThrust),
             Of(scenario.Brake, fit[TurnCoefficient.BrakeDifference], known?[TurnCoefficient.BrakeDifference], 1),
             fit.Convergence?.Converged ?? false,
-            fit.ResponseIsSecondOrder == secondOrder) { Fit = fit, Scenario = scenario };
+            fit.ResponseIsSecondOrder == secondOrder)
+        { Fit = fit, Scenario = scenario };
 
         Outcome? Of(double truth, Estimate? estimate, Estimate? yardstick, double scale) => estimate is Estimate e
             ? new(truth, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, yardstick is Estimate y ? y.Value * scale : double.NaN, yardstick is Estimate { StandardError: double se } ? se * scale : double.NaN)
@@ -124,7 +125,8 @@ internal static class CoverageStudy
             Of(flight.Truth.ThrustRadPerSecPerN, fit[TurnCoefficient.Thrust], flight.Truth.FullThrustN),
             Of(flight.Truth.BrakeRadPerSecPerM, fit[TurnCoefficient.BrakeDifference], 0.1), // per 100 mm
             fit.Convergence?.Converged ?? false,
-            fit.ResponseIsSecondOrder == secondOrder) { Fit = fit };
+            fit.ResponseIsSecondOrder == secondOrder)
+        { Fit = fit };
 
         Outcome? Of(double truth, Estimate? estimate, double scale) => estimate is Estimate e
             ? new(truth * scale, e.Value * scale, e.StandardError * scale, t * e.StandardError * scale, double.NaN, double.NaN)
